@@ -1,0 +1,27 @@
+process.env.TZ = 'UTC';
+
+/** @type {import('jest').Config} */
+module.exports = {
+  testEnvironment: 'node',
+  roots: ['<rootDir>/src', '<rootDir>/test'],
+  testRegex: '[.-]spec\\.ts$',
+  moduleNameMapper: {
+    '^@stubpost/shared$': '<rootDir>/../shared/src/index.ts',
+    '^@stubpost/shared/testing$': '<rootDir>/../shared/src/testing/index.ts',
+  },
+  transform: {
+    '^.+\\.ts$': [
+      '@swc/jest',
+      {
+        sourceMaps: 'inline',
+        module: { type: 'commonjs' },
+        jsc: {
+          target: 'es2022',
+          keepClassNames: true,
+          parser: { syntax: 'typescript', decorators: true },
+          transform: { legacyDecorator: true, decoratorMetadata: true, useDefineForClassFields: false },
+        },
+      },
+    ],
+  },
+};

@@ -1,0 +1,62 @@
+import { createRequire } from 'node:module';
+import { fileURLToPath } from 'node:url';
+import react from '@vitejs/plugin-react';
+import { defineConfig } from 'vitest/config';
+
+process.env['TZ'] = 'UTC';
+
+/**
+ * Zones whose clock rules travel with the timeline. The library's ready-made ten-year file turns wrong after its last
+ * year and its full file is ten times as large, so the wanted zones are cut out of the full one when we build.
+ */
+const ZONES = [
+  'America/Halifax',
+  'America/New_York',
+  'America/Toronto',
+  'America/Detroit',
+  'America/Chicago',
+  'America/Winnipeg',
+  'America/Denver',
+  'America/Edmonton',
+  'America/Phoenix',
+  'America/Los_Angeles',
+  'America/Vancouver',
+  'America/Anchorage',
+  'Pacific/Honolulu',
+];
+
+const packed = createRequire(import.meta.url)('moment-timezone/data/packed/latest.json') as { zones: string[] };
+
+function packedZone(name: string): string {
+  const zone = packed.zones.find((line) => line.startsWith(`${name}|`));
+  if (zone === undefined) throw new Error(`moment-timezone knows no zone named ${name}`);
+  return zone;
+}
+
+const inShared = (file: string): string => fileURLToPath(new URL(`../shared/src/${file}`, import.meta.url));
+
+export default defineConfig({
+  plugins: [react()],
+  define: { __ZONES__: JSON.stringify(ZONES.map(packedZone)) },
+  resolve: {
+    // Regular expressions on purpose: a plain string would also catch the testing entry point.
+    alias: [
+      { find: /^@stubpost\/shared$/, replacement: inShared('index.ts') },
+      { find: /^@stubpost\/shared\/testing$/, replacement: inShared('testing/index.ts') },
+    ],
+  },
+  server: {
+    host: '127.0.0.1',
+    port: 5173,
+    strictPort: true,
+    proxy: { '/api': `http://127.0.0.1:${process.env['PORT'] ?? '4600'}` },
+  },
+  build: { manifest: true },
+  test: {
+    environment: 'jsdom',
+    globals: true,
+    css: false,
+    setupFiles: ['./src/testing/setup.ts'],
+    include: ['src/**/*.test.{ts,tsx}'],
+  },
+});
