@@ -1,0 +1,8 @@
+/** Names of the events on the live stream. `reload` says that the asked-for place in the change table is gone. */
+export const LIVE_EVENTS = ['turn', 'alert', 'beat', 'reload'] as const;
+export type LiveEvent = (typeof LIVE_EVENTS)[number];
+
+/** Seconds between two `beat` events, so that a reader can tell a quiet board from a lost stream. Our choice. */
+export const beatSeconds = 5;
+/** Without any event for this long the board says that it is not live. Our choice: twice the beat. */
+export const notLiveAfterSeconds = 10;

@@ -1,0 +1,86 @@
+import { z } from 'zod';
+import { ALL_TERMINALS, ROLES } from '../access/roles';
+import { terminalCodeSchema, textSchema } from './primitives';
+
+/** Shortest password taken; longer ones are advised. Source: OWASP ASVS 5.0, 6.2.1. */
+export const passwordShortest = 8;
+/** Length we advise where a password is chosen. Our choice, between the 8 and 15 of OWASP ASVS 5.0, 6.2.1. */
+export const passwordAdvised = 12;
+/** Longest password taken, in characters; more than the 64 of OWASP ASVS 5.0, 6.2.9, bounded against abuse. */
+export const passwordLongest = 128;
+
+/** A role at one terminal, or at all of them (`*`). */
+export const roleGrantSchema = z.strictObject({
+  role: z.enum(ROLES),
+  terminal: z.union([z.literal(ALL_TERMINALS), terminalCodeSchema]),
+});
+
+/** Any text as a password; whether it is good enough is judged by the service with a code of its own. */
+export const passwordTextSchema = z.string().min(1).max(1024);
+
+/** Mail address as the name somebody signs in with; upper and lower case are one. */
+export const emailSchema = z
+  .string()
+  .trim()
+  .max(254)
+  .transform((text) => text.toLowerCase())
+  .pipe(z.email());
+
+/** Signing in. The address need not look like one: a wrong one is answered as any other wrong pair. */
+export const signInSchema = z.strictObject({
+  email: z.string().trim().min(1).max(254),
+  password: passwordTextSchema,
+});
+export type SignInRequest = z.infer<typeof signInSchema>;
+
+/** Who is signed in. */
+export const signedInPersonSchema = z.object({
+  id: z.string(),
+  name: z.string(),
+  roles: z.array(z.object({ role: z.enum(ROLES), terminal: z.string() })),
+});
+export type SignedInPerson = z.infer<typeof signedInPersonSchema>;
+
+/** Answer of signing in and of asking who is signed in. */
+export const sessionSchema = z.object({ person: signedInPersonSchema });
+export type SessionAnswer = z.infer<typeof sessionSchema>;
+
+/** A new password of one's own. All other sessions end with it. */
+export const changePasswordSchema = z.strictObject({
+  current: passwordTextSchema,
+  password: passwordTextSchema,
+});
+export type ChangePasswordRequest = z.infer<typeof changePasswordSchema>;
+
+/** One of a person's own sessions. */
+export const ownSessionSchema = z.object({
+  id: z.string(),
+  startedAt: z.string(),
+  lastSeenAt: z.string(),
+  endsAt: z.string(),
+  /** What the browser called itself when it signed in. */
+  device: z.string(),
+  /** The session this question came with. */
+  current: z.boolean(),
+});
+export type OwnSession = z.infer<typeof ownSessionSchema>;
+
+/** What a one-time link shows before it is used. */
+export const linkSchema = z.object({ name: z.string(), email: z.string(), expiresAt: z.string() });
+export type WireLink = z.infer<typeof linkSchema>;
+
+/** A password set through a one-time link. */
+export const useLinkSchema = z.strictObject({ password: passwordTextSchema });
+export type UseLinkRequest = z.infer<typeof useLinkSchema>;
+
+/** Whether this installation still waits for its first administrator. */
+export const setupSchema = z.object({ needed: z.boolean() });
+export type SetupAnswer = z.infer<typeof setupSchema>;
+
+/** The first administrator of an empty installation. */
+export const firstAdministratorSchema = z.strictObject({
+  email: emailSchema,
+  name: textSchema(80),
+  password: passwordTextSchema,
+});
+export type FirstAdministratorRequest = z.infer<typeof firstAdministratorSchema>;

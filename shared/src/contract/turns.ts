@@ -1,0 +1,223 @@
+import { z } from 'zod';
+import { ANCHORS, DOERS, PLACES, STEP_KINDS } from '../plan/step-plan';
+import { CREW_ROLES, ENTRY_SOURCES } from '../turn/entry';
+import { HEALTHS, STEP_STATES, TURN_KINDS, TURN_STATES } from '../turn/turn';
+import { alertSchema } from './alerts';
+import { dateSchema, idSchema, instantSchema, terminalCodeSchema, textSchema } from './primitives';
+
+const personRefSchema = z.object({ id: z.string(), name: z.string() });
+
+/** What was read off or counted with a step. */
+export const readingSchema = z.strictObject({
+  count: z.number().int().min(0).max(200).optional(),
+  cars: z.array(textSchema(20)).max(200).optional(),
+  brakePipePsi: z.number().min(0).max(200).optional(),
+  p0: z.number().min(0).max(200).optional(),
+  p1: z.number().min(0).max(200).optional(),
+  seconds: z.number().min(0).max(3600).optional(),
+});
+
+const stepSchema = z.object({
+  key: z.string(),
+  label: z.string(),
+  shortLabel: z.string(),
+  kind: z.enum(STEP_KINDS),
+  doer: z.enum(DOERS),
+  place: z.enum(PLACES),
+  anchor: z.enum(ANCHORS),
+  dueAt: z.string().nullable(),
+  latestFinishAt: z.string().nullable(),
+  /** Recorded time when done, else the forecast finish. */
+  forecastFinishAt: z.string().nullable(),
+  state: z.enum(STEP_STATES),
+  doneAt: z.string().nullable(),
+  source: z.enum(ENTRY_SOURCES).nullable(),
+  by: z.string().nullable(),
+  saidBy: z.string().nullable(),
+  reading: readingSchema.nullable(),
+  /** The entry that counts for this step. */
+  entryId: z.string().nullable(),
+  /** Words for what is open about the step: "1 of 2 handbrakes released", "cannot do: …", two times. */
+  remarks: z.array(z.string()),
+  holdsDeparture: z.boolean(),
+});
+
+/** A turn as every route gives it. Instants are ISO 8601 with `Z`, durations whole seconds. */
+export const turnSchema = z.object({
+  id: z.string(),
+  version: z.number().int(),
+  kind: z.enum(TURN_KINDS),
+  terminal: z.string(),
+  zone: z.string(),
+  serviceDate: z.string(),
+  state: z.enum(TURN_STATES),
+  health: z.enum(HEALTHS),
+  /** True for a turn entered by hand. */
+  extra: z.boolean(),
+  reverses: z.boolean().nullable(),
+  track: z.string().nullable(),
+  /** The track it was planned on, when it was changed since. */
+  plannedTrack: z.string().nullable(),
+  set: z.string().nullable(),
+  /** Cars of the set in order from the bumping post, when the set is known. */
+  cars: z.array(z.string()),
+  crew: z.array(z.object({ as: z.enum(CREW_ROLES), personId: z.string(), name: z.string() })),
+  planId: z.string(),
+  inbound: z
+    .object({
+      train: z.string(),
+      scheduledArrivalAt: z.string(),
+      expectedArrivalAt: z.string().nullable(),
+      actualArrivalAt: z.string().nullable(),
+    })
+    .nullable(),
+  outbound: z
+    .object({
+      train: z.string(),
+      scheduledDepartureAt: z.string(),
+      heldUntil: z.string().nullable(),
+      holdReason: z.string().nullable(),
+      expectedDepartureAt: z.string().nullable(),
+      actualDepartureAt: z.string().nullable(),
+    })
+    .nullable(),
+  steps: z.array(stepSchema),
+  forecast: z.object({
+    readyAt: z.string().nullable(),
+    readyAtNineInTen: z.string().nullable(),
+    chanceOnTime: z.number().nullable(),
+    slackSeconds: z.number().int().nullable(),
+    criticalSteps: z.array(z.string()),
+  }),
+  alerts: z.array(alertSchema),
+  blueSignal: z.object({ since: z.string(), by: z.string() }).nullable(),
+  annulled: z.object({ at: z.string(), reason: z.string() }).nullable(),
+  /** Scheduled layover shorter than the plan's shortest turn. */
+  shortByDesign: z.boolean(),
+  /** Newest instant at which anything was heard about the turn; null before the first entry. */
+  lastHeardAt: z.string().nullable(),
+  /** What is wrong with entries, in words: out of order, smaller count than set, two times for one step. */
+  findings: z.array(z.string()),
+  noteCount: z.number().int(),
+  /** Instant at which forecast, health and step states were computed. */
+  computedAt: z.string(),
+});
+export type WireTurn = z.infer<typeof turnSchema>;
+export type WireStep = z.infer<typeof stepSchema>;
+export type WireReading = z.infer<typeof readingSchema>;
+
+/** Answer of the board route. */
+export const boardSchema = z.object({ now: z.string(), terminal: z.string(), turns: z.array(turnSchema) });
+export type WireBoard = z.infer<typeof boardSchema>;
+
+const inboundRequestSchema = z.strictObject({ train: textSchema(20), scheduledArrivalAt: instantSchema });
+const outboundRequestSchema = z.strictObject({ train: textSchema(20), scheduledDepartureAt: instantSchema });
+
+/** An extra turn entered by hand. Needs an inbound or an outbound train, or both. */
+export const createTurnSchema = z
+  .strictObject({
+    terminal: terminalCodeSchema,
+    serviceDate: dateSchema,
+    track: textSchema(12).optional(),
+    set: textSchema(20).optional(),
+    inbound: inboundRequestSchema.optional(),
+    outbound: outboundRequestSchema.optional(),
+  })
+  .refine((turn) => turn.inbound !== undefined || turn.outbound !== undefined, {
+    message: 'a turn needs an inbound or an outbound train',
+  });
+export type CreateTurnRequest = z.infer<typeof createTurnSchema>;
+
+const entryBase = {
+  id: idSchema,
+  observedAt: instantSchema,
+  source: z.enum(ENTRY_SOURCES),
+  saidBy: textSchema(80).optional(),
+  clockOffsetMilliseconds: z.number().int().optional(),
+};
+const reason = textSchema(300);
+const stepKey = textSchema(60);
+
+/** One entry as a device sends it. Person fields are ids; the service adds the names of the day. */
+export const recordEntrySchema = z.discriminatedUnion('kind', [
+  z.strictObject({ ...entryBase, kind: z.literal('arrival') }),
+  z.strictObject({ ...entryBase, kind: z.literal('departure') }),
+  z.strictObject({ ...entryBase, kind: z.literal('expected-arrival'), expectedAt: instantSchema }),
+  z.strictObject({
+    ...entryBase,
+    kind: z.literal('step-done'),
+    step: stepKey,
+    reading: readingSchema.optional(),
+  }),
+  z.strictObject({ ...entryBase, kind: z.literal('withdrawn'), target: idSchema, reason }),
+  z.strictObject({
+    ...entryBase,
+    kind: z.literal('corrected'),
+    target: idSchema,
+    correctedObservedAt: instantSchema.optional(),
+    reading: readingSchema.optional(),
+    reason,
+  }),
+  z.strictObject({ ...entryBase, kind: z.literal('cannot-do'), step: stepKey, reason }),
+  z.strictObject({
+    ...entryBase,
+    kind: z.literal('crew'),
+    person: z.string().min(1),
+    as: z.enum(CREW_ROLES),
+  }),
+  z.strictObject({
+    ...entryBase,
+    kind: z.literal('relief'),
+    out: z.string().min(1),
+    in: z.string().min(1).nullable().optional(),
+    as: z.enum(CREW_ROLES),
+    faceToFace: z.boolean(),
+  }),
+  z.strictObject({ ...entryBase, kind: z.literal('briefing') }),
+  z.strictObject({ ...entryBase, kind: z.literal('track'), track: textSchema(12) }),
+  z.strictObject({ ...entryBase, kind: z.literal('set'), set: textSchema(20) }),
+  z.strictObject({ ...entryBase, kind: z.literal('hold'), until: instantSchema, reason }),
+  z.strictObject({ ...entryBase, kind: z.literal('annulled'), reason }),
+  z.strictObject({ ...entryBase, kind: z.literal('blue-signal-up') }),
+  z.strictObject({ ...entryBase, kind: z.literal('blue-signal-down') }),
+  z.strictObject({ ...entryBase, kind: z.literal('note'), note: textSchema(1000) }),
+]);
+export type RecordEntryRequest = z.infer<typeof recordEntrySchema>;
+
+/** Answer to a recorded entry: its place in the sealed log and the turn as it now stands. */
+export const entryReceiptSchema = z.object({
+  sequence: z.number().int(),
+  hash: z.string(),
+  turn: turnSchema,
+});
+export type EntryReceipt = z.infer<typeof entryReceiptSchema>;
+
+/** One entry of a turn's log as the service gives it: the request's fields with names, receipt and seal. */
+export const wireEntrySchema = z.looseObject({
+  sequence: z.number().int(),
+  hash: z.string(),
+  id: z.string(),
+  kind: z.string(),
+  observedAt: z.string(),
+  receivedAt: z.string(),
+  source: z.enum(ENTRY_SOURCES),
+  by: personRefSchema.nullable(),
+  saidBy: z.string().optional(),
+  step: z.string().optional(),
+  reading: readingSchema.optional(),
+  target: z.string().optional(),
+  reason: z.string().optional(),
+  note: z.string().optional(),
+});
+export type WireEntry = z.infer<typeof wireEntrySchema>;
+
+/** Found turns, best first. */
+export const foundTurnSchema = z.object({
+  turnId: z.string(),
+  terminal: z.string(),
+  serviceDate: z.string(),
+  text: z.string(),
+  matched: z.enum(['train', 'set', 'car', 'person', 'track']),
+  at: z.string(),
+});
+export type FoundTurn = z.infer<typeof foundTurnSchema>;

@@ -1,0 +1,201 @@
+// lib
+export { assertNever } from './lib/assert-never';
+export {
+  addSeconds,
+  formatInstant,
+  millisecondsInHour,
+  millisecondsInMinute,
+  millisecondsInSecond,
+  parseInstant,
+  secondsBetween,
+} from './lib/instant';
+export type { CalendarDate, Instant } from './lib/instant';
+export { ok, refused } from './lib/result';
+export type { Result } from './lib/result';
+
+// plan
+export { ANCHORS, DOERS, PLACES, READINGS, STEP_KINDS } from './plan/step-plan';
+export type { Anchor, Doer, Place, PlanStep, ReadingKey, StepKind, StepPlan } from './plan/step-plan';
+
+// turn
+export { CREW_ROLES, ENTRY_KINDS, ENTRY_SOURCES, SUBJECT_KINDS } from './turn/entry';
+export type {
+  CrewRole,
+  Entry,
+  EntryAuthor,
+  EntryContent,
+  EntryKind,
+  EntrySource,
+  Reading,
+  SubjectKind,
+} from './turn/entry';
+export { HEALTHS, STEP_STATES, TURN_KINDS, TURN_STATES } from './turn/turn';
+export type { Health, PlannedTurn, StepState, TurnKind, TurnState } from './turn/turn';
+
+// lateness
+export { ALERT_CAUSES, ALERT_STATES, PRIORITIES } from './lateness/finding';
+export type { AlertCause, AlertState, Finding, Priority } from './lateness/finding';
+
+// contract: alerts
+export { alertSchema, closeAlertSchema, setAsideSchema } from './contract/alerts';
+export type { WireAlert } from './contract/alerts';
+
+// contract: history
+export { departureRowSchema, historyImportSchema, onTimeQuerySchema, onTimeSchema } from './contract/history';
+export type { DepartureRow, OnTimeAnswer, OnTimeQuery, WireHistoryImport } from './contract/history';
+
+// contract: live
+export { LIVE_EVENTS, beatSeconds, notLiveAfterSeconds } from './contract/live';
+export type { LiveEvent } from './contract/live';
+
+// contract: plans
+export { createPlanSchema, planStepSchema, stepPlanSchema } from './contract/plans';
+export type { CreatePlanRequest, WireStepPlan } from './contract/plans';
+
+// contract: primitives
+export { dateSchema, idSchema, instantSchema, terminalCodeSchema, textSchema } from './contract/primitives';
+
+// contract: timetables
+export {
+  PROBLEM_SEVERITIES,
+  TIMETABLE_STATES,
+  activationSchema,
+  derivedTurnSchema,
+  importProblemSchema,
+  timetableDifferenceSchema,
+  timetableSchema,
+  timetableSummarySchema,
+} from './contract/timetables';
+export type {
+  ActivationRequest,
+  ImportProblem,
+  ProblemSeverity,
+  TimetableDifference,
+  TimetableState,
+  TimetableSummary,
+  WireDerivedTurn,
+  WireTimetable,
+} from './contract/timetables';
+
+// contract: turns
+export {
+  boardSchema,
+  createTurnSchema,
+  entryReceiptSchema,
+  foundTurnSchema,
+  readingSchema,
+  recordEntrySchema,
+  turnSchema,
+  wireEntrySchema,
+} from './contract/turns';
+export type {
+  CreateTurnRequest,
+  EntryReceipt,
+  FoundTurn,
+  RecordEntryRequest,
+  WireBoard,
+  WireEntry,
+  WireReading,
+  WireStep,
+  WireTurn,
+} from './contract/turns';
+
+// access
+export { ALL_TERMINALS, ROLES, grantCovers, isRole, rolesAt } from './access/roles';
+export type { PersonAccess, Role, RoleGrant } from './access/roles';
+export {
+  PERMISSIONS,
+  isPermission,
+  may,
+  mayEverywhere,
+  rolesWith,
+  terminalsWhere,
+} from './access/permissions';
+export type { Permission } from './access/permissions';
+export { barredAtTheControls, mayRecord, recordableKinds, withdrawalReach } from './access/recording';
+export type { ControlsQuestion, WithdrawalReach } from './access/recording';
+
+// contract: errors
+export { ERROR_STATUSES, errorBodySchema, isErrorCode } from './contract/errors';
+export type { ErrorBody, ErrorCode } from './contract/errors';
+
+// contract: health and demo
+export { demoSchema, demoSessionSchema, healthSchema, sweepSilenceSeconds } from './contract/health';
+export type { DemoSessionRequest, WireDemo, WireHealth } from './contract/health';
+
+// contract: people
+export {
+  createPersonSchema,
+  createdPersonSchema,
+  crewMemberSchema,
+  givePasswordSchema,
+  oneTimeLinkSchema,
+  personSchema,
+  updatePersonSchema,
+} from './contract/people';
+export type {
+  CreatePersonRequest,
+  CreatedPerson,
+  CrewMember,
+  GivePasswordRequest,
+  OneTimeLink,
+  UpdatePersonRequest,
+  WirePerson,
+} from './contract/people';
+
+// contract: session
+export {
+  changePasswordSchema,
+  emailSchema,
+  firstAdministratorSchema,
+  linkSchema,
+  ownSessionSchema,
+  passwordAdvised,
+  passwordLongest,
+  passwordShortest,
+  passwordTextSchema,
+  roleGrantSchema,
+  sessionSchema,
+  setupSchema,
+  signInSchema,
+  signedInPersonSchema,
+  useLinkSchema,
+} from './contract/session';
+export type {
+  ChangePasswordRequest,
+  FirstAdministratorRequest,
+  OwnSession,
+  SessionAnswer,
+  SetupAnswer,
+  SignInRequest,
+  SignedInPerson,
+  UseLinkRequest,
+  WireLink,
+} from './contract/session';
+
+// contract: terminals
+export {
+  createTerminalSchema,
+  replaceTracksSchema,
+  shippedThresholds,
+  stoppingMarkerSchema,
+  terminalSchema,
+  terminalSettingsSchema,
+  terminalThresholdsSchema,
+  trackSchema,
+  updateTerminalSettingsSchema,
+} from './contract/terminals';
+export type {
+  CreateTerminalRequest,
+  ReplaceTracksRequest,
+  StoppingMarker,
+  TerminalThresholds,
+  UpdateTerminalSettingsRequest,
+  WireTerminal,
+  WireTerminalSettings,
+  WireTrack,
+} from './contract/terminals';
+
+// contract: routes
+export { ROUTES } from './contract/routes';
+export type { RouteMethod, RouteSpec, TerminalPlace } from './contract/route';
