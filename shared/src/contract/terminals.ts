@@ -41,8 +41,13 @@ export const createTerminalSchema = z.strictObject({
 });
 export type CreateTerminalRequest = z.infer<typeof createTerminalSchema>;
 
-/** The tracks of a terminal, all at once; the old ones are replaced. */
-export const replaceTracksSchema = z.array(trackSchema).max(60);
+const trackListSchema = z.array(trackSchema).max(60);
+
+/** The tracks of a terminal, all at once; the old ones are replaced. A bare list, or the list under `tracks`. */
+export const replaceTracksSchema = z.union([
+  trackListSchema,
+  z.strictObject({ tracks: trackListSchema }).transform((body) => body.tracks),
+]);
 export type ReplaceTracksRequest = z.infer<typeof replaceTracksSchema>;
 
 /**
