@@ -37,16 +37,23 @@ export { ALERT_CAUSES, ALERT_STATES, PRIORITIES } from './lateness/finding';
 export type { AlertCause, AlertState, Finding, Priority } from './lateness/finding';
 
 // contract: alerts
-export { alertSchema, closeAlertSchema, setAsideSchema } from './contract/alerts';
-export type { WireAlert } from './contract/alerts';
+export {
+  ALERT_QUESTIONS,
+  alertSchema,
+  alertsQuerySchema,
+  closeAlertSchema,
+  longestSetAsideMinutes,
+  setAsideSchema,
+} from './contract/alerts';
+export type { AlertsQuery, CloseAlertRequest, SetAsideRequest, WireAlert } from './contract/alerts';
 
 // contract: history
 export { departureRowSchema, historyImportSchema, onTimeQuerySchema, onTimeSchema } from './contract/history';
 export type { DepartureRow, OnTimeAnswer, OnTimeQuery, WireHistoryImport } from './contract/history';
 
 // contract: live
-export { LIVE_EVENTS, beatSeconds, notLiveAfterSeconds } from './contract/live';
-export type { LiveEvent } from './contract/live';
+export { LIVE_EVENTS, beatSeconds, liveQuerySchema, notLiveAfterSeconds } from './contract/live';
+export type { LiveEvent, LiveQuery } from './contract/live';
 
 // contract: plans
 export { createPlanSchema, planStepSchema, stepPlanSchema } from './contract/plans';
@@ -54,6 +61,10 @@ export type { CreatePlanRequest, WireStepPlan } from './contract/plans';
 
 // contract: primitives
 export { dateSchema, idSchema, instantSchema, terminalCodeSchema, textSchema } from './contract/primitives';
+
+// contract: sets
+export { UNIT_KINDS, putSetSchema, setSchema, unitSchema } from './contract/sets';
+export type { PutSetRequest, UnitKind, WireSet, WireUnit } from './contract/sets';
 
 // contract: timetables
 export {
@@ -79,9 +90,13 @@ export type {
 
 // contract: turns
 export {
+  boardAheadMinutes,
+  boardBackMinutes,
+  boardQuerySchema,
   boardSchema,
   createTurnSchema,
   entryReceiptSchema,
+  findQuerySchema,
   foundTurnSchema,
   readingSchema,
   recordEntrySchema,
@@ -89,8 +104,10 @@ export {
   wireEntrySchema,
 } from './contract/turns';
 export type {
+  BoardQuery,
   CreateTurnRequest,
   EntryReceipt,
+  FindQuery,
   FoundTurn,
   RecordEntryRequest,
   WireBoard,

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { ALERT_CAUSES, ALERT_STATES, PRIORITIES } from '../lateness/finding';
-import { instantSchema, textSchema } from './primitives';
+import { instantSchema, terminalCodeSchema, textSchema } from './primitives';
 
 /** An alert as every route gives it. */
 export const alertSchema = z.object({
@@ -36,3 +36,18 @@ export type WireAlert = z.infer<typeof alertSchema>;
 export const setAsideSchema = z.strictObject({ until: instantSchema, reason: textSchema(300) });
 /** Close a cleared alert by naming its cause. */
 export const closeAlertSchema = z.strictObject({ cause: textSchema(300) });
+
+/** Words of the `state` question: `standing` is raised, taken or set aside. */
+export const ALERT_QUESTIONS = ['standing', 'all', ...ALERT_STATES] as const;
+
+/** Which alerts; without a terminal those of every terminal the caller may see. */
+export const alertsQuerySchema = z.strictObject({
+  terminal: terminalCodeSchema.optional(),
+  state: z.enum(ALERT_QUESTIONS).default('standing'),
+});
+export type AlertsQuery = z.infer<typeof alertsQuerySchema>;
+export type SetAsideRequest = z.infer<typeof setAsideSchema>;
+export type CloseAlertRequest = z.infer<typeof closeAlertSchema>;
+
+/** An alert can be set aside for this long at most, then it returns by itself. */
+export const longestSetAsideMinutes = 30;

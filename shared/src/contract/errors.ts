@@ -56,11 +56,13 @@ const turnErrors = {
   'entry.kind_not_permitted': 403,
   'entry.at_the_controls': 403,
   'entry.not_yours': 403,
+  'entry.after_departure': 403,
   'entry.target_unknown': 400,
   'entry.step_unknown': 400,
   'entry.person_unknown': 400,
   'set.unknown': 404,
   'set.exists': 409,
+  'set.changed': 412,
   'plan.unknown': 404,
   'plan.invalid': 400,
 } as const;
@@ -70,6 +72,9 @@ const alertErrors = {
   'alert.not_standing': 409,
   'alert.changed': 412,
   'alert.until_past': 400,
+  'alert.until_far': 400,
+  'alert.never_aside': 409,
+  'alert.still_standing': 409,
 } as const;
 
 const timetableErrors = {

@@ -221,3 +221,26 @@ export const foundTurnSchema = z.object({
   at: z.string(),
 });
 export type FoundTurn = z.infer<typeof foundTurnSchema>;
+
+/** Which turns of a terminal: a half-open range of instants, or one service day. */
+export const boardQuerySchema = z
+  .strictObject({
+    terminal: terminalCodeSchema,
+    from: instantSchema.optional(),
+    to: instantSchema.optional(),
+    serviceDate: dateSchema.optional(),
+  })
+  .refine((query) => query.serviceDate === undefined || (query.from === undefined && query.to === undefined), {
+    path: ['serviceDate'],
+    message: 'either a service date or a range',
+  });
+export type BoardQuery = z.infer<typeof boardQuerySchema>;
+
+/** The board shows turns from this long before now unless asked otherwise. Our choice. */
+export const boardBackMinutes = 20;
+/** The board shows turns to this long after now unless asked otherwise. Our choice. */
+export const boardAheadMinutes = 240;
+
+/** What to look for at a terminal: part of a train number, set, car, person or track. */
+export const findQuerySchema = z.strictObject({ terminal: terminalCodeSchema, q: textSchema(40) });
+export type FindQuery = z.infer<typeof findQuerySchema>;
