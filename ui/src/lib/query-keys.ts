@@ -1,0 +1,48 @@
+/** What a board list is asked for: one terminal, and a service date or a span of instants (default: the service's). */
+export interface BoardQuestion {
+  terminal: string;
+  serviceDate?: string;
+  from?: string;
+  to?: string;
+}
+
+/** What an alert list is asked for; `state` is `standing` when absent. */
+export interface AlertQuestion {
+  terminal: string;
+  state?: string;
+}
+
+/**
+ * One root per area, written once, so that a change can reach everything it touches (`queryKeys.turns.all`). From
+ * general to special; whatever a fetcher uses is in its key.
+ */
+export const queryKeys = {
+  session: { all: ['session'] as const, list: ['session', 'list'] as const },
+  setup: { all: ['set-up'] as const },
+  demo: { all: ['demo'] as const },
+  health: { all: ['health'] as const },
+  links: { one: (token: string) => ['links', token] as const },
+  people: { all: ['people'] as const },
+  crew: { at: (terminal: string) => ['crew', terminal] as const },
+  terminals: {
+    all: ['terminals'] as const,
+    settings: (terminal: string) => ['terminals', 'settings', terminal] as const,
+  },
+  turns: {
+    all: ['turns'] as const,
+    boards: ['turns', 'board'] as const,
+    board: (question: BoardQuestion) => ['turns', 'board', question] as const,
+    detail: (turnId: string) => ['turns', 'detail', turnId] as const,
+    entries: (turnId: string) => ['turns', 'entries', turnId] as const,
+  },
+  alerts: {
+    all: ['alerts'] as const,
+    lists: ['alerts', 'list'] as const,
+    list: (question: AlertQuestion) => ['alerts', 'list', question] as const,
+  },
+  plans: { all: ['plans'] as const, detail: (planId: string) => ['plans', 'detail', planId] as const },
+  sets: { all: ['sets'] as const },
+  timetables: { all: ['timetables'] as const },
+  history: { all: ['history'] as const },
+  find: { at: (terminal: string, text: string) => ['find', terminal, text] as const },
+};
