@@ -30,8 +30,8 @@ describe('a time typed for an act that was before', () => {
     expect(momentOfClock('1:10', zone, utc('2026-11-01T06:20:00'))).toBe(utc('2026-11-01T06:10:00'));
   });
 
-  it('says nothing where the clocks never showed the time', () => {
-    expect(momentOfClock('2:30', zone, utc('2026-03-08T07:35:00'))).toBeNull();
+  it('does not take a time of the evening before for one the clocks skipped this night', () => {
+    expect(momentOfClock('2:30', zone, utc('2026-03-08T07:35:00'))).toBe(utc('2026-03-07T07:30:00'));
   });
 
   it('counts minutes back from now', () => {

@@ -1,42 +1,35 @@
-import { millisecondsInMinute, type Instant } from '@stubpost/shared';
-import { TZDate } from '@date-fns/tz';
+import { millisecondsInHour, millisecondsInMinute, type Instant } from '@stubpost/shared';
+import { dateAt, wallTime } from '../../../lib/time-display';
+import { instantOfWallTime, readTimeOfDay } from '../../../lib/time-entry';
 
 /** How long ago an act may be said to have been with one touch, in minutes. Our choice. */
 export const minutesAgoChoices = [1, 2, 5, 10] as const;
+
+const hoursInDay = 24;
 
 /** The moment so many minutes before now. */
 export function minutesAgo(now: Instant, minutes: number): Instant {
   return now - minutes * millisecondsInMinute;
 }
 
-const clockForm = /^([01]?\d|2[0-3])[:.]?([0-5]\d)(?:[:.]([0-5]\d))?$/;
-
 /**
  * The latest moment up to now at which the clocks of a zone showed a typed time (`17:22`, `1722`, `17:22:05`): just
- * after midnight 23:50 is the evening before. Null when it cannot be read. On the night the clocks go back the later of
- * two such moments that have passed is taken.
+ * after midnight 23:50 is the evening before, and in the night when the clocks go back it is the later of the two
+ * that have passed. Null when it cannot be read or the clocks never showed it.
  */
 export function momentOfClock(typed: string, zone: string, now: Instant): Instant | null {
-  const match = clockForm.exec(typed.trim());
-  if (match === null) return null;
-  const [hours = 0, minutes = 0, seconds = 0] = match.slice(1).map((part) => Number(part ?? 0));
-  const wanted = (hours * 60 + minutes) * 60 + seconds;
-  const shown = (at: Instant): number => {
-    const local = new TZDate(at, zone);
-    return (local.getHours() * 60 + local.getMinutes()) * 60 + local.getSeconds();
-  };
-  const wholeSecond = now - (now % 1000);
-  // Back by the difference on the clock; a second look mends the hour that a clock change puts in between.
-  const first = wholeSecond - ((shown(wholeSecond) - wanted + daySeconds) % daySeconds) * 1000;
-  const off = difference(wanted, shown(first));
-  const mended = first + off * 1000;
-  return mended <= now && shown(mended) === wanted ? mended : null;
+  const wanted = readTimeOfDay(typed);
+  if (wanted === null || wanted >= hoursInDay * 3600) return null;
+  const days = [now, now - hoursInDay * millisecondsInHour].map((near) => dateAt(near, zone));
+  const moments = days.flatMap((day) => {
+    const first = instantOfWallTime(day, wanted, zone);
+    return [first, first + millisecondsInHour];
+  });
+  const passed = moments.filter((moment) => moment <= now && secondsOfDay(moment, zone) === wanted);
+  return passed.length === 0 ? null : Math.max(...passed);
 }
 
-const daySeconds = 24 * 60 * 60;
-
-/** Seconds from one clock time to another, the short way round. */
-function difference(wanted: number, shown: number): number {
-  const forward = (wanted - shown + daySeconds) % daySeconds;
-  return forward > daySeconds / 2 ? forward - daySeconds : forward;
+function secondsOfDay(moment: Instant, zone: string): number {
+  const { hour, minute, second } = wallTime(moment, zone);
+  return (hour * 60 + minute) * 60 + second;
 }
