@@ -65,10 +65,12 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'entry.at_the_controls': () =>
     'Not from the engineer at the controls. The conductor records it, the desk does from radio, or it is entered later.',
   'entry.not_yours': () => 'Only the person who wrote an entry, the desk or the supervisor takes it back.',
+  'entry.after_departure': () => 'The train has left: ask for a correction instead of taking the entry back.',
   'entry.target_unknown': () => 'The entry to take back or correct is not there.',
   'entry.step_unknown': () => 'This step is not in the plan of this turn.',
   'entry.person_unknown': () => 'This person is not there.',
   'set.unknown': () => 'This set is not there.',
+  'set.changed': () => 'Somebody changed this set meanwhile. The new state is shown.',
   'set.exists': () => 'There is already a set with this name.',
   'plan.unknown': () => 'This step plan is not there.',
   'plan.invalid': (facts) =>
@@ -76,6 +78,9 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'alert.unknown': () => 'This alert is not there.',
   'alert.not_standing': () => 'This alert no longer stands.',
   'alert.changed': () => 'Somebody was faster. The alert is shown as it now stands.',
+  'alert.until_far': () => 'That is too long to set an alert aside.',
+  'alert.never_aside': () => 'This alert cannot be set aside: it stays until somebody has acted.',
+  'alert.still_standing': () => 'This alert still stands. It can be closed once it has cleared.',
   'alert.until_past': () => 'The time to set aside until has passed.',
   'timetable.unknown': () => 'This timetable is not there.',
   'timetable.too_large': (facts) =>

@@ -1,1 +1,50 @@
 import '@testing-library/jest-dom/vitest';
+import { cleanup } from '@testing-library/react';
+import { afterEach, beforeEach } from 'vitest';
+import { forgetPreferences } from '../lib/preferences';
+import { FakeEventSource } from './fake-event-source';
+
+// What browsers have and jsdom has not.
+Object.assign(globalThis, { EventSource: FakeEventSource });
+
+/** A query that never matches: no dark preference, no wish for less motion. */
+function neverMatches(media: string): MediaQueryList {
+  const quiet = (): void => undefined;
+  return {
+    media,
+    matches: false,
+    onchange: null,
+    addEventListener: quiet,
+    removeEventListener: quiet,
+    addListener: quiet,
+    removeListener: quiet,
+    dispatchEvent: () => false,
+  };
+}
+
+/** Nothing has a size in jsdom, so nothing ever changes its size. */
+class StillObserver {
+  observe(): void {
+    /* nothing to see */
+  }
+  unobserve(): void {
+    /* nothing to see */
+  }
+  disconnect(): void {
+    /* nothing to see */
+  }
+}
+
+window.matchMedia ??= neverMatches;
+globalThis.ResizeObserver ??= StillObserver;
+Element.prototype.scrollIntoView ??= () => undefined;
+
+beforeEach(() => {
+  localStorage.clear();
+  forgetPreferences();
+  FakeEventSource.all.length = 0;
+});
+
+afterEach(() => {
+  cleanup();
+});

@@ -1,0 +1,83 @@
+import type {
+  AlertState,
+  EntrySource,
+  Health,
+  Priority,
+  Role,
+  StepState,
+  TurnKind,
+  TurnState,
+} from '@stubpost/shared';
+
+/** Words on screen for the tokens of the interface. One word, one meaning, on every page. */
+export const TURN_STATE_WORDS: Record<TurnState, string> = {
+  scheduled: 'Scheduled',
+  inbound: 'Inbound',
+  arrived: 'Arrived',
+  secured: 'Secured',
+  'ends-changed': 'Ends changed',
+  'crew-in-cab': 'Crew in cab',
+  ready: 'Ready',
+  departed: 'Departed',
+  tested: 'Tested',
+  closed: 'Closed',
+  annulled: 'Annulled',
+};
+
+export const HEALTH_WORDS: Record<Health, string> = {
+  'on-plan': 'On plan',
+  tight: 'Tight',
+  short: 'Short',
+  late: 'Late',
+  'no-word': 'No word',
+};
+
+export const STEP_STATE_WORDS: Record<StepState, string> = {
+  'not-due': 'Not due',
+  due: 'Due',
+  done: 'Done',
+  overdue: 'Overdue',
+  'not-needed': 'Not needed',
+  blocked: 'Blocked',
+  withdrawn: 'Withdrawn',
+  'in-question': 'In question',
+};
+
+export const SOURCE_WORDS: Record<EntrySource, string> = {
+  'by-hand': 'by hand',
+  'by-feed': 'by feed',
+  'by-radio': 'by radio',
+  'entered-later': 'entered later',
+};
+
+export const PRIORITY_WORDS: Record<Priority, string> = {
+  'act-now': 'Act now',
+  'act-soon': 'Act soon',
+  watch: 'Watch',
+};
+
+export const ALERT_STATE_WORDS: Record<AlertState, string> = {
+  raised: 'Raised',
+  taken: 'Taken',
+  'set-aside': 'Set aside',
+  cleared: 'Cleared',
+  closed: 'Closed',
+};
+
+export const TURN_KIND_WORDS: Record<TurnKind, string> = {
+  turn: 'Turn',
+  'first-out': 'First train out',
+  'tie-up': 'Tie-up',
+};
+
+export const ROLE_WORDS: Record<Role, string> = {
+  conductor: 'Conductor',
+  engineer: 'Engineer',
+  dispatcher: 'Dispatcher',
+  supervisor: 'Supervisor',
+  inspector: 'Inspector',
+  planner: 'Planner',
+  analyst: 'Analyst',
+  auditor: 'Auditor',
+  administrator: 'Administrator',
+};
