@@ -83,8 +83,9 @@ export function createEntryQueue(outside: QueueOutside): EntryQueue {
   function settle(entry: WaitingEntry, outcome: SendOutcome): void {
     const id = entry.request.id;
     if (outcome.kind === 'received') {
-      change({ waiting: without(id), failingSince: null, sentAt: outside.now() });
+      // The turn first: were the entry gone before it, the step would look open for a moment.
       outside.onReceived(entry.turnId, outcome.receipt);
+      change({ waiting: without(id), failingSince: null, sentAt: outside.now() });
     } else if (outcome.kind === 'refused') {
       change({
         waiting: replace(id, { refusal: { code: outcome.code, message: outcome.message } }),
