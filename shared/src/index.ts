@@ -132,6 +132,10 @@ export type { Permission } from './access/permissions';
 export { barredAtTheControls, mayRecord, recordableKinds, withdrawalReach } from './access/recording';
 export type { ControlsQuestion, WithdrawalReach } from './access/recording';
 
+export { judgePassword } from './access/password';
+export type { PasswordVerdict } from './access/password';
+export { passwordAdvised, passwordLongest, passwordShortest } from './access/password-lengths';
+
 // contract: errors
 export { ERROR_STATUSES, errorBodySchema, isErrorCode } from './contract/errors';
 export type { ErrorBody, ErrorCode } from './contract/errors';
@@ -167,9 +171,6 @@ export {
   firstAdministratorSchema,
   linkSchema,
   ownSessionSchema,
-  passwordAdvised,
-  passwordLongest,
-  passwordShortest,
   passwordTextSchema,
   roleGrantSchema,
   sessionSchema,
@@ -198,6 +199,7 @@ export {
   stoppingMarkerSchema,
   terminalSchema,
   terminalSettingsSchema,
+  terminalQuerySchema,
   terminalThresholdsSchema,
   trackSchema,
   updateTerminalSettingsSchema,
@@ -216,3 +218,15 @@ export type {
 // contract: routes
 export { ROUTES } from './contract/routes';
 export type { RouteMethod, RouteSpec, TerminalPlace } from './contract/route';
+
+// history
+export { splitDelay } from './history/delay-split';
+export type { DelayQuestion, DelaySplit } from './history/delay-split';
+export { GROUPINGS, groupOnTime } from './history/grouping';
+export type { Grouping, OnTimeGroup } from './history/grouping';
+export { mean, standardDeviation } from './history/moments';
+export { delaySecondsOf, isOnTime, measureOnTime, nameOfRule, verdictOf } from './history/on-time';
+export type { Departure, OnTimeFigures, OnTimeRule } from './history/on-time';
+export { quantile, quantileOfSorted } from './history/quantile';
+export { wilsonInterval } from './history/wilson';
+export type { ShareInterval } from './history/wilson';

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { GROUPINGS } from '../history/grouping';
 import { dateSchema, terminalCodeSchema } from './primitives';
 
 /** Question for the on-time history; the named rule is answered back with the figures. */
@@ -10,7 +11,7 @@ export const onTimeQuerySchema = z.strictObject({
   inclusive: z.stringbool().default(true),
   early: z.enum(['on-time', 'not-on-time']).default('on-time'),
   annulled: z.enum(['left-out', 'not-on-time']).default('left-out'),
-  groupBy: z.enum(['none', 'hour', 'weekday', 'date', 'train']).default('none'),
+  groupBy: z.enum(GROUPINGS).default('none'),
 });
 export type OnTimeQuery = z.infer<typeof onTimeQuerySchema>;
 
@@ -26,6 +27,8 @@ const figuresShape = {
   counted: z.number().int(),
   onTime: z.number().int(),
   annulled: z.number().int(),
+  /** Departures of the past that nobody recorded; they count neither way. */
+  noRecord: z.number().int(),
   share: z.number().nullable(),
   interval: intervalSchema.nullable(),
   delaySeconds: delaySchema,
