@@ -9,7 +9,7 @@ import {
   personSchema,
   updatePersonSchema,
 } from './people';
-import { terminalCodeSchema } from './primitives';
+import { terminalQuerySchema } from './terminals';
 import type { RouteSpec } from './route';
 import {
   changePasswordSchema,
@@ -28,8 +28,6 @@ import {
   terminalSettingsSchema,
   updateTerminalSettingsSchema,
 } from './terminals';
-
-const terminalQuery = z.strictObject({ terminal: terminalCodeSchema });
 
 const sessionRoutes: RouteSpec[] = [
   {
@@ -191,7 +189,7 @@ const peopleRoutes: RouteSpec[] = [
     terminal: 'query',
     area: 'People',
     summary: 'Names of the crews of a terminal',
-    query: terminalQuery,
+    query: terminalQuerySchema,
     response: z.array(crewMemberSchema),
   },
 ];

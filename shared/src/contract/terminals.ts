@@ -102,3 +102,6 @@ export const updateTerminalSettingsSchema = z.strictObject({
   thresholds: terminalThresholdsSchema,
 });
 export type UpdateTerminalSettingsRequest = z.infer<typeof updateTerminalSettingsSchema>;
+
+/** Query of the routes that speak of one terminal. */
+export const terminalQuerySchema = z.strictObject({ terminal: terminalCodeSchema });

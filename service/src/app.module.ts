@@ -1,0 +1,32 @@
+import { type DynamicModule, Module } from '@nestjs/common';
+import { AuthModule } from './auth/auth.module';
+import type { Clock } from './common/clock';
+import { CommonModule } from './common/common.module';
+import { LogModule } from './common/log.module';
+import type { Config } from './config/config';
+import { ConfigModule } from './config/config.module';
+import { DatabaseModule } from './database/database.module';
+import { ENTITIES } from './entities';
+import { HealthModule } from './health/health.module';
+import { PeopleModule } from './people/people.module';
+import { TerminalsModule } from './terminals/terminals.module';
+
+/** The whole service: what everybody needs first, then one module per area. */
+@Module({})
+export class AppModule {
+  static with(config: Config, clock: Clock): DynamicModule {
+    return {
+      module: AppModule,
+      imports: [
+        ConfigModule.withConfig(config),
+        LogModule.forRequests(),
+        CommonModule.withClock(clock),
+        DatabaseModule.withEntities(ENTITIES),
+        AuthModule,
+        PeopleModule,
+        TerminalsModule,
+        HealthModule,
+      ],
+    };
+  }
+}

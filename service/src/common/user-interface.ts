@@ -1,0 +1,33 @@
+import { existsSync } from 'node:fs';
+import path from 'node:path';
+import type { NestExpressApplication } from '@nestjs/platform-express';
+import type { NextFunction, Request, Response } from 'express';
+
+/**
+ * Serves the built user interface. Files under `assets` carry a hash in their name and are kept for good; any other
+ * address that could be a page gets the one page, whose router takes it from there. The interface under `/api` and
+ * missing assets never do.
+ */
+export function serveUserInterface(app: NestExpressApplication, folder: string): void {
+  const page = path.join(folder, 'index.html');
+  app.useStaticAssets(folder, { index: false, setHeaders: setCaching });
+  app.use((request: Request, response: Response, next: NextFunction) => {
+    if (!isPageAddress(request) || !existsSync(page)) {
+      next();
+      return;
+    }
+    response.setHeader('Cache-Control', 'no-cache');
+    response.sendFile(page);
+  });
+}
+
+function isPageAddress(request: Request): boolean {
+  if (request.method !== 'GET' && request.method !== 'HEAD') return false;
+  if (/^\/(api|assets)(\/|$)/.test(request.path)) return false;
+  return path.extname(request.path) === '';
+}
+
+function setCaching(response: { setHeader(name: string, value: string): unknown }, file: string): void {
+  const isHashed = path.basename(path.dirname(file)) === 'assets';
+  response.setHeader('Cache-Control', isHashed ? 'public, max-age=31536000, immutable' : 'no-cache');
+}

@@ -1,0 +1,13 @@
+export { Clock, FixedClock, SystemClock } from './common/clock';
+export { Refusal } from './common/refusal';
+export type { CurrentPersonFacts } from './common/signed-in';
+export { type Config, readConfig } from './config/config';
+export { type AppOptions, createApp } from './create-app';
+export { type Change, ChangeFeed, ChangeLog } from './database/change-log';
+export { Reader } from './database/reader';
+export { INSTALLATION, Settings } from './database/settings';
+export { type Transaction, UnitOfWork } from './database/unit-of-work';
+export { PeopleReadModel } from './people/people.read-model';
+export { PeopleService } from './people/people.service';
+export { TerminalsReadModel } from './terminals/terminals.read-model';
+export { TerminalsService } from './terminals/terminals.service';

@@ -1,0 +1,3 @@
+import { runService } from './run-service';
+
+void runService(process.env);

@@ -1,0 +1,29 @@
+import { Column, Entity, PrimaryColumn, Unique } from 'typeorm';
+import { instantColumn } from '../database/columns';
+
+/** Somebody who can sign in. */
+@Entity('person')
+@Unique('person_email', ['email'])
+export class PersonRow {
+  @PrimaryColumn({ type: 'text' })
+  id: string;
+
+  @Column({ type: 'integer' })
+  version: number;
+
+  /** In small letters. */
+  @Column({ type: 'text' })
+  email: string;
+
+  @Column({ type: 'text' })
+  name: string;
+
+  @Column({ name: 'password_hash', type: 'text', nullable: true })
+  passwordHash: string | null;
+
+  @Column({ type: 'boolean' })
+  active: boolean;
+
+  @Column(instantColumn('created_at'))
+  createdAt: number;
+}

@@ -1,0 +1,45 @@
+import { Body, Controller, Get, Post, Req, Res } from '@nestjs/common';
+import {
+  type FirstAdministratorRequest,
+  firstAdministratorSchema,
+  type SessionAnswer,
+  type SetupAnswer,
+} from '@stubpost/shared';
+import type { Request, Response } from 'express';
+import { SessionCookie } from '../auth/session-cookie';
+import { SignInService } from '../auth/sign-in.service';
+import { visitorOf } from '../auth/visitor';
+import { Public } from '../common/decorators';
+import { ZodPipe } from '../common/zod.pipe';
+import { PeopleReadModel } from './people.read-model';
+import { PeopleService } from './people.service';
+
+/** The one-time set-up of an installation that has nobody yet. */
+@Controller('api/setup')
+export class SetupController {
+  constructor(
+    private readonly people: PeopleService,
+    private readonly readModel: PeopleReadModel,
+    private readonly signIns: SignInService,
+    private readonly cookie: SessionCookie,
+  ) {}
+
+  @Get()
+  @Public()
+  async isNeeded(): Promise<SetupAnswer> {
+    return { needed: !(await this.readModel.isAnybodyThere()) };
+  }
+
+  @Post()
+  @Public()
+  async setUp(
+    @Body(new ZodPipe(firstAdministratorSchema)) body: FirstAdministratorRequest,
+    @Req() request: Request,
+    @Res({ passthrough: true }) response: Response,
+  ): Promise<SessionAnswer> {
+    const personId = await this.people.addFirstAdministrator(body);
+    const signedIn = await this.signIns.openFor(personId, visitorOf(request).device);
+    this.cookie.set(response, signedIn.token, signedIn.endsAt);
+    return { person: signedIn.person };
+  }
+}

@@ -1,0 +1,69 @@
+import type { NestExpressApplication } from '@nestjs/platform-express';
+import { Restarter } from './common/restarter';
+import { type Config, ConfigProblem, readConfig } from './config/config';
+import { createApp } from './create-app';
+
+/** However many streams are open, a stopping service is gone within this time. */
+const longestStopMilliseconds = 4500;
+
+/** Reads the environment, serves until it is told to end, and ends the process when it cannot start. */
+export async function runService(environment: NodeJS.ProcessEnv): Promise<void> {
+  try {
+    const config = readConfig(environment);
+    await new ServiceRun(config).start();
+  } catch (error) {
+    process.stderr.write(`${explain(error)}\n`);
+    process.exit(1);
+  }
+}
+
+/** One process: an application, replaced by a new one when a restart is asked for, and its end. */
+class ServiceRun {
+  private app: NestExpressApplication | undefined;
+  private isStopping = false;
+
+  constructor(private readonly config: Config) {}
+
+  async start(): Promise<void> {
+    for (const signal of ['SIGTERM', 'SIGINT'] as const) process.once(signal, () => void this.stop());
+    await this.serve();
+  }
+
+  private async serve(): Promise<void> {
+    const { config } = this;
+    const app = await createApp({ config });
+    this.app = app;
+    app.get(Restarter).onRequest(() => void this.restart());
+    await app.listen(config.port, config.host);
+    process.stdout.write(`Stubpost ${config.version} serves ${config.publicUrl}\n`);
+  }
+
+  /** Used when the installation moves to another database: everything in memory belongs to the old one. */
+  private async restart(): Promise<void> {
+    try {
+      await this.app?.close();
+      if (!this.isStopping) await this.serve();
+    } catch (error) {
+      process.stderr.write(`${explain(error)}\n`);
+      process.exit(1);
+    }
+  }
+
+  private async stop(): Promise<void> {
+    this.isStopping = true;
+    setTimeout(() => process.exit(0), longestStopMilliseconds).unref();
+    await this.app?.close();
+    process.exit(0);
+  }
+}
+
+function explain(error: unknown): string {
+  if (error instanceof ConfigProblem) return error.message;
+  const { code, port, address } = error as NodeJS.ErrnoException & { port?: number; address?: string };
+  if (code === 'EADDRINUSE') {
+    return `Port ${port} on ${address} is taken by another program. Choose another with PORT=… and start again.`;
+  }
+  if (code === 'EACCES' && port !== undefined)
+    return `Port ${port} may not be used by this user. Choose another with PORT=….`;
+  return error instanceof Error ? (error.stack ?? error.message) : String(error);
+}
