@@ -1,0 +1,63 @@
+import { existsSync } from 'node:fs';
+import { run } from './child.mjs';
+import { childEnvironment, npmEnvironment } from './child-environment.mjs';
+import { digestOf } from './digest.mjs';
+import { callNpm } from './npm.mjs';
+import { ROOT, STAMP_FOLDER, inRoot, packageCommand } from './paths.mjs';
+import { Failure, stage } from './say.mjs';
+import { Stamp } from './stamp.mjs';
+import { ensureToolchain } from './toolchain.mjs';
+
+const WORKSPACES = ['shared', 'service', 'seed', 'ui'];
+const stamp = new Stamp(STAMP_FOLDER, 'install');
+
+/** Compiled modules fit one line of Node on one kind of machine; packages fit the lock file. */
+function wantedStamp() {
+  const manifests = ['.', ...WORKSPACES].map((folder) => `${folder}/package.json`);
+  return {
+    runtime: `${process.platform}-${process.arch}-${process.versions.modules}`,
+    packages: digestOf(ROOT, ['package-lock.json', '.npmrc', ...manifests]),
+  };
+}
+
+const isThere = () =>
+  existsSync(inRoot('node_modules/.package-lock.json')) && existsSync(packageCommand('tsc'));
+
+/**
+ * After a finished install for this Node a changed lock file needs the difference only. In every other case - first
+ * time, another Node, an install broken off - start from nothing. Neither writes to the lock file.
+ */
+function npmArguments(wanted) {
+  if (!existsSync(inRoot('package-lock.json'))) return ['install'];
+  const hasGoodBase = isThere() && stamp.read().runtime === wanted.runtime;
+  return hasGoodBase ? ['install', '--no-save'] : ['ci'];
+}
+
+/** Opens a database in memory, since a driver built for another Node only fails when it is loaded. */
+async function driverLoads() {
+  const script = "new (require('better-sqlite3'))(':memory:').close()";
+  const cwd = inRoot('service');
+  return (
+    (await run(process.execPath, ['-e', script], { cwd, env: childEnvironment(process.env) })).code === 0
+  );
+}
+
+async function npmOrFail(args, env) {
+  const { code, output } = await callNpm(args, { env });
+  if (code !== 0) throw new Failure(`npm ${args.join(' ')} failed (exit code ${code}).`, { output });
+}
+
+/** Installs the packages when the lock file, a package.json or Node has changed since, or when they are not there. */
+export async function ensureInstalled() {
+  const wanted = wantedStamp();
+  if (isThere() && stamp.matches(wanted)) return;
+  const toolchain = await ensureToolchain();
+  const args = npmArguments(wanted);
+  stamp.clear();
+  await stage(`Installing packages (npm ${args.join(' ')}; the first time takes a few minutes)`, async () => {
+    const env = npmEnvironment(process.env, toolchain);
+    await npmOrFail(args, env);
+    if (!(await driverLoads())) await npmOrFail(['rebuild', 'better-sqlite3'], env);
+  });
+  stamp.write(wantedStamp());
+}
