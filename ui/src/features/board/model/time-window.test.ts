@@ -22,6 +22,11 @@ describe('the window of the board', () => {
     expect(back).toEqual({ span: 120, startAt: at('22:07:00') });
   });
 
+  it('moves from one day to the next when it shows a day', () => {
+    const later = movedChoice({ span: 'day', startAt: null }, { from: at('10:00:00'), to: at('20:00:00') }, 1);
+    expect(later).toEqual({ span: 'day', startAt: at('15:00:00') + 24 * 3_600_000 });
+  });
+
   it('keeps its middle when another length is picked away from now', () => {
     const choice = { span: 120, startAt: at('10:00:00') };
     const wider = resizedChoice(choice, windowAt(choice, now, day), 240);

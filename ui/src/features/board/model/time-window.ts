@@ -10,7 +10,7 @@ export interface TimeWindow {
   to: Instant;
 }
 
-/** What the person chose: how long, and where it starts; a null start follows now. */
+/** What the person chose: how long, and where it starts (of a day: any moment in it); a null start follows now. */
 export interface WindowChoice {
   span: Span;
   startAt: Instant | null;
@@ -33,18 +33,21 @@ export function windowAt(choice: WindowChoice, now: Instant, day: TimeWindow): T
   return { from, to: from + length };
 }
 
-/** The choice after pressing Earlier (−1) or Later (+1): half a picture on, at whole minutes, no longer following now. */
+/**
+ * The choice after pressing Earlier (−1) or Later (+1): half a picture on, at whole minutes, no longer following now;
+ * from one day to the next.
+ */
 export function movedChoice(choice: WindowChoice, shown: TimeWindow, direction: -1 | 1): WindowChoice {
-  if (choice.span === 'day') return choice;
+  if (choice.span === 'day') return { span: 'day', startAt: middle(shown) + direction * minutes(24 * 60) };
   const step = minutes(choice.span) / 2;
   return { span: choice.span, startAt: wholeMinute(shown.from + direction * step) };
 }
 
 /** The choice after picking another length: a picture that follows now goes on doing so, any other keeps its middle. */
 export function resizedChoice(choice: WindowChoice, shown: TimeWindow, span: Span): WindowChoice {
-  if (span === 'day' || choice.startAt === null) return { span, startAt: null };
-  const middle = (shown.from + shown.to) / 2;
-  return { span, startAt: wholeMinute(middle - minutes(span) / 2) };
+  if (choice.startAt === null) return { span, startAt: null };
+  const startAt = span === 'day' ? middle(shown) : middle(shown) - minutes(span) / 2;
+  return { span, startAt: wholeMinute(startAt) };
 }
 
 /** The next shorter (−1) or longer (+1) of the offered lengths. */
@@ -65,6 +68,8 @@ export function draggedChoice(window: TimeWindow): WindowChoice {
 export function overlaps(a: TimeWindow, b: TimeWindow): boolean {
   return a.from < b.to && b.from < a.to;
 }
+
+const middle = (window: TimeWindow): Instant => (window.from + window.to) / 2;
 
 function wholeMinute(instant: Instant): Instant {
   return Math.round(instant / minutes(1)) * minutes(1);

@@ -1,0 +1,194 @@
+import { millisecondsInMinute, type Instant } from '@stubpost/shared';
+import { formatSlack } from '../../../lib/time-display';
+import type { BoardRow } from './group-rows';
+import type { BoardTurn } from './board-turn';
+import { planText } from './mark-pitch';
+import { markItems } from './picture-marks';
+import { overlaps, type TimeWindow } from './time-window';
+import { nextLane, workLane, type NextLane, type WorkLane } from './turn-picture';
+import { arrivalOf, isFarOffPlan, isOver, isUntaken, plannedStretch, shownStretch } from './turn-times';
+import { wordItems } from './picture-words';
+
+/** One thing drawn on a lane. Looks hang on class names alone; content is plain text. */
+export interface PictureItem {
+  id: string;
+  group: string;
+  type: 'range' | 'point';
+  start: Instant;
+  end?: Instant;
+  className: string;
+  content: string;
+}
+
+/** How much is drawn: everything, without the comb of due times, or four cells in the place of the marks. */
+export type Detail = 'full' | 'lean' | 'summary';
+
+/** What the picture is drawn from. */
+export interface Scene {
+  rows: readonly BoardRow[];
+  window: TimeWindow;
+  now: Instant;
+  pixelsPerMinute: number;
+  detail: Detail;
+  /** Writes a plan time in the terminal's zone. */
+  clock: (instant: Instant) => string;
+}
+
+/** Where an item of a turn goes: its scene and the lanes of its row. */
+export interface TurnScene {
+  turn: BoardTurn;
+  now: Instant;
+  clock: (instant: Instant) => string;
+  /** Pixels from one instant to another. */
+  pixels: (from: Instant, to: Instant) => number;
+  /** The instant so many pixels after another. */
+  after: (instant: Instant, pixels: number) => Instant;
+  item: (lane: Lane, name: string, item: Omit<PictureItem, 'id' | 'group'>) => PictureItem;
+}
+
+export const LANES = ['plan', 'work', 'next'] as const;
+export type Lane = (typeof LANES)[number];
+
+/** Name of a lane's group in the timeline: `track-3-plan`. */
+export function laneGroup(rowId: string, lane: Lane): string {
+  return `${rowId}-${lane}`;
+}
+
+/** Everything to draw in a window, for the turns that reach into it. */
+export function pictureItems(scene: Scene): PictureItem[] {
+  return scene.rows.flatMap((row) =>
+    row.turns
+      .filter((turn) => overlaps(shownStretch(turn, scene.now), scene.window))
+      .flatMap((turn) => turnItems(turnScene(scene, row.id, turn), scene.detail)),
+  );
+}
+
+function turnScene(scene: Scene, rowId: string, turn: BoardTurn): TurnScene {
+  const perMillisecond = scene.pixelsPerMinute / millisecondsInMinute;
+  return {
+    turn,
+    now: scene.now,
+    clock: scene.clock,
+    pixels: (from, to) => (to - from) * perMillisecond,
+    after: (instant, pixels) => instant + pixels / perMillisecond,
+    item: (lane, name, item) => ({ id: `${turn.id} ${name}`, group: laneGroup(rowId, lane), ...item }),
+  };
+}
+
+function turnItems(scene: TurnScene, detail: Detail): PictureItem[] {
+  const work = workLane(scene.turn, scene.now);
+  const next = nextLane(scene.turn, scene.now);
+  if (detail === 'summary') {
+    return [...planItems(scene), ...workItems(scene, work), ...summaryItems(scene), ...figureItems(scene, next)];
+  }
+  const marks = markItems(scene);
+  return [
+    ...planItems(scene),
+    ...(detail === 'full' ? dueItems(scene) : []),
+    ...workItems(scene, work),
+    ...marks.items,
+    ...wordItems(scene, work, marks.lastPixelAt),
+    ...nextItems(scene, next),
+    ...figureItems(scene, next),
+  ];
+}
+
+const classes = (...names: (string | false | null)[]): string => names.filter(Boolean).join(' ');
+
+function planItems({ turn, item, pixels, clock }: TurnScene): PictureItem[] {
+  const { from, to } = plannedStretch(turn);
+  const state = classes(turn.departedAt !== null && 'gone', turn.annulled !== null && 'annulled');
+  const fits = planText(pixels(from, to));
+  const leaves = turn.scheduledDepartureAt;
+  const outbound = leaves === null ? '' : turn.outboundTrain;
+  const right = [fits.outbound && outbound, fits.time && leaves !== null && clock(leaves)].filter(Boolean);
+  const left = fits.inbound || (leaves === null && fits.outbound) ? (turn.inboundTrain ?? '') : '';
+  const range = { type: 'range' as const, start: from, end: to };
+  return [
+    item('plan', 'plan', { ...range, className: classes('plan', state), content: left }),
+    item('plan', 'leaves', { ...range, className: classes('plan-leaves', state), content: right.join(' ') }),
+  ];
+}
+
+function dueItems({ turn, item }: TurnScene): PictureItem[] {
+  const { from, to } = plannedStretch(turn);
+  return turn.steps.flatMap((step) => {
+    const at = step.plannedDueAt;
+    if (at === null || at < from || at > to || turn.annulled !== null) return [];
+    return [item('plan', `due ${step.key}`, { type: 'point', start: at, className: 'due', content: '' })];
+  });
+}
+
+function workItems({ turn, item }: TurnScene, lane: WorkLane): PictureItem[] {
+  const blue = turn.blueSignal !== null && 'blue-signal';
+  const left = turn.departedAt !== null || turn.state === 'closed';
+  const health = !left && (turn.health === 'tight' || turn.health === 'short') && turn.health;
+  const pieces: [string, TimeWindow | null, string][] = [
+    ['work', lane.work, classes('work', turn.arrivedAt === null && 'unposted', left && 'gone', health, blue)],
+    ['over', lane.over, 'over'],
+    ['unheard', lane.unheard, 'unheard'],
+    ['open', lane.open, classes('open', turn.arrivedAt === null && turn.kind !== 'first-out' && 'coming', blue)],
+  ];
+  return pieces.flatMap(([name, piece, className]) =>
+    piece === null
+      ? []
+      : [item('work', name, { type: 'range', start: piece.from, end: piece.to, className, content: '' })],
+  );
+}
+
+function nextItems({ turn, item, now }: TurnScene, lane: NextLane | null): PictureItem[] {
+  if (lane === null) return [];
+  const range = (name: string, piece: TimeWindow, className: string): PictureItem =>
+    item('next', name, { type: 'range', start: piece.from, end: piece.to, className, content: '' });
+  const bracket = classes('bracket', turn.health === 'late' && 'late');
+  const half = { type: 'point' as const, start: lane.readyAt ?? 0, className: 'half', content: '' };
+  return [
+    ...lane.hatches.map((piece, index) => range(`hatch ${index}`, piece, 'hatch')),
+    ...lane.rooms.map((piece, index) => range(`room ${index}`, piece, 'room')),
+    ...(lane.bracket === null ? [] : [range('bracket', lane.bracket, bracket)]),
+    ...(lane.readyAt === null || lane.readyAt <= now ? [] : [item('next', 'half', half)]),
+  ];
+}
+
+function figureItems({ turn, item }: TurnScene, lane: NextLane | null): PictureItem[] {
+  if (lane === null || turn.slackSeconds === null) return [];
+  const content = formatSlack(turn.slackSeconds);
+  return [item('next', 'figure', { type: 'point', start: lane.figureAt, className: 'figure', content })];
+}
+
+/** Four cells, set / tested / ends / ready, filled where all steps of that kind before the departure are recorded. */
+function summaryItems({ turn, item }: TurnScene): PictureItem[] {
+  const start = arrivalOf(turn) ?? plannedStretch(turn).from;
+  if (isFarOffPlan(turn)) return [];
+  const cells = summaryCells(turn);
+  const filled = (Object.keys(cells) as (keyof typeof cells)[]).filter((cell) => cells[cell]);
+  const urgent = !isOver(turn) && turn.health !== 'on-plan' && `at-risk ${turn.health}`;
+  const className = classes('cells', ...filled, urgent, isUntaken(turn) && 'untaken');
+  return [item('work', 'cells', { type: 'point', start, className, content: '' })];
+}
+
+/** Which of the four cells of the summary are filled. */
+export function summaryCells(turn: BoardTurn): { set: boolean; tested: boolean; ends: boolean; ready: boolean } {
+  const inward = turn.steps.filter((step) => step.anchor === 'arrival');
+  const all = (steps: BoardTurn['steps']): boolean => steps.every((step) => step.doneAt !== null);
+  const some = (steps: BoardTurn['steps']): boolean => steps.length > 0 && all(steps);
+  return {
+    set: some(inward.filter((step) => step.kind === 'securement')),
+    tested: some(inward.filter((step) => step.kind === 'brake-test')),
+    ends: some(inward.filter((step) => step.kind === 'ends')),
+    ready: some(turn.steps.filter((step) => step.holdsDeparture && step.state !== 'not-needed')),
+  };
+}
+
+/** More than this many items in view no longer move fluidly. */
+export const mostItems = 500;
+
+/** As much detail as the length of the window and the number of items allow. */
+export function detailedItems(scene: Omit<Scene, 'detail'>, summary: boolean): PictureItem[] {
+  if (summary) return pictureItems({ ...scene, detail: 'summary' });
+  for (const detail of ['full', 'lean'] as const) {
+    const items = pictureItems({ ...scene, detail });
+    if (items.length <= mostItems) return items;
+  }
+  return pictureItems({ ...scene, detail: 'summary' });
+}

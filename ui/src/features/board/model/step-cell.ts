@@ -1,0 +1,40 @@
+import { stepMarkClass } from '../../../components/step-mark';
+import type { BoardStep, BoardTurn } from './board-turn';
+import { clockText, timeText } from './time-text';
+import { isFarOffPlan, isOver } from './turn-times';
+
+/** A step in a cell: its mark, its time or the word for it, and under that when it was due or how it is known. */
+export interface StepCell {
+  key: string;
+  mark: string | null;
+  text: string;
+  estimate: boolean;
+  strong: boolean;
+  small: string;
+}
+
+/** The cell of one step of a turn. */
+export function stepCell(step: BoardStep, turn: BoardTurn): StepCell {
+  const due = step.dueAt === null ? '' : `due ${timeText(step.dueAt, turn.zone)}`;
+  const cell = { key: step.key, mark: stepMarkClass(step.kind, step.state, step.source), estimate: false, strong: false, small: due };
+  if (turn.annulled !== null) return { ...cell, mark: null, text: '–', small: '' };
+  if (step.doneAt !== null) {
+    return { ...cell, text: clockText(step.doneAt, turn.zone), ...saidOf(step, due) };
+  }
+  if (step.state === 'not-needed') return { ...cell, text: 'not needed', small: '' };
+  if (step.state === 'overdue') return { ...cell, text: 'overdue', strong: true };
+  if (step.state === 'withdrawn') return { ...cell, text: 'withdrawn' };
+  if (step.state === 'blocked') return { ...cell, text: 'cannot', strong: true };
+  if (isFarOffPlan(turn)) return { ...cell, mark: null, text: '' };
+  if (isOver(turn)) return { ...cell, text: 'no record' };
+  if (turn.health === 'no-word') return { ...cell, text: 'no word' };
+  if (step.finishAt === null) return { ...cell, text: '' };
+  return { ...cell, text: timeText(step.finishAt, turn.zone), estimate: true };
+}
+
+function saidOf(step: BoardStep, due: string): Pick<StepCell, 'small' | 'strong'> {
+  if (step.state === 'in-question') return { small: 'in question', strong: true };
+  if (step.source === 'by-radio') return { small: 'by radio', strong: false };
+  if (step.source === 'entered-later') return { small: 'later', strong: false };
+  return { small: due, strong: false };
+}
