@@ -6,8 +6,11 @@ import { LogModule } from './common/log.module';
 import type { Config } from './config/config';
 import { ConfigModule } from './config/config.module';
 import { DatabaseModule } from './database/database.module';
+import { DemoModule } from './demo/demo.module';
+import { DocsModule } from './docs/docs.module';
 import { ENTITIES } from './entities';
 import { HealthModule } from './health/health.module';
+import { HistoryModule } from './history/history.module';
 import { PeopleModule } from './people/people.module';
 import { TerminalsModule } from './terminals/terminals.module';
 
@@ -25,7 +28,10 @@ export class AppModule {
         AuthModule,
         PeopleModule,
         TerminalsModule,
+        HistoryModule,
         HealthModule,
+        DemoModule,
+        DocsModule,
       ],
     };
   }

@@ -12,6 +12,8 @@ import { SignInAttemptRow } from './auth/sign-in-attempt.entity';
 import { ChangeRow } from './database/change.entity';
 import { CounterRow } from './database/counter.entity';
 import type { EntityClass } from './database/data-sources';
+import { HistoryImportRow } from './history/history-import.entity';
+import { PastDepartureRow } from './history/past-departure.entity';
 import { SettingRow } from './database/setting.entity';
 import { PersonRoleRow } from './people/person-role.entity';
 import { PersonRow } from './people/person.entity';
@@ -43,4 +45,7 @@ export const ENTITIES: EntityClass[] = [
   EntryRow,
   AlertRow,
   AlertWatchRow,
+  // history
+  HistoryImportRow,
+  PastDepartureRow,
 ];

@@ -7,6 +7,7 @@ import { CreateTurns1764600011000 } from './1764600011000-create-turns';
 import { CreateEntries1764600012000 } from './1764600012000-create-entries';
 import { CreateSets1764600013000 } from './1764600013000-create-sets';
 import { CreateAlerts1764600014000 } from './1764600014000-create-alerts';
+import { CreateHistory1764600030000 } from './1764600030000-create-history';
 
 /** Every migration in the order it runs. Never edited once merged; only added to. */
 export const MIGRATIONS: (new () => MigrationInterface)[] = [
@@ -18,4 +19,5 @@ export const MIGRATIONS: (new () => MigrationInterface)[] = [
   CreateEntries1764600012000,
   CreateSets1764600013000,
   CreateAlerts1764600014000,
+  CreateHistory1764600030000,
 ];
