@@ -2,6 +2,7 @@ import type { NestExpressApplication } from '@nestjs/platform-express';
 import { Restarter } from './common/restarter';
 import { type Config, ConfigProblem, readConfig } from './config/config';
 import { createApp } from './create-app';
+import { playDemo, type RunningDemo } from './demo/start-demo';
 
 /** However many streams are open, a stopping service is gone within this time. */
 const longestStopMilliseconds = 4500;
@@ -20,6 +21,7 @@ export async function runService(environment: NodeJS.ProcessEnv): Promise<void> 
 /** One process: an application, replaced by a new one when a restart is asked for, and its end. */
 class ServiceRun {
   private app: NestExpressApplication | undefined;
+  private demo: RunningDemo | null = null;
   private isStopping = false;
 
   constructor(private readonly config: Config) {}
@@ -35,13 +37,14 @@ class ServiceRun {
     this.app = app;
     app.get(Restarter).onRequest(() => void this.restart());
     await app.listen(config.port, config.host);
+    this.demo = await playDemo(app);
     process.stdout.write(`Stubpost ${config.version} serves ${config.publicUrl}\n`);
   }
 
   /** Used when the installation moves to another database: everything in memory belongs to the old one. */
   private async restart(): Promise<void> {
     try {
-      await this.app?.close();
+      await this.end();
       if (!this.isStopping) await this.serve();
     } catch (error) {
       process.stderr.write(`${explain(error)}\n`);
@@ -52,8 +55,13 @@ class ServiceRun {
   private async stop(): Promise<void> {
     this.isStopping = true;
     setTimeout(() => process.exit(0), longestStopMilliseconds).unref();
-    await this.app?.close();
+    await this.end();
     process.exit(0);
+  }
+
+  private async end(): Promise<void> {
+    await this.demo?.stop();
+    await this.app?.close();
   }
 }
 

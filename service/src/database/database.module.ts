@@ -5,6 +5,7 @@ import { ChangeFeed, ChangeLog } from './change-log';
 import { Counters } from './counters';
 import { databaseFile } from './database-file';
 import { type EntityClass, openReader, openWriter } from './data-sources';
+import { Installation } from './installation';
 import { Reader } from './reader';
 import { Settings } from './settings';
 import { READER, WRITER } from './tokens';
@@ -22,7 +23,7 @@ export class DatabaseModule implements OnApplicationShutdown {
   ) {}
 
   static withEntities(entities: EntityClass[]): DynamicModule {
-    const services = [UnitOfWork, Reader, Counters, ChangeLog, ChangeFeed, Settings];
+    const services = [UnitOfWork, Reader, Counters, ChangeLog, ChangeFeed, Settings, Installation];
     return {
       module: DatabaseModule,
       providers: [

@@ -10,7 +10,9 @@ import { SessionCookie } from '../auth/session-cookie';
 import { SignInService } from '../auth/sign-in.service';
 import { visitorOf } from '../auth/visitor';
 import { Public } from '../common/decorators';
+import { Refusal } from '../common/refusal';
 import { ZodPipe } from '../common/zod.pipe';
+import { Installation } from '../database/installation';
 import { PeopleReadModel } from './people.read-model';
 import { PeopleService } from './people.service';
 
@@ -19,6 +21,7 @@ import { PeopleService } from './people.service';
 export class SetupController {
   constructor(
     private readonly people: PeopleService,
+    private readonly installation: Installation,
     private readonly readModel: PeopleReadModel,
     private readonly signIns: SignInService,
     private readonly cookie: SessionCookie,
@@ -27,7 +30,7 @@ export class SetupController {
   @Get()
   @Public()
   async isNeeded(): Promise<SetupAnswer> {
-    return { needed: !(await this.readModel.isAnybodyThere()) };
+    return { needed: await this.isSetupNeeded() };
   }
 
   @Post()
@@ -37,9 +40,16 @@ export class SetupController {
     @Req() request: Request,
     @Res({ passthrough: true }) response: Response,
   ): Promise<SessionAnswer> {
+    if (!(await this.isSetupNeeded())) {
+      throw new Refusal({ code: 'setup.done', message: 'this installation has its people already' });
+    }
     const personId = await this.people.addFirstAdministrator(body);
     const signedIn = await this.signIns.openFor(personId, visitorOf(request).device);
     this.cookie.set(response, signedIn.token, signedIn.endsAt);
     return { person: signedIn.person };
+  }
+
+  private async isSetupNeeded(): Promise<boolean> {
+    return !(await this.readModel.isAnybodyThere()) && !(await this.installation.isDemoWanted());
   }
 }
