@@ -12,12 +12,30 @@ export {
 export type { CalendarDate, Instant } from './lib/instant';
 export { ok, refused } from './lib/result';
 export type { Result } from './lib/result';
+export { formatClock, formatDuration, formatServiceDate, formatZoneLetters } from './lib/zone-time';
+export type { ClockFormat } from './lib/zone-time';
 
 // plan
+export { PLAN_PROBLEMS, checkPlan } from './plan/check-plan';
+export type { PlanProblem, PlanProblemCode } from './plan/check-plan';
+export { defaultStepPlanKey, defaultStepPlanName, defaultStepPlanSteps } from './plan/default-step-plan';
+export { arrivalEvent, departureEvent, orderSteps, stepsAfterDeparture } from './plan/step-network';
+export { rolesOf } from './plan/step-roles';
+export type { StepRoles } from './plan/step-roles';
+export { shortestTurnSeconds, stepsFor } from './plan/steps-for-turn';
+export type { StepsQuestion } from './plan/steps-for-turn';
 export { ANCHORS, DOERS, PLACES, READINGS, STEP_KINDS } from './plan/step-plan';
 export type { Anchor, Doer, Place, PlanStep, ReadingKey, StepKind, StepPlan } from './plan/step-plan';
 
 // turn
+export { compareAccounts, inQuestionSeconds } from './turn/account';
+export type { Account } from './turn/account';
+export { attendanceAt, handbrakesStanding, silenceSeconds } from './turn/attendance';
+export type { Attendance } from './turn/attendance';
+export { blueSignalAt } from './turn/blue-signals';
+export type { BlueSignal } from './turn/blue-signals';
+export { crewToCarry } from './turn/carried-crew';
+export type { CrewOnTurn, ReliefFact } from './turn/crew';
 export { CREW_ROLES, ENTRY_KINDS, ENTRY_SOURCES, SUBJECT_KINDS } from './turn/entry';
 export type {
   CrewRole,
@@ -29,8 +47,36 @@ export type {
   Reading,
   SubjectKind,
 } from './turn/entry';
+export type { EntryFinding, EntryFindingCode } from './turn/entry-findings';
+export { evolve, startOfTurn, turnFrom } from './turn/evolve';
+export type { CannotDo, InQuestion, TurnFacts, TurnNote } from './turn/facts';
+export { formatEntryFinding, sourceWords, stepRemarks } from './turn/finding-words';
+export type { FormatTime } from './turn/finding-words';
+export type { Handbrakes } from './turn/handbrakes';
+export {
+  closedAfterSeconds,
+  firstOutHorizonSeconds,
+  inboundHorizonSeconds,
+  lifeOf,
+  openStepState,
+  stepStateOf,
+} from './turn/life';
+export type { OpenStep, StepTimes } from './turn/life';
+export { compareEntries } from './turn/standing-entries';
 export { HEALTHS, STEP_STATES, TURN_KINDS, TURN_STATES } from './turn/turn';
 export type { Health, PlannedTurn, StepState, TurnKind, TurnState } from './turn/turn';
+
+// forecast
+export { forecastTurn } from './forecast/forecast';
+export type { Forecast, ForecastInput, StepForecast } from './forecast/forecast';
+export { forecastInputOf } from './forecast/forecast-input';
+export { scheduleNetwork } from './forecast/network';
+export type { Activity, ActivityTimes, NetworkRefusal, NetworkSchedule } from './forecast/network';
+
+// records
+export { canonicalJson } from './records/canonical-json';
+export { noPreviousHash, sealEntry } from './records/seal';
+export type { Seal, SealableEntry } from './records/seal';
 
 // lateness
 export { ALERT_CAUSES, ALERT_STATES, PRIORITIES } from './lateness/finding';

@@ -1,0 +1,141 @@
+import { addSeconds, millisecondsInMinute, type Instant } from '../lib/instant';
+import { arrivalEvent, departureEvent } from '../plan/step-network';
+import type { PlanStep } from '../plan/step-plan';
+import { rolesOf } from '../plan/step-roles';
+import type { Account } from './account';
+import { blueSignalAt } from './blue-signals';
+import type { TurnFacts } from './facts';
+import { ofKind, type StandingEntries } from './standing-entries';
+
+/**
+ * What is wrong with an entry, or missing beside it. Nothing is refused for it; it is told at once, in words
+ * (`formatEntryFinding`). `step` is a key of the plan or the word `arrival` or `departure`.
+ */
+export type EntryFinding =
+  /** Two accounts of one thing more than 60 s apart; the one that counts comes first. */
+  | { code: 'entry.two_times'; step: string; accounts: Account[] }
+  /** Recorded without the step it must follow, or earlier than that step (`beforeAt`). */
+  | { code: 'entry.out_of_order'; step: string; at: Instant; before: string; beforeAt: Instant | null }
+  /** Earlier than its not-before time. */
+  | { code: 'entry.too_early'; step: string; at: Instant; notBefore: Instant }
+  /** Earlier than the train came in. */
+  | { code: 'entry.before_arrival'; step: string; at: Instant; arrivalAt: Instant }
+  /** A step the train should have waited for, done only after it left. */
+  | { code: 'entry.after_departure'; step: string; at: Instant; departureAt: Instant }
+  /** The train left without a record of a step it should have waited for. */
+  | { code: 'entry.step_missing'; step: string; departureAt: Instant }
+  /** Fewer handbrakes released than set: the step stays open. `cars` still have theirs set, where cars were named. */
+  | { code: 'entry.smaller_count'; step: string; released: number; set: number; cars: string[] }
+  /** More handbrakes released than set. */
+  | { code: 'entry.larger_count'; step: string; released: number; set: number }
+  /** Released without a count although a count was set. */
+  | { code: 'entry.no_count'; step: string; set: number }
+  /** A handbrake record that says that none was set. */
+  | { code: 'entry.no_handbrake'; step: string }
+  /** Manned, tested or left while a blue signal was up. */
+  | { code: 'entry.blue_signal_up'; step: string; at: Instant; by: string }
+  /** Names a step that this turn does not have. */
+  | { code: 'entry.unknown_step'; step: string }
+  /** Takes back or corrects an entry that is not on this turn. */
+  | { code: 'entry.unknown_target'; entryId: string }
+  /** Claims a time more than a minute after it was received: a clock is wrong. */
+  | { code: 'entry.in_future'; entryId: string; at: Instant; receivedAt: Instant };
+export type EntryFindingCode = EntryFinding['code'];
+
+/** How far a claimed time may lie after its receipt before the clock is doubted. Our choice: a minute. */
+const clockDoubtMilliseconds = millisecondsInMinute;
+
+type Known = Omit<TurnFacts, 'findings'>;
+
+/** Everything that is wrong with the entries of a turn, in the order of the plan; the same for every order of arrival. */
+export function findInEntries(facts: Known, standing: StandingEntries): EntryFinding[] {
+  return [
+    ...facts.inQuestion.map((question): EntryFinding => ({ code: 'entry.two_times', ...question })),
+    ...facts.steps.flatMap((step) => findInStep(facts, step)),
+    ...findInHandbrakes(facts, standing),
+    ...findInDeparture(facts),
+    ...findInWords(facts, standing),
+  ];
+}
+
+function findInStep(facts: Known, step: PlanStep): EntryFinding[] {
+  const at = facts.doneAt[step.key];
+  if (at === undefined) return [];
+  const found = findOutOfOrder(facts, step, at);
+  const { arrivalAt, departureAt } = facts;
+  if (arrivalAt !== null && at < arrivalAt) {
+    found.push({ code: 'entry.before_arrival', step: step.key, at, arrivalAt });
+  }
+  const notBefore = notBeforeOf(facts, step);
+  if (notBefore !== null && at < notBefore) {
+    found.push({ code: 'entry.too_early', step: step.key, at, notBefore });
+  }
+  const holds = rolesOf(facts.steps).hold.includes(step);
+  if (holds && departureAt !== null && at > departureAt) {
+    found.push({ code: 'entry.after_departure', step: step.key, at, departureAt });
+  }
+  const signal = step.anchor === 'departure' ? blueSignalAt(facts.blueSignals, at) : null;
+  if (signal !== null) found.push({ code: 'entry.blue_signal_up', step: step.key, at, by: signal.by });
+  return found;
+}
+
+function findOutOfOrder(facts: Known, step: PlanStep, at: Instant): EntryFinding[] {
+  return step.after.flatMap((before): EntryFinding[] => {
+    if (before === arrivalEvent && facts.arrivalAt !== null) return [];
+    const beforeAt = before === departureEvent ? facts.departureAt : (facts.doneAt[before] ?? null);
+    if (beforeAt !== null && beforeAt <= at) return [];
+    return [{ code: 'entry.out_of_order', step: step.key, at, before, beforeAt }];
+  });
+}
+
+function notBeforeOf(facts: Known, step: PlanStep): Instant | null {
+  const scheduled = facts.planned.scheduledDepartureAt;
+  if (step.notBeforeSeconds === null || scheduled === null) return null;
+  return addSeconds(Math.max(scheduled, facts.heldUntil ?? scheduled), step.notBeforeSeconds);
+}
+
+function findInHandbrakes(facts: Known, standing: StandingEntries): EntryFinding[] {
+  const { secure, release } = rolesOf(facts.steps);
+  const recorded = ofKind(standing.entries, 'step-done');
+  const none = secure
+    .filter((step) => recorded.some((entry) => entry.step === step.key && entry.reading?.count === 0))
+    .map((step): EntryFinding => ({ code: 'entry.no_handbrake', step: step.key }));
+  const { set, released, carsStillSet } = facts.handbrakes;
+  const step = release.find((each) => recorded.some((entry) => entry.step === each.key))?.key;
+  if (step === undefined || set === null) return none;
+  if (released === null) return [...none, { code: 'entry.no_count', step, set }];
+  if (released > set) return [...none, { code: 'entry.larger_count', step, released, set }];
+  if (released === set) return none;
+  return [...none, { code: 'entry.smaller_count', step, released, set, cars: carsStillSet }];
+}
+
+function findInDeparture(facts: Known): EntryFinding[] {
+  const { departureAt } = facts;
+  if (departureAt === null) return [];
+  const missing = rolesOf(facts.steps)
+    .hold.filter((step) => facts.doneAt[step.key] === undefined)
+    .map((step): EntryFinding => ({ code: 'entry.step_missing', step: step.key, departureAt }));
+  const signal = blueSignalAt(facts.blueSignals, departureAt);
+  if (signal === null) return missing;
+  return [...missing, { code: 'entry.blue_signal_up', step: departureEvent, at: departureAt, by: signal.by }];
+}
+
+/** Entries whose own words do not fit: unknown steps and targets, times from a wrong clock. */
+function findInWords(facts: Known, standing: StandingEntries): EntryFinding[] {
+  const keys = new Set(facts.steps.map((step) => step.key));
+  const ids = new Set(facts.entries.map((entry) => entry.id));
+  return standing.entries.flatMap((entry): EntryFinding[] => {
+    const found: EntryFinding[] = [];
+    if ((entry.kind === 'step-done' || entry.kind === 'cannot-do') && !keys.has(entry.step)) {
+      found.push({ code: 'entry.unknown_step', step: entry.step });
+    }
+    if ((entry.kind === 'withdrawn' || entry.kind === 'corrected') && !ids.has(entry.target)) {
+      found.push({ code: 'entry.unknown_target', entryId: entry.id });
+    }
+    if (entry.observedAt > entry.receivedAt + clockDoubtMilliseconds) {
+      const { observedAt: at, receivedAt } = entry;
+      found.push({ code: 'entry.in_future', entryId: entry.id, at, receivedAt });
+    }
+    return found;
+  });
+}
