@@ -8,7 +8,7 @@ import {
   type WireTurn,
 } from '@stubpost/shared';
 import { toInstant } from '../../../lib/time-display';
-import { isSettled } from './next-act';
+import { hasLeft, isSettled } from './next-act';
 
 /** How far ahead `/my` looks, and how far back for turns of one's own that are still open. Our choice. */
 export const aheadSeconds = 2 * 3600;
@@ -52,8 +52,6 @@ export function progressOf(turn: WireTurn): { recorded: number; asked: number } 
   const asked = turn.steps.filter((step) => step.state !== 'not-needed');
   return { recorded: asked.filter(isSettled).length, asked: asked.length };
 }
-
-const hasLeft = (turn: WireTurn): boolean => (turn.outbound?.actualDepartureAt ?? null) !== null;
 
 /** Steps that were left open when the train left. */
 export function openAfterDeparture(turn: WireTurn): number {

@@ -24,7 +24,7 @@ const left = {
   expectedDepartureAt: null,
   actualDepartureAt: at('17:40:10'),
 };
-const key = (turn: ReturnType<typeof aWireTurn>): string => actKey(nextAct(turn, pushPullPlan));
+const key = (turn: ReturnType<typeof aWireTurn>): string => actKey(nextAct(turn, pushPullPlan.steps));
 
 describe('the next act', () => {
   it('is the arrival while the train is not recorded as in', () => {
@@ -45,7 +45,7 @@ describe('the next act', () => {
   it('is the running test once the train has left, and nothing once that is recorded', () => {
     const gone = withDone(aWireTurn({ outbound: left }), beforeDeparture);
     expect(key(gone)).toBe('step:running-test');
-    expect(nextAct(withDone(gone, { 'running-test': '17:44' }), pushPullPlan)).toEqual({
+    expect(nextAct(withDone(gone, { 'running-test': '17:44' }), pushPullPlan.steps)).toEqual({
       kind: 'nothing',
       why: 'all-recorded',
     });
@@ -65,21 +65,18 @@ describe('the next act', () => {
       aWireTurn({ kind: 'tie-up', outbound: null, steps: aWireTurn().steps.slice(0, 1) }),
       { 'handbrake-set': '17:20' },
     );
-    expect(nextAct(tieUp, pushPullPlan)).toEqual({ kind: 'nothing', why: 'tied-up' });
+    expect(nextAct(tieUp, pushPullPlan.steps)).toEqual({ kind: 'nothing', why: 'tied-up' });
   });
 
   it('takes the open step with the earliest latest finish where two could be next', () => {
-    const plan = {
-      ...pushPullPlan,
-      steps: pushPullPlan.steps.map((step) =>
-        step.key === 'cab-brake-check' ? { ...step, after: ['arrival'] } : step,
-      ),
-    };
+    const steps = pushPullPlan.steps.map((step) =>
+      step.key === 'cab-brake-check' ? { ...step, after: ['arrival'] } : step,
+    );
     const turn = aWireTurn();
     turn.steps = turn.steps.map((step) =>
       step.key === 'cab-brake-check' ? { ...step, latestFinishAt: at('17:21') } : step,
     );
-    expect(actKey(nextAct(turn, plan))).toBe('step:cab-brake-check');
+    expect(actKey(nextAct(turn, steps))).toBe('step:cab-brake-check');
   });
 
   it('stays with a step whose count is short, and goes on past a step in question', () => {
@@ -101,15 +98,17 @@ describe('the next act', () => {
   });
 
   it('names what is missing before a step picked out of order', () => {
-    expect(missingBefore(aWireTurn(), pushPullPlan, 'ends-changed')).toEqual(['Cab brake check']);
-    expect(missingBefore(aWireTurn({ inbound: notIn }), pushPullPlan, 'handbrake-set')).toEqual([
+    expect(missingBefore(aWireTurn(), pushPullPlan.steps, 'ends-changed')).toEqual(['Cab brake check']);
+    expect(missingBefore(aWireTurn({ inbound: notIn }), pushPullPlan.steps, 'handbrake-set')).toEqual([
       'Stopped at marker',
     ]);
-    expect(missingBefore(aWireTurn(), pushPullPlan, 'running-test')).toEqual(['Departed']);
+    expect(missingBefore(aWireTurn(), pushPullPlan.steps, 'running-test')).toEqual(['Departed']);
   });
 
   it('has nothing to record on an annulled turn', () => {
-    expect(nextAct(aWireTurn({ annulled: { at: at('17:00'), reason: 'No set' } }), pushPullPlan)).toEqual({
+    expect(
+      nextAct(aWireTurn({ annulled: { at: at('17:00'), reason: 'No set' } }), pushPullPlan.steps),
+    ).toEqual({
       kind: 'nothing',
       why: 'annulled',
     });

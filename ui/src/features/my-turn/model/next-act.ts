@@ -1,4 +1,4 @@
-import type { StepPlan, WireStep, WireTurn } from '@stubpost/shared';
+import { rolesOf, type PlanStep, type WireStep, type WireTurn } from '@stubpost/shared';
 
 /** What there is to record next on a turn: one thing, or the reason why there is nothing. */
 export type NextAct =
@@ -12,12 +12,9 @@ export function isSettled(step: WireStep): boolean {
   return step.state === 'done' || step.state === 'not-needed' || step.state === 'in-question';
 }
 
-const isAfterDeparture = (key: string, plan: StepPlan): boolean =>
-  plan.steps.find((step) => step.key === key)?.after.includes('departure') ?? false;
-
 /** Labels of what must be recorded before a step by the plan, and is not. */
-export function missingBefore(turn: WireTurn, plan: StepPlan, key: string): string[] {
-  const after = plan.steps.find((step) => step.key === key)?.after ?? [];
+export function missingBefore(turn: WireTurn, steps: readonly PlanStep[], key: string): string[] {
+  const after = steps.find((step) => step.key === key)?.after ?? [];
   return after.flatMap((before) => {
     if (before === 'arrival') return needsArrival(turn) ? ['Stopped at marker'] : [];
     if (before === 'departure') return turn.outbound?.actualDepartureAt === null ? ['Departed'] : [];
@@ -28,33 +25,35 @@ export function missingBefore(turn: WireTurn, plan: StepPlan, key: string): stri
 
 const needsArrival = (turn: WireTurn): boolean =>
   turn.inbound !== null && turn.inbound.actualArrivalAt === null;
-const hasLeft = (turn: WireTurn): boolean =>
+/** Whether the departure is recorded. */
+export const hasLeft = (turn: WireTurn): boolean =>
   turn.outbound !== null && turn.outbound.actualDepartureAt !== null;
 
 const byLatestFinish = (a: WireStep, b: WireStep): number =>
   (a.latestFinishAt ?? a.dueAt ?? '').localeCompare(b.latestFinishAt ?? b.dueAt ?? '');
 
 /**
- * The one next act by the plan: the arrival, then the open step whose predecessors are recorded and whose latest
+ * The one next act by the plan (`steps` are those of the turn): the arrival, then the open step whose predecessors are recorded and whose latest
  * finish is earliest, then the departure, then what follows it. After the departure a step that was left out before
  * it comes last: it can only be entered later.
  */
-export function nextAct(turn: WireTurn, plan: StepPlan): NextAct {
+export function nextAct(turn: WireTurn, steps: readonly PlanStep[]): NextAct {
   if (turn.annulled !== null) return { kind: 'nothing', why: 'annulled' };
   const open = turn.steps.filter((step) => !isSettled(step));
-  if (hasLeft(turn)) return afterDeparture(open, plan);
+  const { afterDeparture } = rolesOf(steps);
+  if (hasLeft(turn)) return actAfterDeparture(open, afterDeparture);
   if (needsArrival(turn)) return { kind: 'arrival' };
-  const before = open.filter((step) => !isAfterDeparture(step.key, plan));
+  const before = open.filter((step) => !afterDeparture.has(step.key));
   const ready = before
-    .filter((step) => missingBefore(turn, plan, step.key).length === 0)
+    .filter((step) => missingBefore(turn, steps, step.key).length === 0)
     .sort(byLatestFinish);
   const step = ready[0] ?? before[0];
   if (step !== undefined) return { kind: 'step', step };
   return turn.outbound === null ? { kind: 'nothing', why: 'tied-up' } : { kind: 'departure' };
 }
 
-function afterDeparture(open: WireStep[], plan: StepPlan): NextAct {
-  const step = open.find((each) => isAfterDeparture(each.key, plan)) ?? open[0];
+function actAfterDeparture(open: WireStep[], afterDeparture: ReadonlySet<string>): NextAct {
+  const step = open.find((each) => afterDeparture.has(each.key)) ?? open[0];
   return step === undefined ? { kind: 'nothing', why: 'all-recorded' } : { kind: 'step', step };
 }
 

@@ -1,0 +1,133 @@
+import {
+  formatInstant,
+  parseInstant,
+  rolesOf,
+  stepsFor,
+  turnFrom,
+  type Account,
+  type PlanStep,
+  type PlannedTurn,
+  type RecordEntryRequest,
+  type StepPlan,
+  type TurnFacts,
+  type WireEntry,
+  type WireStep,
+  type WireTurn,
+} from '@stubpost/shared';
+import { asWireEntry, toEntries, type Writer } from './wire-entries';
+
+/** A turn as this phone knows it: what the service told, with the entries that are still under way put in. */
+export interface KnownTurn {
+  turn: WireTurn;
+  /** The steps of this turn, by the plan in force on its day. */
+  steps: readonly PlanStep[];
+  /** Handbrakes by all entries; null until the entries of the turn are here. */
+  handbrakes: TurnFacts['handbrakes'] | null;
+  /** Keys of the steps that take handbrakes off. */
+  releases: ReadonlySet<string>;
+}
+
+/** What is needed to know a turn. `entries` is undefined while they load. */
+export interface TurnSources {
+  turn: WireTurn;
+  plan: Pick<StepPlan, 'steps'>;
+  entries: readonly WireEntry[] | undefined;
+  waiting: readonly RecordEntryRequest[];
+  writer: Writer;
+}
+
+const instant = (text: string | null | undefined): number | null =>
+  text === null || text === undefined ? null : parseInstant(text);
+
+function plannedOf(turn: WireTurn): PlannedTurn {
+  return {
+    id: turn.id,
+    kind: turn.kind,
+    serviceDate: turn.serviceDate,
+    reverses: turn.reverses,
+    inboundTrain: turn.inbound?.train ?? null,
+    outboundTrain: turn.outbound?.train ?? null,
+    scheduledArrivalAt: instant(turn.inbound?.scheduledArrivalAt),
+    scheduledDepartureAt: instant(turn.outbound?.scheduledDepartureAt),
+    track: turn.track,
+    set: turn.set,
+  };
+}
+
+/**
+ * Puts the entries under way into a turn. The rules of the entries are those of the core: the facts are worked out once
+ * with and once without them, and only what they change goes over the service's own word.
+ */
+export function knownTurn({ turn, plan, entries, waiting, writer }: TurnSources): KnownTurn {
+  const steps = stepsFor(plan.steps, turn);
+  const releases = new Set(rolesOf(steps).release.map((step) => step.key));
+  const planned = plannedOf(turn);
+  const told = toEntries(turn.id, entries ?? []);
+  const own = toEntries(
+    turn.id,
+    waiting.map((request) => asWireEntry(request, writer)),
+  );
+  const before = turnFrom(planned, steps, told);
+  const after = own.length === 0 ? before : turnFrom(planned, steps, [...told, ...own]);
+  return {
+    turn:
+      own.length === 0
+        ? withCrew(turn, waiting, writer)
+        : withCrew(withFacts(turn, before, after), waiting, writer),
+    steps,
+    handbrakes: entries === undefined ? null : after.handbrakes,
+    releases,
+  };
+}
+
+function withFacts(turn: WireTurn, before: TurnFacts, after: TurnFacts): WireTurn {
+  const { inbound, outbound } = turn;
+  const arrivalAt = changed(before.arrivalAt, after.arrivalAt, inbound?.actualArrivalAt ?? null);
+  const departureAt = changed(before.departureAt, after.departureAt, outbound?.actualDepartureAt ?? null);
+  return {
+    ...turn,
+    inbound: inbound === null ? null : { ...inbound, actualArrivalAt: arrivalAt },
+    outbound: outbound === null ? null : { ...outbound, actualDepartureAt: departureAt },
+    steps: turn.steps.map((step) => withAccount(step, before.done[step.key], after.done[step.key])),
+  };
+}
+
+/** The service's word, unless the entries under way say something else. */
+function changed(before: number | null, after: number | null, told: string | null): string | null {
+  if (before === after) return told;
+  return after === null ? null : formatInstant(after);
+}
+
+function withAccount(step: WireStep, before: Account | undefined, after: Account | undefined): WireStep {
+  if (before?.entryId === after?.entryId) return step;
+  if (after === undefined) {
+    return {
+      ...step,
+      state: 'withdrawn',
+      doneAt: null,
+      source: null,
+      by: null,
+      saidBy: null,
+      reading: null,
+      entryId: null,
+    };
+  }
+  return {
+    ...step,
+    state: 'done',
+    doneAt: formatInstant(after.at),
+    source: after.source,
+    by: after.by?.name ?? null,
+    saidBy: after.saidBy,
+    reading: after.reading,
+    entryId: after.entryId,
+  };
+}
+
+function withCrew(turn: WireTurn, waiting: readonly RecordEntryRequest[], writer: Writer): WireTurn {
+  return waiting.reduce((known, request) => {
+    if (request.kind !== 'crew' || request.person !== writer.id) return known;
+    const others = known.crew.filter((member) => member.as !== request.as);
+    return { ...known, crew: [...others, { as: request.as, personId: writer.id, name: writer.name }] };
+  }, turn);
+}
