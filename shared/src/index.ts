@@ -79,8 +79,20 @@ export { noPreviousHash, sealEntry } from './records/seal';
 export type { Seal, SealableEntry } from './records/seal';
 
 // lateness
+export { nextAlertStep, noAlertMemory, shippedHoldTimes } from './lateness/alert-life';
+export type { AlertHoldTimes, AlertMemory, AlertObservation, AlertStep } from './lateness/alert-life';
+export { ALERT_EVENTS, alertAfter, raisedAlert } from './lateness/alert-state';
+export type { AlertEvent, AlertRefusal, AlertStanding } from './lateness/alert-state';
+export { assess } from './lateness/assess';
+export { assessedTurnOf } from './lateness/assessed-turn';
+export type { AssessedContext, AssessedStep, AssessedTurn } from './lateness/assessed-turn';
 export { ALERT_CAUSES, ALERT_STATES, PRIORITIES } from './lateness/finding';
 export type { AlertCause, AlertState, Finding, Priority } from './lateness/finding';
+export { healthOf } from './lateness/health';
+export { isAssessed, lateSlackSeconds, shortByDesignSeconds } from './lateness/horizon';
+export { gapWords } from './lateness/securement';
+export { shippedLatenessSettings } from './lateness/settings';
+export type { LatenessSettings } from './lateness/settings';
 
 // contract: alerts
 export {
@@ -134,6 +146,18 @@ export type {
   WireTimetable,
 } from './contract/timetables';
 
+// contract: lateness settings
+export { holdTimesOf, latenessSettingsOf } from './contract/lateness-settings';
+
+// contract: a turn worked out from the wire
+export {
+  assessedTurnOfWire,
+  forecastInputOfWire,
+  forecastOfWire,
+  stepStatesOfWire,
+  wireSecurementOf,
+} from './contract/turn-from-wire';
+
 // contract: turns
 export {
   boardAheadMinutes,
@@ -159,6 +183,7 @@ export type {
   WireBoard,
   WireEntry,
   WireReading,
+  WireSecurement,
   WireStep,
   WireTurn,
 } from './contract/turns';

@@ -92,6 +92,15 @@ export const turnSchema = z.object({
   alerts: z.array(alertSchema),
   blueSignal: z.object({ since: z.string(), by: z.string() }).nullable(),
   annulled: z.object({ at: z.string(), reason: z.string() }).nullable(),
+  /** What the handbrake records add up to, and since when nobody is at the train with none standing set. */
+  securement: z
+    .object({
+      set: z.number().int().nullable(),
+      released: z.number().int().nullable(),
+      carsStillSet: z.array(z.string()),
+      unsecuredSince: z.string().nullable(),
+    })
+    .optional(),
   /** Scheduled layover shorter than the plan's shortest turn. */
   shortByDesign: z.boolean(),
   /** Newest instant at which anything was heard about the turn; null before the first entry. */
@@ -104,6 +113,7 @@ export const turnSchema = z.object({
 });
 export type WireTurn = z.infer<typeof turnSchema>;
 export type WireStep = z.infer<typeof stepSchema>;
+export type WireSecurement = NonNullable<WireTurn['securement']>;
 export type WireReading = z.infer<typeof readingSchema>;
 
 /** Answer of the board route. */
@@ -230,10 +240,13 @@ export const boardQuerySchema = z
     to: instantSchema.optional(),
     serviceDate: dateSchema.optional(),
   })
-  .refine((query) => query.serviceDate === undefined || (query.from === undefined && query.to === undefined), {
-    path: ['serviceDate'],
-    message: 'either a service date or a range',
-  });
+  .refine(
+    (query) => query.serviceDate === undefined || (query.from === undefined && query.to === undefined),
+    {
+      path: ['serviceDate'],
+      message: 'either a service date or a range',
+    },
+  );
 export type BoardQuery = z.infer<typeof boardQuerySchema>;
 
 /** The board shows turns from this long before now unless asked otherwise. Our choice. */

@@ -1,1 +1,11 @@
-export {};
+export {
+  aPlan,
+  aStep,
+  aStepDone,
+  aTurn,
+  anEntry,
+  fixedArrival,
+  fixedDeparture,
+  fixedServiceDate,
+  fixedZone,
+} from './builders';
