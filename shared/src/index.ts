@@ -15,6 +15,55 @@ export type { Result } from './lib/result';
 export { formatClock, formatDuration, formatServiceDate, formatZoneLetters } from './lib/zone-time';
 export type { ClockFormat } from './lib/zone-time';
 
+// timetable
+export { compareTimetables } from './timetable/compare-timetables';
+export type {
+  ComparedTurn,
+  Comparison,
+  DateDifference,
+  TurnDifference,
+} from './timetable/compare-timetables';
+export { deriveTurns } from './timetable/derive-turns';
+export type { DerivedTurn } from './timetable/derive-turns';
+export { FEED_FILES, isFeedFile } from './timetable/feed-files';
+export type { FeedFile } from './timetable/feed-files';
+export { openingsFor } from './timetable/openings';
+export type { OpeningsQuestion, PlannedOpening, TerminalChoice } from './timetable/openings';
+export { PROBLEM_SEVERITIES } from './timetable/problem';
+export type { ImportProblem, ProblemSeverity } from './timetable/problem';
+export { createTimetableReading, readTimetable } from './timetable/reading';
+export type { FeedRow, FeedTables, TimetableReading } from './timetable/reading';
+export type { ReadOutcome } from './timetable/build-timetable';
+export { formatRouteTypes, parseRouteTypes, railRouteTypes } from './timetable/route-types';
+export type { RouteTypes } from './timetable/route-types';
+export {
+  addDays,
+  calendarDateAt,
+  datesBetween,
+  daysBetween,
+  formatServiceTime,
+  isCalendarDate,
+  isZone,
+  parseServiceTime,
+  secondsOfServiceDay,
+  serviceDayStart,
+  serviceInstant,
+  weekdayOf,
+} from './timetable/service-day';
+export { runningDates } from './timetable/service-days';
+export { summarise } from './timetable/summarise';
+export type { StationGap, TimetableSummary } from './timetable/summarise';
+export type { StationSummary } from './timetable/summarise-stations';
+export { terminalTracks } from './timetable/terminal-tracks';
+export type { TerminalTracks } from './timetable/terminal-tracks';
+export type {
+  Timetable,
+  TimetableLink,
+  TimetableService,
+  TimetableStop,
+  TimetableTrip,
+} from './timetable/timetable';
+
 // plan
 export { PLAN_PROBLEMS, checkPlan } from './plan/check-plan';
 export type { PlanProblem, PlanProblemCode } from './plan/check-plan';
@@ -126,24 +175,37 @@ export type { PutSetRequest, UnitKind, WireSet, WireUnit } from './contract/sets
 
 // contract: timetables
 export {
-  PROBLEM_SEVERITIES,
   TIMETABLE_STATES,
   activationSchema,
+  comparedDays,
   derivedTurnSchema,
+  derivedTurnsQuerySchema,
+  differenceQuerySchema,
   importProblemSchema,
+  terminalChoiceSchema,
   timetableDifferenceSchema,
+  timetableHeadSchema,
   timetableSchema,
   timetableSummarySchema,
+  uploadFieldsSchema,
+  uploadReceiptSchema,
 } from './contract/timetables';
 export type {
   ActivationRequest,
-  ImportProblem,
-  ProblemSeverity,
-  TimetableDifference,
+  DerivedTurnsQuery,
+  DifferenceQuery,
   TimetableState,
-  TimetableSummary,
+  UploadFields,
+  UploadReceipt,
+  WireComparedTurn,
   WireDerivedTurn,
+  WireImportProblem,
+  WireStationSummary,
+  WireTerminalChoice,
   WireTimetable,
+  WireTimetableDifference,
+  WireTimetableHead,
+  WireTimetableSummary,
 } from './contract/timetables';
 
 // contract: lateness settings

@@ -84,7 +84,10 @@ const timetableErrors = {
   'timetable.file_missing': 400,
   'timetable.not_ready': 409,
   'timetable.station_unknown': 400,
-  'timetable.service_date_unknown': 400,
+  'timetable.station_twice': 400,
+  'timetable.terminal_twice': 400,
+  'timetable.not_newest': 409,
+  'timetable.nothing_before': 409,
 } as const;
 
 const historyErrors = {

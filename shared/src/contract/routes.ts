@@ -1,10 +1,11 @@
 import { accountRoutes } from './account-routes';
 import { historyRoutes } from './history-routes';
 import type { RouteSpec } from './route';
+import { timetableRoutes } from './timetable-routes';
 import { turnAreaRoutes } from './turn-routes';
 
 /**
  * Every route of the service. The guard's permission, the OpenAPI document and the test that walks roles and routes
  * are held against this table; a route that is missing here fails a test.
  */
-export const ROUTES: readonly RouteSpec[] = [...accountRoutes, ...turnAreaRoutes, ...historyRoutes];
+export const ROUTES: readonly RouteSpec[] = [...accountRoutes, ...turnAreaRoutes, ...historyRoutes, ...timetableRoutes];

@@ -82,7 +82,7 @@ export function deriveTurns(timetable: Timetable, serviceDate: CalendarDate): De
 
 /** As `deriveTurns`, for callers that ask for many dates. */
 export function turnsOfDay(index: TripIndex, serviceDate: CalendarDate): DerivedTurn[] {
-  const pairs = pairDay(index, dayServices(index.timetable, serviceDate), stationPlaces(index));
+  const { pairs } = pairDay(index, dayServices(index.timetable, serviceDate), stationPlaces(index));
   const key = (turn: DerivedTurn): string => `${turn.inboundTripId} ${turn.outboundTripId}`;
   return pairs
     .map((pair) => turnOf(index, pair, serviceDate))

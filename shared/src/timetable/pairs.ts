@@ -77,19 +77,38 @@ export function stationPlaces(index: TripIndex): PlaceOf {
   return (stopId) => stationIdOf(index, stopId);
 }
 
-/** The turns of one service day: pairs that meet at one place, and guesses for trains the file does not join. */
-export function pairDay(index: TripIndex, services: DayServices, placeOf: PlaceOf): TrainPair[] {
+/** The trains of one service day and how they are paired. */
+export interface DayPairs {
+  trips: TimetableTrip[];
+  /** Pairs that meet at one place, and guesses for trains the file does not join. */
+  pairs: TrainPair[];
+  broughtIn: ReadonlySet<TimetableTrip>;
+  /** Whether the file says anything of what the train's vehicle does before or after: a block or a link. */
+  isJoined(trip: TimetableTrip): boolean;
+}
+
+/** Pairs the trains of one service day at their places. */
+export function pairDay(index: TripIndex, services: DayServices, placeOf: PlaceOf): DayPairs {
+  const trips = tripsOf(index, services.day);
   const { followers, broughtIn } = joinDay(index, services);
-  const meet = followers.filter(
-    ({ inbound, outbound }) => placeOf(inbound.lastStopId) === placeOf(outbound.firstStopId),
-  );
   const inbound = new Set(followers.map((pair) => pair.inbound));
   const outbound = new Set(followers.filter((pair) => pair.dayOffset === 0).map((pair) => pair.outbound));
-  const loose = tripsOf(index, services.day).filter((trip) => trip.blockId === null);
+  const isLeaving = (trip: TimetableTrip): boolean => outbound.has(trip) || broughtIn.has(trip);
+  const loose = trips.filter((trip) => trip.blockId === null);
   const guesses = guessPairs({
     arriving: loose.filter((trip) => !inbound.has(trip)),
-    leaving: loose.filter((trip) => !outbound.has(trip) && !broughtIn.has(trip)),
+    leaving: loose.filter((trip) => !isLeaving(trip)),
     placeOf,
   });
-  return [...meet, ...guesses.map((pair): TrainPair => ({ ...pair, dayOffset: 0, guessed: true }))];
+  const meets = (pair: TrainPair): boolean =>
+    placeOf(pair.inbound.lastStopId) === placeOf(pair.outbound.firstStopId);
+  return {
+    trips,
+    pairs: [
+      ...followers.filter(meets),
+      ...guesses.map((pair): TrainPair => ({ ...pair, dayOffset: 0, guessed: true })),
+    ],
+    broughtIn,
+    isJoined: (trip) => trip.blockId !== null || inbound.has(trip) || isLeaving(trip),
+  };
 }

@@ -8,6 +8,21 @@ function fact(facts: Facts, name: string, otherwise: string): string {
   return typeof value === 'string' || typeof value === 'number' ? String(value) : otherwise;
 }
 
+/** Words of the first problem that the service listed, with the field it is about. */
+function firstProblem(facts: Facts): string | null {
+  const problems = facts['problems'];
+  const first: unknown = Array.isArray(problems) ? problems[0] : undefined;
+  if (typeof first !== 'object' || first === null) return null;
+  const { path, message } = first as { path?: unknown; message?: unknown };
+  if (typeof message !== 'string') return null;
+  return typeof path === 'string' && path !== '' ? `${path}: ${message}` : message;
+}
+
+function listed(facts: Facts, name: string): string {
+  const values = facts[name];
+  return Array.isArray(values) ? values.join(', ') : 'with this code';
+}
+
 /** "in 2 min" from a number of seconds in the facts; "later" when there is none. */
 function waiting(facts: Facts): string {
   const seconds = Number(facts['retryAfterSeconds']);
@@ -23,8 +38,7 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'transport.unreachable': () => 'The server does not answer. Check the network, then try again.',
   'transport.unreadable': () =>
     'The answer could not be read. Try again; if it stays so, tell the administrator.',
-  'request.invalid': (facts) =>
-    `Something in the form is not right: ${fact(facts, 'problem', 'see the fields')}.`,
+  'request.invalid': (facts) => `Something is not right: ${firstProblem(facts) ?? 'look at the fields'}.`,
   'request.malformed': () => 'The request could not be read.',
   'request.too_large': () => 'That is too large to send.',
   'request.content_type': () => 'The server does not take this kind of content.',
@@ -48,12 +62,12 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'people.unknown': () => 'This person is not there any more.',
   'people.last_administrator': () =>
     'This is the last administrator. Make somebody else administrator first.',
-  'people.terminal_unknown': (facts) => `There is no terminal ${fact(facts, 'terminal', 'with this code')}.`,
+  'people.terminal_unknown': (facts) => `There is no terminal ${listed(facts, 'terminals')}.`,
   'people.changed': () => 'Somebody changed this person meanwhile. The new state is shown; change it again.',
   'terminal.exists': () => 'There is already a terminal with this code.',
   'terminal.unknown': (facts) => `There is no terminal ${fact(facts, 'terminal', 'with this code')}.`,
   'terminal.zone_unknown': () => 'This time zone is not known. Use a name such as America/New_York.',
-  'terminal.track_twice': (facts) => `Track ${fact(facts, 'label', '')} is named twice.`.replace('  ', ' '),
+  'terminal.track_twice': (facts) => `Track ${fact(facts, 'track', 'label')} is there twice.`,
   'terminal.changed': () => 'Somebody changed this terminal meanwhile. The new state is shown.',
   'settings.changed': () => 'Somebody changed these settings meanwhile. The new values are shown.',
   'turn.unknown': () => 'This turn is not there.',
@@ -73,8 +87,7 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'set.changed': () => 'Somebody changed this set meanwhile. The new state is shown.',
   'set.exists': () => 'There is already a set with this name.',
   'plan.unknown': () => 'This step plan is not there.',
-  'plan.invalid': (facts) =>
-    `The step plan does not hold together: ${fact(facts, 'problem', 'see its rows')}.`,
+  'plan.invalid': (facts) => firstProblem(facts) ?? 'The step plan does not hold together.',
   'alert.unknown': () => 'This alert is not there.',
   'alert.not_standing': () => 'This alert no longer stands.',
   'alert.changed': () => 'Somebody was faster. The alert is shown as it now stands.',
@@ -90,7 +103,13 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'timetable.not_ready': () => 'This timetable is not ready to be used.',
   'timetable.station_unknown': (facts) =>
     `The timetable has no station ${fact(facts, 'stationId', 'of that name')}.`,
-  'timetable.service_date_unknown': () => 'The timetable has no such service date.',
+  'timetable.station_twice': (facts) =>
+    `${fact(facts, 'stationId', 'A station')} is in two terminals. It can be in one.`,
+  'timetable.terminal_twice': (facts) => `Two terminals have the code ${fact(facts, 'terminal', 'of one')}.`,
+  'timetable.not_newest': () =>
+    'Another timetable was made active after this one. Only the newest can be taken back.',
+  'timetable.nothing_before': () =>
+    'No timetable was running before this one. There is nothing to go back to.',
   'history.import_unknown': () => 'This import is not there.',
   'history.file_missing': () => 'No file was chosen.',
   'history.too_large': (facts) => `The file is too large: at most ${fact(facts, 'limit', 'the set limit')}.`,
