@@ -1,14 +1,19 @@
 import { existsSync } from 'node:fs';
 import path from 'node:path';
-import type { NestExpressApplication } from '@nestjs/platform-express';
-import type { NextFunction, Request, Response } from 'express';
+import type { NextFunction, Request, RequestHandler, Response } from 'express';
+
+/** The part of an application this needs. */
+interface PageServer {
+  use(handler: RequestHandler): unknown;
+  useStaticAssets(folder: string, options: { index: false; setHeaders: typeof setCaching }): unknown;
+}
 
 /**
  * Serves the built user interface. Files under `assets` carry a hash in their name and are kept for good; any other
  * address that could be a page gets the one page, whose router takes it from there. The interface under `/api` and
  * missing assets never do.
  */
-export function serveUserInterface(app: NestExpressApplication, folder: string): void {
+export function serveUserInterface(app: PageServer, folder: string): void {
   const page = path.join(folder, 'index.html');
   app.useStaticAssets(folder, { index: false, setHeaders: setCaching });
   app.use((request: Request, response: Response, next: NextFunction) => {
