@@ -1,7 +1,9 @@
 import { createRequire } from 'node:module';
 import { fileURLToPath } from 'node:url';
 import react from '@vitejs/plugin-react';
+import type { Plugin } from 'vite';
 import { defineConfig } from 'vitest/config';
+import { recolorBlueprint } from './src/styles/recolor-blueprint';
 
 process.env['TZ'] = 'UTC';
 
@@ -25,7 +27,9 @@ const ZONES = [
   'Pacific/Honolulu',
 ];
 
-const packed = createRequire(import.meta.url)('moment-timezone/data/packed/latest.json') as { zones: string[] };
+const packed = createRequire(import.meta.url)('moment-timezone/data/packed/latest.json') as {
+  zones: string[];
+};
 
 function packedZone(name: string): string {
   const zone = packed.zones.find((line) => line.startsWith(`${name}|`));
@@ -35,8 +39,16 @@ function packedZone(name: string): string {
 
 const inShared = (file: string): string => fileURLToPath(new URL(`../shared/src/${file}`, import.meta.url));
 
+/** Blueprint's stylesheet with its own colours turned into ours, see recolor-blueprint.ts. */
+const recoloredBlueprint: Plugin = {
+  name: 'recolored-blueprint',
+  enforce: 'pre',
+  transform: (code, id) =>
+    /@blueprintjs[\\/].*\.css$/.test(id.split('?')[0] ?? '') ? recolorBlueprint(code) : null,
+};
+
 export default defineConfig({
-  plugins: [react()],
+  plugins: [recoloredBlueprint, react()],
   define: { __ZONES__: JSON.stringify(ZONES.map(packedZone)) },
   resolve: {
     // Regular expressions on purpose: a plain string would also catch the testing entry point.

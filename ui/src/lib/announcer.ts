@@ -9,46 +9,46 @@ type Speak = (text: string) => void;
 
 let speakPolitely: Speak | null = null;
 let speakAtOnce: Speak | null = null;
-let waiting: string[] = [];
+const waiting = new Map<string, () => string>();
 let spokenAt = Number.NEGATIVE_INFINITY;
 let timer: ReturnType<typeof setTimeout> | undefined;
+
+function reset(): void {
+  speakPolitely = null;
+  speakAtOnce = null;
+  waiting.clear();
+  spokenAt = Number.NEGATIVE_INFINITY;
+  clearTimeout(timer);
+  timer = undefined;
+}
 
 /** Joins the two regions of the page to the announcer; answers how to part them. */
 export function joinRegions(polite: Speak, assertive: Speak): () => void {
   speakPolitely = polite;
   speakAtOnce = assertive;
-  return () => {
-    speakPolitely = null;
-    speakAtOnce = null;
-    waiting = [];
-    spokenAt = Number.NEGATIVE_INFINITY;
-    clearTimeout(timer);
-    timer = undefined;
-  };
+  return reset;
 }
 
 function speak(): void {
   timer = undefined;
-  if (waiting.length === 0) return;
+  const texts = [...waiting.values()].map((words) => words()).filter((text) => text !== '');
+  waiting.clear();
+  if (texts.length === 0) return;
   spokenAt = readDeviceClock();
-  speakPolitely?.(waiting.join('; '));
-  waiting = [];
-}
-
-function schedule(): void {
-  if (timer !== undefined) return;
-  const interval = readPreferences().announceSeconds * 1000;
-  timer = setTimeout(speak, Math.max(100, spokenAt + interval - readDeviceClock()));
+  speakPolitely?.(texts.join('; '));
 }
 
 /**
- * Says something politely, together with whatever else came since the last time.
- * The same words are said once.
+ * Says something politely, together with whatever else came since the last time. Words under the same `key` (the text
+ * itself when absent) replace one another; given as a function they are made at the moment of speaking.
  */
-export function announce(text: string): void {
-  if (readPreferences().announce === 'act-now') return;
-  waiting = [...waiting.filter((other) => other !== text), text];
-  schedule();
+export function announce(words: string | (() => string), key?: string): void {
+  if (speakPolitely === null || readPreferences().announce === 'act-now') return;
+  const make = typeof words === 'string' ? () => words : words;
+  waiting.set(key ?? make(), make);
+  if (timer !== undefined) return;
+  const interval = readPreferences().announceSeconds * 1000;
+  timer = setTimeout(speak, Math.max(100, spokenAt + interval - readDeviceClock()));
 }
 
 /** Says an "Act now" at once. For nothing else. */

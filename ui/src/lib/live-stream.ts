@@ -41,8 +41,8 @@ function parse(text: string): unknown {
 
 /**
  * One live stream of one terminal. The browser's EventSource resumes by itself after a short break. When nothing has
- * come for ten seconds the stream counts as lost: it is opened anew every few seconds, what is on screen is
- * asked for every 15 s meanwhile, and everything once more when the stream is back.
+ * come for ten seconds the stream counts as lost: it is opened anew every few seconds, from the last change that was seen,
+ * and what is on screen is asked for every 15 s meanwhile.
  */
 export class LiveStream {
   private state: LiveState = { live: false, lastWordAt: null, retryInSeconds: 0 };
@@ -51,6 +51,7 @@ export class LiveStream {
   private silentSince = 0;
   private lostAt: number | null = null;
   private polledAt = 0;
+  private lastEventId = '';
   private readonly watchers = new Set<() => void>();
 
   constructor(
@@ -85,11 +86,13 @@ export class LiveStream {
 
   private connect(): void {
     this.source?.close();
-    const source = this.open(`/api/live?terminal=${encodeURIComponent(this.terminal)}`);
+    const question = new URLSearchParams({ terminal: this.terminal });
+    if (this.lastEventId !== '') question.set('lastEventId', this.lastEventId);
+    const source = this.open(`/api/live?${question.toString()}`);
     this.source = source;
     source.addEventListener('beat', (event) => this.onBeat(parse(event.data as string)));
-    source.addEventListener('turn', (event) => this.onObject('turn', parse(event.data as string)));
-    source.addEventListener('alert', (event) => this.onObject('alert', parse(event.data as string)));
+    source.addEventListener('turn', (event) => this.onObject('turn', event));
+    source.addEventListener('alert', (event) => this.onObject('alert', event));
     source.addEventListener('reload', () => this.heard({ kind: 'reload' }));
     source.addEventListener('open', () => this.heard(null));
   }
@@ -105,7 +108,9 @@ export class LiveStream {
     this.heard(null);
   }
 
-  private onObject(kind: 'turn' | 'alert', data: unknown): void {
+  private onObject(kind: 'turn' | 'alert', event: MessageEvent): void {
+    const data = parse(event.data as string);
+    if (event.lastEventId !== '') this.lastEventId = event.lastEventId;
     if (kind === 'turn') {
       const turn = objectIn<WireTurn>(data, 'turn');
       this.heard(turn === null ? null : { kind, turn });
@@ -120,8 +125,8 @@ export class LiveStream {
     this.silentSince = readDeviceClock();
     this.lostAt = null;
     this.set({ live: true, lastWordAt: readNow(), retryInSeconds: 0 });
-    // A stream opened anew starts at the present: what happened in between is asked for.
-    if (wasLost) this.take({ kind: 'reload' });
+    // A stream that does not know where it stopped starts at the present: what happened in between is asked for.
+    if (wasLost && this.lastEventId === '') this.take({ kind: 'reload' });
     if (message !== null) this.take(message);
   }
 

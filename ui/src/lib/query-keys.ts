@@ -17,7 +17,7 @@ export interface AlertQuestion {
  * general to special; whatever a fetcher uses is in its key.
  */
 export const queryKeys = {
-  session: { all: ['session'] as const, list: ['session', 'list'] as const },
+  session: { all: ['session'] as const, list: ['own-sessions'] as const },
   setup: { all: ['set-up'] as const },
   demo: { all: ['demo'] as const },
   health: { all: ['health'] as const },

@@ -1,0 +1,93 @@
+import type { RouteObject } from 'react-router-dom';
+import { AnyShell } from './any-shell';
+import { DeskShell } from './desk-shell';
+import { Permitted, SignedInOnly, ToBoard, ToHome } from './guards';
+import { PhoneShell } from './phone-shell';
+import { PlainShell } from './plain-shell';
+import { NotFoundPage } from './routes/not-found-page';
+import { RouteFault } from './route-fault';
+
+const boardPage = () => import('./routes/board-page').then(({ BoardPage }) => ({ Component: BoardPage }));
+const alertsPage = () => import('./routes/alerts-page').then(({ AlertsPage }) => ({ Component: AlertsPage }));
+const historyPage = () =>
+  import('./routes/history-page').then(({ HistoryPage }) => ({ Component: HistoryPage }));
+const timetablesPage = () =>
+  import('./routes/timetables-page').then(({ TimetablesPage }) => ({ Component: TimetablesPage }));
+const setupPage = () => import('./routes/setup-page').then(({ SetupPage }) => ({ Component: SetupPage }));
+const myPage = () => import('./routes/my-page').then(({ MyPage }) => ({ Component: MyPage }));
+const peoplePage = () => import('./routes/people-page').then(({ PeoplePage }) => ({ Component: PeoplePage }));
+const mePage = () => import('./routes/me-page').then(({ MePage }) => ({ Component: MePage }));
+const signInPage = () =>
+  import('./routes/sign-in-page').then(({ SignInPage }) => ({ Component: SignInPage }));
+const welcomePage = () =>
+  import('./routes/welcome-page').then(({ WelcomePage }) => ({ Component: WelcomePage }));
+const linkPage = () => import('./routes/link-page').then(({ LinkPage }) => ({ Component: LinkPage }));
+const helpPage = () => import('./routes/help-page').then(({ HelpPage }) => ({ Component: HelpPage }));
+const keysPage = () => import('./routes/keys-page').then(({ KeysPage }) => ({ Component: KeysPage }));
+const accessibilityPage = () =>
+  import('./routes/accessibility-page').then(({ AccessibilityPage }) => ({ Component: AccessibilityPage }));
+
+const deskPages: RouteObject[] = [
+  {
+    element: <Permitted permission="board.read" />,
+    children: [
+      { path: '/board', element: <ToBoard /> },
+      { path: '/board/:terminal', lazy: boardPage },
+      { path: '/turns/:turnId', lazy: boardPage },
+    ],
+  },
+  { element: <Permitted permission="alerts.read" />, children: [{ path: '/alerts', lazy: alertsPage }] },
+  { element: <Permitted permission="history.read" />, children: [{ path: '/history', lazy: historyPage }] },
+  {
+    element: <Permitted permission="timetables.read" />,
+    children: [{ path: '/timetables/*', lazy: timetablesPage }],
+  },
+  { element: <Permitted permission="plans.read" />, children: [{ path: '/setup', lazy: setupPage }] },
+  { element: <Permitted permission="people.manage" />, children: [{ path: '/people', lazy: peoplePage }] },
+];
+
+const phonePages: RouteObject[] = [
+  {
+    element: <Permitted permission="entries.record" />,
+    children: [
+      { path: '/my', lazy: myPage },
+      { path: '/my/turn/:turnId', lazy: myPage },
+    ],
+  },
+];
+
+/** Every page, in the bars it stands in. Pages load when they are opened; the phone never loads the desk's. */
+export const routes: RouteObject[] = [
+  {
+    errorElement: <RouteFault />,
+    children: [
+      {
+        element: <SignedInOnly />,
+        children: [
+          { path: '/', element: <ToHome /> },
+          { element: <DeskShell />, children: deskPages },
+          { element: <PhoneShell />, children: phonePages },
+          { element: <AnyShell />, children: [{ path: '/me', lazy: mePage }] },
+        ],
+      },
+      {
+        element: <AnyShell />,
+        children: [
+          { path: '/help', lazy: helpPage },
+          { path: '/keys', lazy: keysPage },
+          { path: '/accessibility', lazy: accessibilityPage },
+          { path: '*', element: <NotFoundPage /> },
+        ],
+      },
+      {
+        element: <PlainShell />,
+        children: [
+          { path: '/sign-in', lazy: signInPage },
+          { path: '/welcome', lazy: welcomePage },
+          { path: '/link/:token', lazy: linkPage },
+          { path: '/links/:token', lazy: linkPage },
+        ],
+      },
+    ],
+  },
+];

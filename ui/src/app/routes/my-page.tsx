@@ -1,0 +1,6 @@
+import { PageHeader } from '../../components/page-header';
+
+/** Heading alone, until the parts of the page stand. */
+export function MyPage() {
+  return <PageHeader title="My" />;
+}

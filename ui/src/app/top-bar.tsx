@@ -1,0 +1,92 @@
+import { useQuery } from '@tanstack/react-query';
+import type { WireTerminal } from '@stubpost/shared';
+import { Link, useMatch, useNavigate, useSearchParams } from 'react-router-dom';
+import { Clock, Today } from '../components/clock';
+import { PostMark } from '../components/post-mark';
+import { standingAlertsQuery } from '../lib/standing-alerts';
+import { rememberTerminal } from '../lib/terminal-choice';
+import { formatServiceDate } from '../lib/time-display';
+import { MeMenu } from './me-menu';
+import styles from './shell.module.css';
+
+function TerminalPlace({ terminal, terminals }: { terminal: WireTerminal; terminals: WireTerminal[] }) {
+  const navigate = useNavigate();
+  const isBoard = useMatch('/board/:terminal') !== null;
+  const isTurn = useMatch('/turns/:turnId') !== null;
+  const [search, setSearch] = useSearchParams();
+  const choose = (code: string): void => {
+    rememberTerminal(code);
+    if (isBoard || isTurn) void navigate(`/board/${code}`);
+    else {
+      search.set('terminal', code);
+      setSearch(search);
+    }
+  };
+  if (terminals.length < 2) return <div className={styles.place}>{terminal.name}</div>;
+  return (
+    <div className={styles.place}>
+      <select aria-label="Terminal" value={terminal.code} onChange={(event) => choose(event.target.value)}>
+        {terminals.map(({ code, name }) => (
+          <option key={code} value={code}>
+            {name}
+          </option>
+        ))}
+      </select>
+    </div>
+  );
+}
+
+function AlertCount({ terminal }: { terminal: string }) {
+  const { data } = useQuery(standingAlertsQuery(terminal));
+  const notTaken = (data ?? []).filter(({ state }) => state === 'raised').length;
+  return (
+    <Link className={styles.count} to="/alerts">
+      <span>
+        <b>{data?.length ?? '–'}</b> {data?.length === 1 ? 'alert' : 'alerts'}
+      </span>
+      {notTaken > 0 && <span className={styles.notTaken}>{notTaken} not taken</span>}
+    </Link>
+  );
+}
+
+function ServiceDate({ zone }: { zone: string }) {
+  const asked = useSearchParams()[0].get('date');
+  if (asked !== null && /^\d{4}-\d{2}-\d{2}$/.test(asked)) {
+    return <time dateTime={asked}>{formatServiceDate(asked)}</time>;
+  }
+  return <Today zone={zone} />;
+}
+
+export interface TopBarProps {
+  terminal: WireTerminal | null;
+  terminals: WireTerminal[];
+  zone: string;
+  onFind: () => void;
+}
+
+/** Terminal, service date, clock with zone, alerts, find, me: the order never changes. */
+export function TopBar({ terminal, terminals, zone, onFind }: TopBarProps) {
+  return (
+    <header className={styles.topbar}>
+      <Link className={styles.brand} to="/">
+        <PostMark />
+        Stubpost
+      </Link>
+      {terminal !== null && <TerminalPlace terminal={terminal} terminals={terminals} />}
+      <div className={styles.date}>
+        <ServiceDate zone={zone} />
+      </div>
+      <Clock zone={zone} className={styles.clock ?? ''} />
+      {terminal !== null && <AlertCount terminal={terminal.code} />}
+      <div className={styles.find}>
+        {terminal !== null && (
+          <button type="button" onClick={onFind} aria-keyshortcuts="Control+K">
+            <span>Find train, set, car, person or track</span>
+            <kbd>Ctrl K</kbd>
+          </button>
+        )}
+      </div>
+      <MeMenu />
+    </header>
+  );
+}

@@ -1,0 +1,47 @@
+import styles from './help.module.css';
+
+const LIFE =
+  'Scheduled, Inbound, Arrived, Secured, Ends changed, Crew in cab, Ready, Departed, Tested, Closed; or Annulled.';
+
+const WORDS: readonly { word: string; means: string }[] = [
+  { word: 'Turn', means: 'one train at one terminal from its arrival to its next departure' },
+  { word: 'Life of a turn', means: LIFE },
+  {
+    word: 'To spare, short',
+    means:
+      'how long the work may still wait without costing the scheduled departure; short is how much is missing',
+  },
+  {
+    word: 'By hand, by radio, by feed, entered later',
+    means:
+      'how a fact is known: from the one who did it, over the radio by the desk, from another system, afterwards',
+  },
+  {
+    word: 'Withdrawn, corrected',
+    means: 'nothing is deleted: taking back and correcting are entries of their own, and the first one stays',
+  },
+  {
+    word: 'Taken, set aside, cleared, closed',
+    means:
+      'somebody has the alert; it waits until a time with a reason; its cause is gone; its cause is named',
+  },
+  { word: 'First train out, tie-up', means: 'a turn without an arrival; a turn without a departure' },
+  { word: 'Extra', means: 'a turn that is in no timetable, entered by hand' },
+];
+
+/** Words that have one meaning here. */
+export function WordList() {
+  return (
+    <section className="sp-panel" aria-labelledby="words">
+      <h2 id="words">Words</h2>
+      <dl className={styles.words}>
+        {WORDS.map(({ word, means }) => (
+          <div key={word}>
+            <dt>{word}</dt>
+            <dd>{means}</dd>
+          </div>
+        ))}
+      </dl>
+    </section>
+  );
+}

@@ -1,0 +1,56 @@
+import type { WirePerson } from '@stubpost/shared';
+import { Link } from 'react-router-dom';
+import { formatRelative } from '../../../lib/time-display';
+import { useNow } from '../../../lib/use-now';
+import { rolesInWords } from '../model/role-words';
+import styles from './people.module.css';
+
+function standing(person: WirePerson): string {
+  if (!person.active) return 'may not sign in';
+  if (!person.hasPassword) return 'link not used yet';
+  return person.sessions === 1 ? '1 session' : `${person.sessions} sessions`;
+}
+
+/** Everybody with a sign-in, by name. The name opens the person. */
+export function PeopleTable({
+  people,
+  chosenId,
+}: {
+  people: readonly WirePerson[];
+  chosenId: string | null;
+}) {
+  const now = useNow(60);
+  const sorted = [...people].sort((one, other) => one.name.localeCompare(other.name));
+  return (
+    <div className="sp-table-scroll" role="region" aria-label="People" tabIndex={0}>
+      <table className="sp-table">
+        <thead>
+          <tr>
+            <th scope="col">Name</th>
+            <th scope="col">E-mail</th>
+            <th scope="col">Roles</th>
+            <th scope="col">Sign-in</th>
+            <th scope="col">Last seen</th>
+          </tr>
+        </thead>
+        <tbody>
+          {sorted.map((person) => (
+            <tr key={person.id} className={person.id === chosenId ? styles.chosen : undefined}>
+              <th scope="row">
+                <Link to={`?person=${person.id}`} aria-current={person.id === chosenId ? 'true' : undefined}>
+                  {person.name}
+                </Link>
+              </th>
+              <td>{person.email}</td>
+              <td>{rolesInWords(person.roles)}</td>
+              <td className="nowrap">{standing(person)}</td>
+              <td className="nowrap">
+                {person.lastSeenAt === null ? 'never' : formatRelative(person.lastSeenAt, now)}
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}

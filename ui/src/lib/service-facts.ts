@@ -1,0 +1,26 @@
+import type { SetupAnswer, WireDemo, WireHealth } from '@stubpost/shared';
+import { queryOptions } from '@tanstack/react-query';
+import { api } from './api-client';
+import { queryKeys } from './query-keys';
+
+/** Whether this is a demo, and while it is still being filled, how far. */
+export const demoQuery = queryOptions({
+  queryKey: queryKeys.demo.all,
+  queryFn: ({ signal }) => api.get<WireDemo>('/api/demo', { signal }),
+  staleTime: 5 * 60_000,
+  refetchInterval: (query) => (query.state.data?.state === 'filling' ? 5000 : false),
+});
+
+/** Version of the service and whether it is well. */
+export const healthQuery = queryOptions({
+  queryKey: queryKeys.health.all,
+  queryFn: ({ signal }) => api.get<WireHealth>('/api/health', { signal }),
+  staleTime: 5 * 60_000,
+});
+
+/** Whether this installation still waits for its first administrator. */
+export const setupQuery = queryOptions({
+  queryKey: queryKeys.setup.all,
+  queryFn: ({ signal }) => api.get<SetupAnswer>('/api/setup', { signal }),
+  staleTime: 60_000,
+});
