@@ -42,7 +42,12 @@ export const demoTerminals: readonly DemoTerminal[] = [
     stationId: 'pellmoor',
     tracks: [track('1', 8, 0.4), track('2', 8, 0.4), track('3', 10, 0), track('4', 6, 0)],
   },
-  { code: 'WIN', name: 'Winnock Head', stationId: 'winnock-head', tracks: [track('1', 6, 0.8), track('2', 6, 0.8)] },
+  {
+    code: 'WIN',
+    name: 'Winnock Head',
+    stationId: 'winnock-head',
+    tracks: [track('1', 6, 0.8), track('2', 6, 0.8)],
+  },
 ];
 
 /** One line of the railroad: always between the Quay and an outer terminal. */

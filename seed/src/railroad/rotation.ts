@@ -59,11 +59,16 @@ function tripsOf(line: DemoLine, pattern: DayPattern): Unassigned[] {
 }
 
 /** First in, first out at each station; a departure that finds no set standing takes a new one from the yard. */
-function assignBlocks(trips: readonly Unassigned[], pattern: DayPattern): Array<Unassigned & { block: string }> {
+function assignBlocks(
+  trips: readonly Unassigned[],
+  pattern: DayPattern,
+): Array<Unassigned & { block: string }> {
   const standing = new Map<string, Array<{ block: string; sinceMinute: number }>>();
   const prefix = pattern === 'weekday' ? 'W' : 'E';
   let blocks = 0;
-  const byDeparture = [...trips].sort((a, b) => a.departsMinute - b.departsMinute || a.train.localeCompare(b.train));
+  const byDeparture = [...trips].sort(
+    (a, b) => a.departsMinute - b.departsMinute || a.train.localeCompare(b.train),
+  );
   return byDeparture.map((trip) => {
     const here = standing.get(trip.fromStation) ?? [];
     const position = here.findIndex((set) => set.sinceMinute + shortestLayoverMinutes <= trip.departsMinute);
@@ -86,7 +91,9 @@ function weaken<Trip extends Unassigned & { block: string }>(trips: Trip[]): Tri
   if (!inbound || !outbound) return trips;
   const departsMinute = inbound.arrivesMinute + weakLayoverMinutes;
   return trips.map((trip) =>
-    trip === outbound ? { ...trip, departsMinute, arrivesMinute: departsMinute + trip.line.runMinutes } : trip,
+    trip === outbound
+      ? { ...trip, departsMinute, arrivesMinute: departsMinute + trip.line.runMinutes }
+      : trip,
   );
 }
 

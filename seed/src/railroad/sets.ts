@@ -1,7 +1,12 @@
 /** An equipment set of the demo: a locomotive, coaches and a cab car, in order from the locomotive. */
 export interface DemoSet {
   label: string;
-  units: ReadonlyArray<{ number: string; kind: 'locomotive' | 'coach' | 'cab-car'; lengthFeet: number; tons: number }>;
+  units: ReadonlyArray<{
+    number: string;
+    kind: 'locomotive' | 'coach' | 'cab-car';
+    lengthFeet: number;
+    tons: number;
+  }>;
 }
 
 const setCount = 24;

@@ -16,7 +16,8 @@ function clock(minute: number): string {
   return `${two(Math.floor(minute / 60))}:${two(Math.floor(minute % 60))}:00`;
 }
 
-const csv = (rows: ReadonlyArray<readonly string[]>): string => rows.map((row) => row.join(',')).join('\n') + '\n';
+const csv = (rows: ReadonlyArray<readonly string[]>): string =>
+  rows.map((row) => row.join(',')).join('\n') + '\n';
 
 function stopsFile(): string {
   const stations = demoTerminals.flatMap((terminal) => [
@@ -29,8 +30,18 @@ function stopsFile(): string {
       track.label,
     ]),
   ]);
-  const between = [...new Set(demoLines.flatMap((line) => line.between))].map((name) => [slug(name), name, '0', '', '']);
-  return csv([['stop_id', 'stop_name', 'location_type', 'parent_station', 'platform_code'], ...stations, ...between]);
+  const between = [...new Set(demoLines.flatMap((line) => line.between))].map((name) => [
+    slug(name),
+    name,
+    '0',
+    '',
+    '',
+  ]);
+  return csv([
+    ['stop_id', 'stop_name', 'location_type', 'parent_station', 'platform_code'],
+    ...stations,
+    ...between,
+  ]);
 }
 
 function stopTimesOf(trip: DemoTrip, tripId: string): string[][] {

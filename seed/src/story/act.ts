@@ -35,6 +35,8 @@ export interface StoryTurn {
   outboundTrain: string | null;
   scheduledArrivalAt: Instant | null;
   scheduledDepartureAt: Instant | null;
+  /** The block of the timetable that the turn belongs to. */
+  block: string | null;
 }
 
 /** What one set does on one day: its turns in order, its crews by shift, and its units' numbers. */

@@ -11,7 +11,8 @@ export interface DemoDay {
   badWeek: boolean;
 }
 
-const dayNumber = (serviceDate: string): number => Math.floor(Date.parse(`${serviceDate}T00:00:00Z`) / (24 * millisecondsInHour));
+const dayNumber = (serviceDate: string): number =>
+  Math.floor(Date.parse(`${serviceDate}T00:00:00Z`) / (24 * millisecondsInHour));
 
 /** One week in nine is bad, so that eight weeks of history usually hold one. */
 const weeksBetweenBadWeeks = 9;

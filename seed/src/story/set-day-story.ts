@@ -13,7 +13,11 @@ function arrivalDelaySeconds(carriedSeconds: number, hour: number, day: DemoDay,
   const line = 15 + 45 * random.normal() + (isRush(hour) ? 35 : 0);
   const incident = random.next() < (day.badWeek ? incidentChance.badWeek : incidentChance.usual);
   const extra = incident ? 240 + 480 * random.next() : 0;
-  return Math.max(-45, carriedSeconds - recoverySeconds + line + extra, carriedSeconds > 300 ? carriedSeconds - 240 : -45);
+  return Math.max(
+    -45,
+    carriedSeconds - recoverySeconds + line + extra,
+    carriedSeconds > 300 ? carriedSeconds - 240 : -45,
+  );
 }
 
 const byFeed = (observedAt: Instant, content: Act['content'], random: Random): Act => ({
@@ -25,7 +29,8 @@ const byFeed = (observedAt: Instant, content: Act['content'], random: Random): A
 });
 
 function openingActs(setDay: SetDay, turn: StoryTurn, index: number, shift: number): Act[] {
-  const startsAt = (turn.scheduledArrivalAt ?? turn.scheduledDepartureAt ?? 0) - minutes(index === 0 ? 45 : 25);
+  const startsAt =
+    (turn.scheduledArrivalAt ?? turn.scheduledDepartureAt ?? 0) - minutes(index === 0 ? 45 : 25);
   const desk = (content: Act['content'], seconds: number): Act => ({
     observedAt: addSeconds(startsAt, seconds),
     toldAt: addSeconds(startsAt, seconds),
@@ -55,28 +60,49 @@ function shiftOf(setDay: SetDay, index: number): number {
  * What a set and its crews do on one day, turn after turn: lateness is carried along, the terminal's work is
  * played by the plan's own durations. The same date and set give the same story.
  */
-export function storyOfSetDay(setDay: SetDay, planSteps: readonly PlanStep[], dayStartsAt: Instant): TurnStory[] {
+export function storyOfSetDay(
+  setDay: SetDay,
+  planSteps: readonly PlanStep[],
+  dayStartsAt: Instant,
+): TurnStory[] {
   const day = demoDay(setDay.turns[0]?.serviceDate ?? '');
   let carriedSeconds = 0;
   return setDay.turns.map((turn, index) => {
-    const random = randomOf(`${turn.serviceDate}|${turn.terminal}|${turn.inboundTrain}|${turn.outboundTrain}`);
+    const random = randomOf(
+      `${turn.serviceDate}|${turn.terminal}|${turn.inboundTrain}|${turn.outboundTrain}`,
+    );
     const shift = shiftOf(setDay, index);
     const crew = setDay.shifts[shift];
     if (!crew) throw new Error(`set ${setDay.set} has no crew for shift ${shift}`);
     const hour = hourAt(turn.scheduledArrivalAt ?? turn.scheduledDepartureAt ?? dayStartsAt, dayStartsAt);
     const acts = openingActs(setDay, turn, index, shift);
-    const arrivedAt = turn.scheduledArrivalAt === null
-      ? null
-      : addSeconds(turn.scheduledArrivalAt, Math.round(arrivalDelaySeconds(carriedSeconds, hour, day, random)));
+    const arrivedAt =
+      turn.scheduledArrivalAt === null
+        ? null
+        : addSeconds(
+            turn.scheduledArrivalAt,
+            Math.round(arrivalDelaySeconds(carriedSeconds, hour, day, random)),
+          );
     if (arrivedAt !== null && turn.scheduledArrivalAt !== null) {
       if (secondsBetween(turn.scheduledArrivalAt, arrivedAt) > 150) {
         const expectedAt = Math.round(arrivedAt / 60_000) * 60_000;
-        acts.push(byFeed(turn.scheduledArrivalAt - minutes(9), { kind: 'expected-arrival', expectedAt }, random));
+        acts.push(
+          byFeed(turn.scheduledArrivalAt - minutes(9), { kind: 'expected-arrival', expectedAt }, random),
+        );
       }
       acts.push(byFeed(arrivedAt, { kind: 'arrival' }, random));
     }
     const steps = stepsFor(planSteps, { kind: turn.kind, reverses: true });
-    const work = playSteps({ steps, turn, arrivedAt, day, hour, random, cars: setDay.cars, engineerName: crew.engineerName });
+    const work = playSteps({
+      steps,
+      turn,
+      arrivedAt,
+      day,
+      hour,
+      random,
+      cars: setDay.cars,
+      engineerName: crew.engineerName,
+    });
     acts.push(...work.acts);
     if (work.departedAt !== null && turn.scheduledDepartureAt !== null) {
       acts.push(byFeed(work.departedAt, { kind: 'departure' }, random));

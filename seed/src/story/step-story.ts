@@ -78,7 +78,9 @@ function finishes(scene: StepScene): Map<string, Instant> {
     if (ready.length === 0) break;
     for (const step of ready) {
       const notBefore =
-        step.notBeforeSeconds === null ? start : addSeconds(scene.turn.scheduledDepartureAt ?? start, step.notBeforeSeconds);
+        step.notBeforeSeconds === null
+          ? start
+          : addSeconds(scene.turn.scheduledDepartureAt ?? start, step.notBeforeSeconds);
       const predecessors = step.after.map((key) => done.get(key) ?? start);
       const begins = Math.max(start, notBefore, ...predecessors) + 1000 * 10 * scene.random.next();
       done.set(step.key, addSeconds(begins, durationOf(step, scene)));
