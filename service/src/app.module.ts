@@ -1,4 +1,5 @@
 import { type DynamicModule, Module } from '@nestjs/common';
+import { AlertsModule } from './alerts/alerts.module';
 import { AuthModule } from './auth/auth.module';
 import type { Clock } from './common/clock';
 import { CommonModule } from './common/common.module';
@@ -11,8 +12,12 @@ import { DocsModule } from './docs/docs.module';
 import { ENTITIES } from './entities';
 import { HealthModule } from './health/health.module';
 import { HistoryModule } from './history/history.module';
+import { LiveModule } from './live/live.module';
 import { PeopleModule } from './people/people.module';
+import { PlansModule } from './plans/plans.module';
+import { SetsModule } from './sets/sets.module';
 import { TerminalsModule } from './terminals/terminals.module';
+import { TurnsModule } from './turns/turns.module';
 
 /** The whole service: what everybody needs first, then one module per area. */
 @Module({})
@@ -28,6 +33,11 @@ export class AppModule {
         AuthModule,
         PeopleModule,
         TerminalsModule,
+        PlansModule,
+        SetsModule,
+        TurnsModule,
+        AlertsModule,
+        LiveModule,
         HistoryModule,
         HealthModule,
         DemoModule,

@@ -17,7 +17,7 @@ export interface CrewMemberOfTurn {
 @Entity('turn')
 @Index('turn_day', ['terminalCode', 'serviceDate'])
 @Index('turn_span', ['terminalCode', 'spanTo'])
-@Index('turn_open', ['spanFrom'], { where: '"is_open" = 1' })
+@Index('turn_unsettled', ['spanFrom'], { where: '"settled_at" IS NULL' })
 @Index('turn_set', ['set', 'spanFrom'])
 @Index('turn_pair', ['terminalCode', 'serviceDate', 'pairKey'], {
   unique: true,
@@ -72,8 +72,9 @@ export class TurnRow {
   @Column({ name: 'planned_set', type: 'text', nullable: true })
   plannedSet: string | null;
 
-  @Column({ type: 'boolean', nullable: true })
-  reverses: boolean | null;
+  /** Whether the train goes back the way it came: 1, 0, or null when unknown. */
+  @Column({ type: 'integer', nullable: true })
+  reverses: number | null;
 
   @Column({ name: 'plan_id', type: 'text' })
   planId: string;
@@ -116,9 +117,9 @@ export class TurnRow {
   @Column(instantColumn('span_to'))
   spanTo: number;
 
-  /** Whether the sweep still has to look at it. */
-  @Column({ name: 'is_open', type: 'boolean' })
-  isOpen: boolean;
+  /** From when on nothing about the turn changes by the passing of time; null while the sweep looks at it. */
+  @Column(nullableInstantColumn('settled_at'))
+  settledAt: number | null;
 
   /** Set when a timetable takes the turn back before anything has happened. */
   @Column(nullableInstantColumn('withdrawn_at'))

@@ -18,5 +18,13 @@ export const terminalCodeSchema = z
   .trim()
   .regex(/^[A-Za-z0-9][A-Za-z0-9-]{0,11}$/, 'a code is 1 to 12 letters, digits or dashes');
 
-/** Free text that a person writes; blanks round it are dropped. */
-export const textSchema = (longest: number) => z.string().trim().min(1).max(longest);
+const halfOfPair = /\p{Surrogate}/u;
+
+/** Free text that a person writes; blanks round it are dropped. Half of a surrogate pair is no text. */
+export const textSchema = (longest: number) =>
+  z
+    .string()
+    .trim()
+    .min(1)
+    .max(longest)
+    .refine((text) => !halfOfPair.test(text), { message: 'not a text' });
