@@ -19,6 +19,11 @@ import { PersonRoleRow } from './people/person-role.entity';
 import { PersonRow } from './people/person.entity';
 import { TerminalRow } from './terminals/terminal.entity';
 import { TrackRow } from './terminals/track.entity';
+import { TimetableActivationRow } from './timetables/timetable-activation.entity';
+import { TimetableContentRow } from './timetables/timetable-content.entity';
+import { TimetableDayRow } from './timetables/timetable-day.entity';
+import { TimetableTerminalRow } from './timetables/timetable-terminal.entity';
+import { TimetableRow } from './timetables/timetable.entity';
 
 /** Every table, by area. */
 export const ENTITIES: EntityClass[] = [
@@ -48,4 +53,10 @@ export const ENTITIES: EntityClass[] = [
   // history
   HistoryImportRow,
   PastDepartureRow,
+  // timetables
+  TimetableRow,
+  TimetableContentRow,
+  TimetableActivationRow,
+  TimetableTerminalRow,
+  TimetableDayRow,
 ];

@@ -8,6 +8,7 @@ import { CreateEntries1764600012000 } from './1764600012000-create-entries';
 import { CreateSets1764600013000 } from './1764600013000-create-sets';
 import { CreateAlerts1764600014000 } from './1764600014000-create-alerts';
 import { CreateHistory1764600030000 } from './1764600030000-create-history';
+import { CreateTimetables1764600040000 } from './1764600040000-create-timetables';
 
 /** Every migration in the order it runs. Never edited once merged; only added to. */
 export const MIGRATIONS: (new () => MigrationInterface)[] = [
@@ -20,4 +21,5 @@ export const MIGRATIONS: (new () => MigrationInterface)[] = [
   CreateSets1764600013000,
   CreateAlerts1764600014000,
   CreateHistory1764600030000,
+  CreateTimetables1764600040000,
 ];

@@ -1,0 +1,49 @@
+import type { ImportProblem, TimetableSummary } from '@stubpost/shared';
+import { Column, Entity, PrimaryColumn } from 'typeorm';
+import { instantColumn, jsonColumn, nullableInstantColumn } from '../database/columns';
+
+/** How far the reading of an upload has come; whether a timetable is the running one follows from its activations. */
+export const READING_STATES = ['reading', 'ready', 'refused'] as const;
+export type ReadingState = (typeof READING_STATES)[number];
+
+/** One uploaded timetable and what was found in it. */
+@Entity('timetable')
+export class TimetableRow {
+  @PrimaryColumn({ type: 'text' })
+  id: string;
+
+  @Column({ type: 'integer' })
+  version: number;
+
+  @Column({ type: 'text' })
+  state: string;
+
+  @Column({ name: 'file_name', type: 'text' })
+  fileName: string;
+
+  @Column({ name: 'file_bytes', type: 'integer' })
+  fileBytes: number;
+
+  /** GTFS route types it is read for, such as `2,100-117`. */
+  @Column({ name: 'route_types', type: 'text' })
+  routeTypes: string;
+
+  /** How often reading it was begun: a file that ends the service again and again is given up. */
+  @Column({ type: 'integer' })
+  attempts: number;
+
+  @Column({ name: 'uploaded_by', type: 'text', nullable: true })
+  uploadedBy: string | null;
+
+  @Column(nullableInstantColumn('read_at'))
+  readAt: number | null;
+
+  @Column(jsonColumn('problems'))
+  problems: ImportProblem[];
+
+  @Column({ ...jsonColumn('summary'), nullable: true })
+  summary: TimetableSummary | null;
+
+  @Column(instantColumn('created_at'))
+  createdAt: number;
+}
