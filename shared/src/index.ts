@@ -36,6 +36,8 @@ export type { FeedRow, FeedTables, TimetableReading } from './timetable/reading'
 export type { ReadOutcome } from './timetable/build-timetable';
 export { formatRouteTypes, parseRouteTypes, railRouteTypes } from './timetable/route-types';
 export type { RouteTypes } from './timetable/route-types';
+export { activationOn, spanOfActivation } from './timetable/running';
+export type { Activation } from './timetable/running';
 export {
   addDays,
   calendarDateAt,
