@@ -1,0 +1,136 @@
+import type { AddressInfo } from 'node:net';
+import {
+  type ErrorBody,
+  may,
+  type Role,
+  type RoleGrant,
+  ROLES,
+  ROUTES,
+  type RouteSpec,
+} from '@stubpost/shared';
+import type { Express } from 'express';
+import { SignInService } from '../src/auth/sign-in.service';
+import { SessionCookie } from '../src/auth/session-cookie';
+import { PeopleService } from '../src/people/people.service';
+import { TerminalsService } from '../src/terminals/terminals.service';
+import { bootApp, type Booted } from './support/boot';
+
+/** Somebody who tries every route; null roles: somebody who is not signed in. */
+interface Caller {
+  title: string;
+  personId: string | null;
+  roles: RoleGrant[];
+}
+
+const here = 'HBR';
+const elsewhere = 'CAM';
+
+let booted: Booted;
+let base: string;
+const callers: Caller[] = [];
+
+beforeAll(async () => {
+  booted = await bootApp();
+  for (const code of [here, elsewhere]) {
+    await booted.app.get(TerminalsService).add({ code, name: code, zone: 'America/New_York' });
+  }
+  await booted.app.listen(0, '127.0.0.1');
+  base = `http://127.0.0.1:${(booted.app.getHttpServer().address() as AddressInfo).port}`;
+  callers.push(
+    { title: 'nobody', personId: null, roles: [] },
+    await callerWith('somebody without a role', []),
+  );
+  for (const role of ROLES) {
+    callers.push(await callerWith(`${role} there`, [{ role, terminal: here }]));
+    callers.push(await callerWith(`${role} elsewhere`, [{ role, terminal: elsewhere }]));
+  }
+});
+afterAll(() => booted.close());
+
+async function callerWith(title: string, roles: { role: Role; terminal: string }[]): Promise<Caller> {
+  const email = `${title.replace(/\W+/g, '-')}@example.org`;
+  const { id } = await booted.app.get(PeopleService).add({ email, name: title, roles });
+  return { title, personId: id, roles };
+}
+
+/** The request as that caller would send it: the terminal where the route looks for it, nothing else of use. */
+async function send(route: RouteSpec, caller: Caller): Promise<{ status: number; code: string | undefined }> {
+  const path = route.path.replace(':code', here).replace(/:\w+/g, 'unknown');
+  const headers: Record<string, string> = { 'Content-Type': 'application/json' };
+  if (caller.personId !== null) {
+    const { token } = await booted.app.get(SignInService).openFor(caller.personId, 'walk');
+    headers.Cookie = `${booted.app.get(SessionCookie).name}=${token}`;
+  }
+  const hasBody = route.method === 'POST' || route.method === 'PUT';
+  const stop = new AbortController();
+  const answer = await fetch(`${base}${path}${route.terminal === 'query' ? `?terminal=${here}` : ''}`, {
+    method: route.method,
+    headers,
+    signal: stop.signal,
+    ...(hasBody ? { body: JSON.stringify({ terminal: here }) } : {}),
+  });
+  const isJson = answer.headers.get('content-type')?.includes('application/json') === true;
+  const code = isJson ? ((await answer.json()) as Partial<ErrorBody>).code : undefined;
+  // A live stream would never end by itself.
+  stop.abort();
+  return { status: answer.status, code };
+}
+
+/** What the table and the policy say must come of it. */
+function expected(route: RouteSpec, caller: Caller): 'in' | 'signed out' | 'forbidden' {
+  if (route.permission === 'public') return 'in';
+  if (caller.personId === null) return 'signed out';
+  const isNamed = route.terminal === 'query' || route.terminal === 'path' || route.terminal === 'body';
+  const person = { id: caller.personId, roles: caller.roles };
+  return may(person, route.permission, isNamed ? here : undefined) ? 'in' : 'forbidden';
+}
+
+function outcome(answer: { status: number; code: string | undefined }): string {
+  if (answer.status === 401 && answer.code === 'session.missing') return 'signed out';
+  if (answer.status === 403 && answer.code === 'access.forbidden') return 'forbidden';
+  if (answer.code === 'route.unknown') return 'no such route';
+  return answer.status >= 500 ? `${answer.status}` : 'in';
+}
+
+describe('the table of routes', () => {
+  const titleOf = (route: { method: string; path: string }) => `${route.method} ${route.path}`;
+
+  test('names every route the service has, and none that it has not', () => {
+    const { router } = booted.app.getHttpAdapter().getInstance() as Express;
+    const served = router.stack.flatMap((layer) =>
+      (layer.route?.stack ?? []).map((handler) => `${handler.method.toUpperCase()} ${layer.route?.path}`),
+    );
+    expect([...new Set(served)].sort()).toEqual(ROUTES.map(titleOf).sort());
+  });
+
+  test('names no route twice', () => {
+    expect(new Set(ROUTES.map(titleOf)).size).toBe(ROUTES.length);
+  });
+
+  test('lets somebody in everywhere, and keeps somebody out of all that is not for everybody', () => {
+    for (const route of ROUTES) {
+      const outcomes = new Set(callers.map((caller) => expected(route, caller)));
+      const isForAll = route.permission === 'public';
+      expect([titleOf(route), outcomes.has('in'), outcomes.has('signed out')]).toEqual([
+        titleOf(route),
+        true,
+        !isForAll,
+      ]);
+    }
+  });
+});
+
+describe('every role on every route', () => {
+  test.each(ROUTES.map((route) => [`${route.method} ${route.path}`, route] as const))(
+    '%s',
+    async (_title, route) => {
+      const seen: Record<string, string> = {};
+      const wanted: Record<string, string> = {};
+      for (const caller of callers) {
+        seen[caller.title] = outcome(await send(route, caller));
+        wanted[caller.title] = expected(route, caller);
+      }
+      expect(seen).toEqual(wanted);
+    },
+  );
+});
