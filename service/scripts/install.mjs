@@ -1,4 +1,5 @@
-import { existsSync } from 'node:fs';
+import { createHash } from 'node:crypto';
+import { existsSync, readFileSync } from 'node:fs';
 import { run } from './child.mjs';
 import { childEnvironment, npmEnvironment } from './child-environment.mjs';
 import { digestOf } from './digest.mjs';
@@ -11,12 +12,28 @@ import { ensureToolchain } from './toolchain.mjs';
 const WORKSPACES = ['shared', 'service', 'seed', 'ui'];
 const stamp = new Stamp(STAMP_FOLDER, 'install');
 
+/** The parts of a package.json that npm reads when it installs; a changed script is no reason to install anew. */
+const INSTALL_FIELDS = [
+  'dependencies',
+  'devDependencies',
+  'optionalDependencies',
+  'overrides',
+  'workspaces',
+  'allowScripts',
+];
+
+function manifestFacts(folder) {
+  const manifest = JSON.parse(readFileSync(inRoot(folder, 'package.json'), 'utf8'));
+  return INSTALL_FIELDS.map((field) => manifest[field]);
+}
+
 /** Compiled modules fit one line of Node on one kind of machine; packages fit the lock file. */
 function wantedStamp() {
-  const manifests = ['.', ...WORKSPACES].map((folder) => `${folder}/package.json`);
+  const manifests = JSON.stringify(['.', ...WORKSPACES].map(manifestFacts));
   return {
     runtime: `${process.platform}-${process.arch}-${process.versions.modules}`,
-    packages: digestOf(ROOT, ['package-lock.json', '.npmrc', ...manifests]),
+    lock: digestOf(ROOT, ['package-lock.json', '.npmrc']),
+    manifests: createHash('sha256').update(manifests).digest('hex'),
   };
 }
 
