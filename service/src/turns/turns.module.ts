@@ -5,11 +5,15 @@ import { PlansModule } from '../plans/plans.module';
 import { RecordsModule } from '../records/records.module';
 import { SetsModule } from '../sets/sets.module';
 import { TerminalsModule } from '../terminals/terminals.module';
+import { BoardController } from './board.controller';
 import { CrewCarrier } from './crew-carrier';
 import { EntryRecorder } from './entry-recorder';
 import { RecordingRights } from './recording-rights';
+import { TurnBoardReadModel } from './turn-board.read-model';
+import { TurnBoards } from './turn-boards';
 import { TurnChanges } from './turn-changes';
 import { TurnFiles } from './turn-files';
+import { TurnFinder } from './turn-finder.read-model';
 import { TurnStoreModule } from './turn-store.module';
 import { TurnViews } from './turn-views';
 import { TurnsController } from './turns.controller';
@@ -26,8 +30,19 @@ import { TurnsService } from './turns.service';
     TerminalsModule,
     TurnStoreModule,
   ],
-  controllers: [TurnsController],
-  providers: [CrewCarrier, EntryRecorder, RecordingRights, TurnChanges, TurnFiles, TurnViews, TurnsService],
+  controllers: [BoardController, TurnsController],
+  providers: [
+    CrewCarrier,
+    EntryRecorder,
+    RecordingRights,
+    TurnBoardReadModel,
+    TurnBoards,
+    TurnChanges,
+    TurnFiles,
+    TurnFinder,
+    TurnViews,
+    TurnsService,
+  ],
   exports: [TurnFiles, TurnViews, TurnsService],
 })
 export class TurnsModule {}
