@@ -5,7 +5,7 @@ import {
   type WireStepPlan,
   type WireTurn,
 } from '@stubpost/shared';
-import { queryOptions } from '@tanstack/react-query';
+import { keepPreviousData, queryOptions } from '@tanstack/react-query';
 import { api } from '../../../lib/api-client';
 import { queryKeys } from '../../../lib/query-keys';
 import { myWindow } from '../model/my-turns';
@@ -45,7 +45,6 @@ export function myBoardQuery(terminal: string, now: number) {
     queryKey: queryKeys.turns.board(question),
     queryFn: ({ signal }) => api.get<WireBoard>('/api/board', { signal, query: question }),
     refetchInterval: askAgainMilliseconds,
-    placeholderData: (previous: WireBoard | undefined) =>
-      previous?.terminal === terminal ? previous : undefined,
+    placeholderData: keepPreviousData,
   });
 }

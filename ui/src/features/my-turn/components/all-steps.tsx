@@ -1,0 +1,72 @@
+import type { WireStep } from '@stubpost/shared';
+import { StepMark } from '../../../components/step-mark';
+import { STEP_STATE_WORDS } from '../../../components/words';
+import { formatTime } from '../../../lib/time-display';
+import { isSettled } from '../model/next-act';
+import { recordWords } from './last-entry';
+import { OnwardSign } from './phone-icons';
+import styles from './phone-parts.module.css';
+import { useTurnScene } from './turn-context';
+import { useHeadingFocus } from './use-heading-focus';
+
+/** Every step of the turn with how it stands. Touching one brings it under the bar, also out of order. */
+export function AllSteps({ onPick, onBack }: { onPick: (key: string) => void; onBack: () => void }) {
+  const { turn } = useTurnScene();
+  const heading = useHeadingFocus();
+  return (
+    <>
+      <h1 tabIndex={-1} ref={heading}>
+        All steps
+      </h1>
+      <ol className={styles.lines}>
+        {turn.steps.map((step) => (
+          <li key={step.key}>
+            <button type="button" className={styles.line} onClick={() => onPick(step.key)}>
+              <StepMark kind={step.kind} state={step.state} source={step.source} size={26} />
+              <StepWords step={step} zone={turn.zone} />
+              <span className={styles.push}>
+                <OnwardSign size={22} />
+              </span>
+            </button>
+            {step.remarks.map((remark) => (
+              <p key={remark} className={styles.remark}>
+                {remark}
+              </p>
+            ))}
+          </li>
+        ))}
+      </ol>
+      {turn.findings.length > 0 && (
+        <section className={styles.said} aria-label="What is open about the entries">
+          {turn.findings.map((finding) => (
+            <p key={finding}>{finding}</p>
+          ))}
+        </section>
+      )}
+      <button type="button" className={`${styles.button} ${styles.wide}`} onClick={onBack}>
+        Back
+      </button>
+    </>
+  );
+}
+
+function StepWords({ step, zone }: { step: WireStep; zone: string }) {
+  if (isSettled(step) && step.doneAt !== null) {
+    return (
+      <span className={styles.stepWords}>
+        {recordWords(step, zone)}
+        {step.state === 'in-question' && <b> · {STEP_STATE_WORDS['in-question']}</b>}
+      </span>
+    );
+  }
+  return (
+    <span className={styles.stepWords}>
+      <b>{step.shortLabel}</b>
+      <span className="muted">
+        {' '}
+        {STEP_STATE_WORDS[step.state]}
+        {step.dueAt !== null && `, by ${formatTime(step.dueAt, zone)}`}
+      </span>
+    </span>
+  );
+}

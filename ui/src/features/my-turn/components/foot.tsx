@@ -1,0 +1,17 @@
+import type { ReactNode } from 'react';
+import { useEntryQueue } from '../api/use-entry-queue';
+import styles from './phone-foot.module.css';
+import { SentStrip, sentState } from './sent-strip';
+import { useTurnScene } from './turn-context';
+
+/** The foot of the turn page: the bar, and under it where the entries are. */
+export function Foot({ children, onPhone }: { children: ReactNode; onPhone: () => void }) {
+  const { state } = useEntryQueue();
+  const { turn } = useTurnScene();
+  return (
+    <div className={styles.foot}>
+      {children}
+      <SentStrip state={sentState(state, null)} zone={turn.zone} onOpen={onPhone} />
+    </div>
+  );
+}

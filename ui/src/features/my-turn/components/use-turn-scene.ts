@@ -1,0 +1,90 @@
+import { useQuery } from '@tanstack/react-query';
+import { useEffect, useMemo } from 'react';
+import { rememberTerminal, terminalsQuery } from '../../../lib/terminal-choice';
+import { usePerson } from '../../../lib/session';
+import { useNow } from '../../../lib/use-now';
+import { entriesQuery, myBoardQuery, planQuery, turnQuery } from '../api/turn-queries';
+import { useEntryQueue } from '../api/use-entry-queue';
+import { useRecorder } from '../api/use-recorder';
+import { nextArrivalAsEngineer } from '../model/controls';
+import { knownTurn } from '../model/known-turn';
+import { crewRolesAt, roleOnTurn } from '../model/my-turns';
+import { turnAt } from '../model/turn-now';
+import { markerWords } from './train-facts';
+import type { TurnScene } from './turn-context';
+
+/** The scene of a turn, or why it is not there yet. */
+export type SceneState =
+  | { kind: 'loading'; retry: () => void }
+  | { kind: 'failed'; error: Error; retry: () => void }
+  | { kind: 'here'; scene: TurnScene };
+
+const noEntries: TurnScene['entries'] = [];
+
+/** Everything the page of a turn needs, put together anew each second. */
+export function useTurnSceneOf(turnId: string): SceneState {
+  const person = usePerson();
+  const now = useNow();
+  const queue = useEntryQueue();
+  const record = useRecorder(queue, turnId);
+  const turnResult = useQuery(turnQuery(turnId));
+  const told = turnResult.data;
+  const planResult = useQuery({ ...planQuery(told?.planId ?? ''), enabled: told !== undefined });
+  const entries = useQuery(entriesQuery(turnId)).data;
+  const terminals = useQuery(terminalsQuery).data;
+  const mine = useQuery({ ...myBoardQuery(told?.terminal ?? '', now), enabled: told !== undefined }).data;
+  const { waiting } = queue.state;
+  const plan = planResult.data;
+
+  const terminal = told?.terminal;
+  useEffect(() => {
+    // The stream of this tab follows the terminal of the turn that is open.
+    if (terminal !== undefined) rememberTerminal(terminal);
+  }, [terminal]);
+
+  const known = useMemo(() => {
+    if (told === undefined || plan === undefined) return null;
+    const own = waiting.filter((entry) => entry.turnId === turnId && entry.refusal === null);
+    return knownTurn({
+      turn: told,
+      plan,
+      entries,
+      waiting: own.map((entry) => entry.request),
+      writer: person,
+    });
+  }, [told, plan, entries, waiting, turnId, person]);
+
+  const retry = (): void => {
+    void turnResult.refetch();
+    void planResult.refetch();
+  };
+  const error = turnResult.error ?? planResult.error;
+  if (known === null) return error === null ? { kind: 'loading', retry } : { kind: 'failed', error, retry };
+
+  const hasOwnWord = waiting.some((entry) => entry.turnId === turnId);
+  const turn = turnAt(known.turn, known.steps, now, hasOwnWord);
+  const me = {
+    id: person.id,
+    name: person.name,
+    role: roleOnTurn(turn, person.id),
+    roles: crewRolesAt(person, turn.terminal),
+  };
+  const { steps, handbrakes, releases } = known;
+  const marker = markerWords(turn, terminals ?? []);
+  const nextArrivalAt = nextArrivalAsEngineer(mine?.turns ?? [], person.id, turn);
+  return {
+    kind: 'here',
+    scene: {
+      turn,
+      steps,
+      handbrakes,
+      releases,
+      entries: entries ?? noEntries,
+      now,
+      me,
+      marker,
+      nextArrivalAt,
+      record,
+    },
+  };
+}
