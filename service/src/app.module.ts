@@ -1,4 +1,5 @@
 import { type DynamicModule, Module } from '@nestjs/common';
+import { ScheduleModule } from '@nestjs/schedule';
 import { AlertsModule } from './alerts/alerts.module';
 import { AuthModule } from './auth/auth.module';
 import type { Clock } from './common/clock';
@@ -17,6 +18,7 @@ import { PeopleModule } from './people/people.module';
 import { PlansModule } from './plans/plans.module';
 import { SetsModule } from './sets/sets.module';
 import { TerminalsModule } from './terminals/terminals.module';
+import { TimetablesModule } from './timetables/timetables.module';
 import { TurnsModule } from './turns/turns.module';
 
 /** The whole service: what everybody needs first, then one module per area. */
@@ -28,6 +30,7 @@ export class AppModule {
       imports: [
         ConfigModule.withConfig(config),
         LogModule.forRequests(),
+        ScheduleModule.forRoot(),
         CommonModule.withClock(clock),
         DatabaseModule.withEntities(ENTITIES),
         AuthModule,
@@ -36,6 +39,7 @@ export class AppModule {
         PlansModule,
         SetsModule,
         TurnsModule,
+        TimetablesModule,
         AlertsModule,
         LiveModule,
         HistoryModule,

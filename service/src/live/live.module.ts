@@ -3,6 +3,7 @@ import { AlertsModule } from '../alerts/alerts.module';
 import { AuthModule } from '../auth/auth.module';
 import { TurnsModule } from '../turns/turns.module';
 import { ChangeHistory } from './change-history';
+import { ChangePruningJob } from './change-pruning.job';
 import { LiveController } from './live.controller';
 import { LiveHub } from './live-hub';
 import { LiveObjects } from './live-objects';
@@ -11,7 +12,7 @@ import { LiveObjects } from './live-objects';
 @Module({
   imports: [AlertsModule, AuthModule, TurnsModule],
   controllers: [LiveController],
-  providers: [ChangeHistory, LiveHub, LiveObjects],
+  providers: [ChangeHistory, ChangePruningJob, LiveHub, LiveObjects],
   exports: [ChangeHistory, LiveHub],
 })
 export class LiveModule {}

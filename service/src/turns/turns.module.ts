@@ -1,5 +1,6 @@
 import { Module } from '@nestjs/common';
 import { AlertsModule } from '../alerts/alerts.module';
+import { HealthModule } from '../health/health.module';
 import { PeopleModule } from '../people/people.module';
 import { PlansModule } from '../plans/plans.module';
 import { RecordsModule } from '../records/records.module';
@@ -9,12 +10,16 @@ import { BoardController } from './board.controller';
 import { CrewCarrier } from './crew-carrier';
 import { EntryRecorder } from './entry-recorder';
 import { RecordingRights } from './recording-rights';
+import { SweepableTurns } from './sweepable-turns.read-model';
 import { TurnBoardReadModel } from './turn-board.read-model';
 import { TurnBoards } from './turn-boards';
 import { TurnChanges } from './turn-changes';
 import { TurnFiles } from './turn-files';
 import { TurnFinder } from './turn-finder.read-model';
+import { TurnOpener } from './turn-opener';
 import { TurnStoreModule } from './turn-store.module';
+import { TurnSweepJob } from './turn-sweep.job';
+import { TurnSweep } from './turn-sweep.service';
 import { TurnViews } from './turn-views';
 import { TurnsController } from './turns.controller';
 import { TurnsService } from './turns.service';
@@ -23,6 +28,7 @@ import { TurnsService } from './turns.service';
 @Module({
   imports: [
     AlertsModule,
+    HealthModule,
     PeopleModule,
     PlansModule,
     RecordsModule,
@@ -35,14 +41,18 @@ import { TurnsService } from './turns.service';
     CrewCarrier,
     EntryRecorder,
     RecordingRights,
+    SweepableTurns,
     TurnBoardReadModel,
     TurnBoards,
     TurnChanges,
     TurnFiles,
     TurnFinder,
+    TurnOpener,
+    TurnSweep,
+    TurnSweepJob,
     TurnViews,
     TurnsService,
   ],
-  exports: [TurnFiles, TurnViews, TurnsService],
+  exports: [TurnFiles, TurnOpener, TurnSweep, TurnViews, TurnsService],
 })
 export class TurnsModule {}
