@@ -3,7 +3,7 @@ import { fileURLToPath } from 'node:url';
 import react from '@vitejs/plugin-react';
 import type { Plugin } from 'vite';
 import { defineConfig } from 'vitest/config';
-import { recolorBlueprint } from './src/styles/recolor-blueprint';
+import { recolorBlueprint } from './src/styles/recolor-blueprint.ts';
 
 process.env['TZ'] = 'UTC';
 

@@ -5,7 +5,7 @@ import { Permitted, SignedInOnly, ToBoard, ToHome } from './guards';
 import { PhoneShell } from './phone-shell';
 import { PlainShell } from './plain-shell';
 import { NotFoundPage } from './routes/not-found-page';
-import { RouteFault } from './route-fault';
+import { PageOnItsWay, RouteFault } from './route-fault';
 
 const boardPage = () => import('./routes/board-page').then(({ BoardPage }) => ({ Component: BoardPage }));
 const alertsPage = () => import('./routes/alerts-page').then(({ AlertsPage }) => ({ Component: AlertsPage }));
@@ -60,6 +60,7 @@ const phonePages: RouteObject[] = [
 export const routes: RouteObject[] = [
   {
     errorElement: <RouteFault />,
+    hydrateFallbackElement: <PageOnItsWay />,
     children: [
       {
         element: <SignedInOnly />,

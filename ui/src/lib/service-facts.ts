@@ -16,6 +16,7 @@ export const healthQuery = queryOptions({
   queryKey: queryKeys.health.all,
   queryFn: ({ signal }) => api.get<WireHealth>('/api/health', { signal }),
   staleTime: 5 * 60_000,
+  retry: false,
 });
 
 /** Whether this installation still waits for its first administrator. */

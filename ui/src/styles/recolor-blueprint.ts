@@ -61,9 +61,16 @@ function turnHex(text: string): string {
 const hexColour = /#(?:[0-9a-f]{8}|[0-9a-f]{6}|[0-9a-f]{3,4})(?![0-9a-z_-])/gi;
 const rgbColour = /\b(rgba?)\(\s*(\d+)\s*,\s*(\d+)\s*,\s*(\d+)\s*/g;
 
-/** The stylesheet with every colour turned. Colours derived by `oklch(from …)` follow what they are derived from. */
+/**
+ * Its rules for plain links: they take the line away, so that a link would be told by colour alone, and in dark they
+ * outrank what a page says about its own links.
+ */
+const plainLinks = /^(?:\.bp6-dark )?a(?::hover)?\s*\{[^}]*\}/gm;
+
+/** The stylesheet with every colour turned and without its rules for plain links. Colours derived by `oklch(from …)` follow what they are derived from. */
 export function recolorBlueprint(css: string): string {
   return css
+    .replace(plainLinks, '')
     .replace(hexColour, turnHex)
     .replace(rgbColour, (_all, name: string, red: string, green: string, blue: string) => {
       const turned = toRgb(turn(toHsl(Number(red), Number(green), Number(blue))));

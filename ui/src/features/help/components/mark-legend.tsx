@@ -44,31 +44,32 @@ export function MarkLegend() {
         <ul>
           {SHAPES.map(({ kind, words }) => (
             <li key={kind}>
-              <StepMark kind={kind} state="due" size={16} /> {words}
+              <StepMark kind={kind} state="due" size={16} /> <span>{words}</span>
             </li>
           ))}
         </ul>
         <ul>
           {STATES.map(({ state, source, words }) => (
             <li key={words}>
-              <StepMark kind="brake-test" state={state} source={source ?? null} size={16} /> {words}
+              <StepMark kind="brake-test" state={state} source={source ?? null} size={16} />{' '}
+              <span>{words}</span>
             </li>
           ))}
         </ul>
         <ul>
           {HEALTHS.map(({ health, words }) => (
             <li key={health}>
-              <HealthFlag health={health} /> {words}
+              <HealthFlag health={health} /> <span>{words}</span>
             </li>
           ))}
           <li>
-            <BlueSignalFlag /> workers on, under or between the cars. Nothing else is blue
+            <BlueSignalFlag /> <span>workers on, under or between the cars. Nothing else is blue</span>
           </li>
         </ul>
         <ul>
           {PRIORITIES.map(({ priority, words }) => (
             <li key={priority}>
-              <PriorityMark priority={priority} /> {words}
+              <PriorityMark priority={priority} /> <span>{words}</span>
             </li>
           ))}
         </ul>

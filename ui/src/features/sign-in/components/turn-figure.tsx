@@ -22,6 +22,8 @@ interface ExampleStep {
   at: number;
   /** Recorded clock time; steps without one are still to do. */
   recorded?: string;
+  /** Words to the left of their line, where the now line would cut through them. */
+  wordsLeft?: boolean;
   /** Row of the label: 1 is nearest to the bar. */
   level: number;
 }
@@ -29,36 +31,44 @@ interface ExampleStep {
 const STEPS: readonly ExampleStep[] = [
   { label: 'Handbrake set', kind: 'securement', at: minute + 52, recorded: '17:19:52', level: 3 },
   { label: 'Cab brake check', kind: 'brake-test', at: 5 * minute + 8, recorded: '17:23:08', level: 2 },
-  { label: 'Ends changed', kind: 'ends', at: 9 * minute + 31, recorded: '17:27:31', level: 1 },
+  {
+    label: 'Ends changed',
+    kind: 'ends',
+    at: 9 * minute + 31,
+    recorded: '17:27:31',
+    level: 1,
+    wordsLeft: true,
+  },
   { label: 'In leaving cab', kind: 'movement', at: workFrom + 20, level: 1 },
   { label: 'Handbrake off', kind: 'securement', at: workFrom + 70, level: 2 },
   { label: 'Air charged', kind: 'air', at: workFrom + 130, level: 3 },
   { label: 'Leaving-end test', kind: 'brake-test', at: ready, level: 4 },
 ];
 
-const barTop = 122;
-const barBottom = 182;
+const barTop = 136;
+const barBottom = 196;
+const nextTop = 214;
 
 function Step({ step }: { step: ExampleStep }) {
   const at = x(step.at);
   const isDone = step.recorded !== undefined;
-  const isGround = step.kind === 'securement';
-  const markTop = isGround ? barBottom - 26 : barTop + 4;
+  const markTop = step.kind === 'securement' ? barBottom - 26 : barTop + 4;
   const labelY = isDone ? barBottom + 10 + step.level * 34 : barTop - 8 - step.level * 17;
+  const leader = isDone ? `M${at} ${markTop + 24}V${labelY + 4}` : `M${at} ${markTop - 2}V${labelY + 4}`;
+  const isLeft = !isDone || step.wordsLeft === true;
+  const wordsX = isLeft ? at - 6 : at + 6;
+  const side = isLeft ? styles.end : '';
   return (
     <g>
-      <path
-        className={styles.leader}
-        d={isDone ? `M${at} ${markTop + 24}V${labelY + 4}` : `M${at} ${markTop - 2}V${labelY + 4}`}
-      />
+      <path className={styles.leader} d={leader} />
       <foreignObject x={at - 11} y={markTop} width={22} height={22}>
         <span className={`mark ${step.kind}${isDone ? ' done' : ''} ${styles.mark}`} />
       </foreignObject>
-      <text className={isDone ? undefined : styles.end} x={isDone ? at + 6 : at - 5} y={labelY}>
+      <text className={side} x={wordsX} y={labelY}>
         {step.label}
       </text>
       {isDone && (
-        <text className={styles.soft} x={at + 6} y={labelY + 15}>
+        <text className={`${styles.soft} ${side}`} x={wordsX} y={labelY + 15}>
           {step.recorded}
         </text>
       )}
@@ -67,7 +77,6 @@ function Step({ step }: { step: ExampleStep }) {
 }
 
 function Lanes() {
-  const nextTop = 200;
   return (
     <>
       <text className={styles.soft} x={left} y={16}>
@@ -83,7 +92,7 @@ function Lanes() {
         d={`M${x(now)} ${barTop}H${x(leaves)}M${x(now)} ${barBottom}H${x(leaves)}`}
       />
       <path className={styles.open} d={`M${x(leaves)} ${barTop - 2}V${barBottom + 2}`} />
-      <rect className={styles.ink} x={x(20) - 4} y={18} width={7} height={204} />
+      <rect className={styles.ink} x={x(20) - 4} y={18} width={7} height={218} />
       <path
         className={styles.room}
         d={`M${x(now)} ${nextTop + 10}H${x(workFrom)}M${x(ready)} ${nextTop + 10}H${x(leaves)}`}
@@ -103,17 +112,17 @@ function Lanes() {
       <text className={styles.strong} x={x(ready) + 8} y={nextTop + 38}>
         7 min to spare
       </text>
-      <path className={styles.now} d={`M${x(now)} 22V226`} />
+      <path className={styles.now} d={`M${x(now)} 22V240`} />
       <text className={`${styles.strong} ${styles.middle}`} x={x(now)} y={16}>
         17:29:06
       </text>
       <text className={styles.soft} x={640} y={35}>
         the plan
       </text>
-      <text className={styles.soft} x={640} y={156}>
+      <text className={styles.soft} x={640} y={170}>
         the work
       </text>
-      <text className={styles.soft} x={640} y={214}>
+      <text className={styles.soft} x={640} y={nextTop + 14}>
         what is to come
       </text>
     </>
@@ -125,7 +134,7 @@ export function TurnFigure() {
   return (
     <figure className={`sp-panel ${styles.figure}`}>
       <svg
-        viewBox="0 0 744 312"
+        viewBox="0 0 744 328"
         role="img"
         aria-label="One turn: in at 17:18, scheduled to leave at 17:40. At 17:29:06 three steps are recorded and four are to come; ready by 17:36, 7 minutes to spare."
       >
