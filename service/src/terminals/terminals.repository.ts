@@ -42,6 +42,16 @@ export class TerminalsRepository {
     return { ...terminal, version };
   }
 
+  async rename(transaction: Transaction, terminal: TerminalRow, name: string): Promise<TerminalRow> {
+    await transaction.manager.update(TerminalRow, { id: terminal.id }, { name });
+    return this.bump(transaction, { ...terminal, name });
+  }
+
+  async zones(transaction: Transaction): Promise<Record<string, string>> {
+    const rows = await transaction.manager.find(TerminalRow, { select: { code: true, zone: true } });
+    return Object.fromEntries(rows.map(({ code, zone }) => [code, zone]));
+  }
+
   async replaceTracks(
     transaction: Transaction,
     terminalId: string,

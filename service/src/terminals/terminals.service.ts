@@ -44,6 +44,20 @@ export class TerminalsService {
     return terminal;
   }
 
+  /** Makes sure that there is a terminal with this code and name. A known one keeps its zone. */
+  async ensureIn(transaction: Transaction, request: CreateTerminalRequest): Promise<void> {
+    const terminal = await this.terminals.find(transaction, request.code);
+    if (terminal === null) await this.addIn(transaction, request);
+    else if (terminal.name !== request.name) {
+      await this.tell(transaction, await this.terminals.rename(transaction, terminal, request.name));
+    }
+  }
+
+  /** Zones of all terminals by code, as an open transaction sees them. */
+  zonesIn(transaction: Transaction): Promise<Record<string, string>> {
+    return this.terminals.zones(transaction);
+  }
+
   async replaceTracks(code: string, tracks: ReplaceTracksRequest): Promise<void> {
     const labels = tracks.map((track) => track.label);
     const twice = labels.find((label, index) => labels.indexOf(label) !== index);
