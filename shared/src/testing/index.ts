@@ -9,3 +9,6 @@ export {
   fixedServiceDate,
   fixedZone,
 } from './builders';
+
+export { aFeed, tablesOf } from './feed';
+export type { FeedParts, FeedTexts, FeedTrain } from './feed';
