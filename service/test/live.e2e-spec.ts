@@ -84,7 +84,9 @@ describe('GET /api/live', () => {
     }
     await railroad.app
       .get(UnitOfWork)
-      .run((transaction) => transaction.execute('DELETE FROM change WHERE number < (SELECT max(number) FROM change)'));
+      .run((transaction) =>
+        transaction.execute('DELETE FROM change WHERE number < (SELECT max(number) FROM change)'),
+      );
     for (const lastEventId of [1, 999_999]) {
       const stream = await open({ lastEventId });
       await stream.next((event) => event.event === 'beat');
@@ -93,14 +95,11 @@ describe('GET /api/live', () => {
   });
 
   test('says nothing of other terminals', async () => {
-    const administrator = await railroad.as('administrator');
     const everywhere = await railroad.app.get(PeopleService).add({
       email: 'everywhere@example.org',
       name: 'Everywhere',
       roles: [{ role: 'dispatcher', terminal: '*' }],
     });
-    await railroad.app.get(UnitOfWork).drain();
-    expect(administrator.personId).not.toBe(everywhere.id);
     const stream = await listen(railroad.app, everywhere.id, { terminal: 'CAM' });
     streams.push(stream);
     await stream.next((event) => event.event === 'beat');

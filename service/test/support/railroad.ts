@@ -1,8 +1,11 @@
 import { randomUUID } from 'node:crypto';
 import type { NestExpressApplication } from '@nestjs/platform-express';
-import type { EntryReceipt, Role, WireTurn } from '@stubpost/shared';
+import { SchedulerRegistry } from '@nestjs/schedule';
+import type { EntryReceipt, Role, WireAlert, WireTurn } from '@stubpost/shared';
 import { FixedClock } from '../../src/common/clock';
 import { TerminalsService } from '../../src/terminals/terminals.service';
+import { TurnSweepJob, turnSweepTimer } from '../../src/turns/turn-sweep.job';
+import { TurnSweep } from '../../src/turns/turn-sweep.service';
 import { type Booted, bootApp } from './boot';
 import { type SignedInAgent, signInAs } from './sign-in';
 
@@ -16,10 +19,15 @@ export interface Railroad extends Booted {
   as(role: Role): Promise<SignedInAgent>;
 }
 
-/** Boots a service with the terminal HBR. */
+/** Boots a service whose clock and sweeps are in the hands of the test. */
 export async function aRailroad(options: { dataDir?: string; at?: number } = {}): Promise<Railroad> {
   const clock = new FixedClock(options.at ?? startOfTest);
-  const booted = await bootApp({ clock, ...(options.dataDir === undefined ? {} : { dataDir: options.dataDir }) });
+  const booted = await bootApp({
+    clock,
+    ...(options.dataDir === undefined ? {} : { dataDir: options.dataDir }),
+  });
+  booted.app.get(SchedulerRegistry).deleteInterval(turnSweepTimer);
+  await booted.app.get(TurnSweepJob).tick();
   const people = new Map<Role, SignedInAgent>();
   const railroad: Railroad = {
     ...booted,
@@ -36,6 +44,23 @@ export async function aRailroad(options: { dataDir?: string; at?: number } = {})
 /** The terminal most tests play at. */
 export async function addHarbor(app: NestExpressApplication): Promise<void> {
   await app.get(TerminalsService).add({ code: 'HBR', name: 'Harbor', zone: 'America/New_York' });
+}
+
+/** Moves the clock to a second of the test, with a sweep every 5 s on the way, as the timer would have it. */
+export async function passTo(railroad: Railroad, seconds: number): Promise<void> {
+  const end = startOfTest + seconds * 1000;
+  for (let now = railroad.clock.now(); now < end; ) {
+    now = Math.min(end, now + 5000);
+    railroad.clock.set(now);
+    await railroad.app.get(TurnSweep).sweep(now);
+  }
+}
+
+/** Alerts at the terminal as the list gives them. */
+export async function alertsOf(railroad: Railroad, state = 'standing'): Promise<WireAlert[]> {
+  const dispatcher = await railroad.as('dispatcher');
+  const answer = await dispatcher.agent.get('/api/alerts').query({ terminal: 'HBR', state }).expect(200);
+  return answer.body as WireAlert[];
 }
 
 /** An instant so many seconds after the start of the test, as text. */
