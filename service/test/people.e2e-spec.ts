@@ -241,6 +241,47 @@ describe('changing people', () => {
   });
 });
 
+describe('an administrator of one terminal', () => {
+  let local: SignedInAgent;
+  beforeEach(async () => {
+    await booted.app.get(TerminalsService).add({ code: 'CAM', name: 'Camden', zone: 'America/New_York' });
+    local = await signInAs(booted.app, 'administrator', 'HBR');
+  });
+  const grant = (terminal: string, role = 'conductor') => ({ roles: [{ role, terminal }] });
+  const wren = { email: 'wren@example.org', name: 'Wren Hollis', password };
+
+  test('adds and changes people there', async () => {
+    const answer = await local.agent
+      .post('/api/people')
+      .send({ ...wren, ...grant('HBR') })
+      .expect(201);
+    const { id } = answer.body as CreatedPerson;
+    await local.agent.put(`/api/people/${id}`).send(grant('HBR', 'dispatcher')).expect(200);
+  });
+
+  test('gives nobody a role elsewhere or everywhere, least of all themselves', async () => {
+    for (const terminal of ['CAM', '*']) {
+      const answer = await local.agent
+        .post('/api/people')
+        .send({ ...wren, ...grant(terminal) })
+        .expect(403);
+      expect(answer.body).toMatchObject({ code: 'access.forbidden' });
+    }
+    await local.agent.put(`/api/people/${local.personId}`).send(grant('*', 'administrator')).expect(403);
+  });
+
+  test('does nothing to people who hold roles elsewhere', async () => {
+    const other = (await signInAs(booted.app, 'conductor', 'CAM')).personId;
+    for (const id of [other, admin.personId]) {
+      await local.agent.put(`/api/people/${id}`).send({ name: 'Taken over' }).expect(403);
+      await local.agent.put(`/api/people/${id}`).send(grant('HBR')).expect(403);
+      await local.agent.post(`/api/people/${id}/link`).expect(403);
+      await local.agent.put(`/api/people/${id}/password`).send({ password }).expect(403);
+      await local.agent.delete(`/api/people/${id}/sessions`).expect(403);
+    }
+  });
+});
+
 describe('GET /api/crew', () => {
   test('names the crews of one terminal and of all, by name', async () => {
     await booted.app.get(TerminalsService).add({ code: 'CAM', name: 'Camden', zone: 'America/New_York' });

@@ -100,7 +100,9 @@ describe('the table of routes', () => {
     const served = router.stack.flatMap((layer) =>
       (layer.route?.stack ?? []).map((handler) => `${handler.method.toUpperCase()} ${layer.route?.path}`),
     );
-    expect([...new Set(served)].sort()).toEqual(ROUTES.map(titleOf).sort());
+    // The log hangs on every address by a pattern of its own.
+    const ours = [...new Set(served)].filter((title) => !title.endsWith(' /{*path}'));
+    expect(ours.sort()).toEqual(ROUTES.map(titleOf).sort());
   });
 
   test('names no route twice', () => {

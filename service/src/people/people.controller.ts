@@ -12,7 +12,8 @@ import {
   updatePersonSchema,
   type WirePerson,
 } from '@stubpost/shared';
-import { Permit } from '../common/decorators';
+import { CurrentPerson, Permit } from '../common/decorators';
+import type { CurrentPersonFacts } from '../common/signed-in';
 import { ZodPipe } from '../common/zod.pipe';
 import { PeopleReadModel } from './people.read-model';
 import { PeopleService } from './people.service';
@@ -33,8 +34,11 @@ export class PeopleController {
 
   @Post('people')
   @Permit('people.manage')
-  async add(@Body(new ZodPipe(createPersonSchema)) body: CreatePersonRequest): Promise<CreatedPerson> {
-    const { id, link } = await this.people.add(body);
+  async add(
+    @Body(new ZodPipe(createPersonSchema)) body: CreatePersonRequest,
+    @CurrentPerson() actor: CurrentPersonFacts,
+  ): Promise<CreatedPerson> {
+    const { id, link } = await this.people.add(body, actor);
     const person = await this.readModel.one(id);
     return link === null ? person : { ...person, link };
   }
@@ -44,15 +48,16 @@ export class PeopleController {
   async update(
     @Param('id') id: string,
     @Body(new ZodPipe(updatePersonSchema)) body: UpdatePersonRequest,
+    @CurrentPerson() actor: CurrentPersonFacts,
   ): Promise<WirePerson> {
-    await this.people.update(id, body);
+    await this.people.update(id, body, actor);
     return this.readModel.one(id);
   }
 
   @Post('people/:id/link')
   @Permit('people.manage')
-  makeLink(@Param('id') id: string): Promise<OneTimeLink> {
-    return this.people.makeLink(id);
+  makeLink(@Param('id') id: string, @CurrentPerson() actor: CurrentPersonFacts): Promise<OneTimeLink> {
+    return this.people.makeLink(id, actor);
   }
 
   @Put('people/:id/password')
@@ -61,15 +66,16 @@ export class PeopleController {
   async givePassword(
     @Param('id') id: string,
     @Body(new ZodPipe(givePasswordSchema)) body: GivePasswordRequest,
+    @CurrentPerson() actor: CurrentPersonFacts,
   ): Promise<void> {
-    await this.people.givePassword(id, body.password);
+    await this.people.givePassword(id, body.password, actor);
   }
 
   @Delete('people/:id/sessions')
   @Permit('people.manage')
   @HttpCode(204)
-  async endSessions(@Param('id') id: string): Promise<void> {
-    await this.people.endSessions(id);
+  async endSessions(@Param('id') id: string, @CurrentPerson() actor: CurrentPersonFacts): Promise<void> {
+    await this.people.endSessions(id, actor);
   }
 
   @Get('crew')

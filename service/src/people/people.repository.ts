@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import { ALL_TERMINALS, type RoleGrant, type UpdatePersonRequest } from '@stubpost/shared';
+import { ALL_TERMINALS, type Role, type RoleGrant, type UpdatePersonRequest } from '@stubpost/shared';
 import { Clock } from '../common/clock';
 import { Refusal } from '../common/refusal';
 import { Reader } from '../database/reader';
@@ -32,6 +32,11 @@ export class PeopleRepository {
   async require(transaction: Transaction, id: string): Promise<PersonRow> {
     const person = await transaction.manager.findOneBy(PersonRow, { id });
     return person ?? refuseUnknown();
+  }
+
+  async rolesOf(transaction: Transaction, personId: string): Promise<RoleGrant[]> {
+    const rows = await transaction.manager.findBy(PersonRoleRow, { personId });
+    return rows.map(({ role, terminal }) => ({ role: role as Role, terminal }));
   }
 
   isTaken(transaction: Transaction, email: string): Promise<boolean> {

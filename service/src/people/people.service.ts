@@ -4,15 +4,18 @@ import {
   ALL_TERMINALS,
   type CreatePersonRequest,
   type OneTimeLink,
+  type PersonAccess,
   type RoleGrant,
   type UpdatePersonRequest,
 } from '@stubpost/shared';
 import { OneTimeLinks } from '../auth/one-time-links.service';
 import { Passwords } from '../auth/passwords';
 import { SessionsService } from '../auth/sessions.service';
+import { Access } from '../common/access';
 import { Refusal } from '../common/refusal';
 import { type Transaction, UnitOfWork } from '../database/unit-of-work';
 import { PeopleRepository } from './people.repository';
+import type { PersonRow } from './person.entity';
 
 /** A person who was just added, with the link that lets them choose a password where none was given. */
 export interface AddedPerson {
@@ -26,12 +29,15 @@ export class PeopleService {
   constructor(
     private readonly unitOfWork: UnitOfWork,
     private readonly people: PeopleRepository,
+    private readonly access: Access,
     private readonly passwords: Passwords,
     private readonly links: OneTimeLinks,
     private readonly sessions: SessionsService,
   ) {}
 
-  async add(request: CreatePersonRequest): Promise<AddedPerson> {
+  /** Adds a person. Without an actor it is the installation itself that does. */
+  async add(request: CreatePersonRequest, actor?: PersonAccess): Promise<AddedPerson> {
+    this.requireReach(actor, request.roles);
     const passwordHash = await this.hashOf(request);
     return this.unitOfWork.run(async (transaction) => {
       const id = await this.insert(transaction, request, passwordHash);
@@ -52,9 +58,10 @@ export class PeopleService {
     });
   }
 
-  async update(id: string, request: UpdatePersonRequest): Promise<void> {
+  async update(id: string, request: UpdatePersonRequest, actor: PersonAccess): Promise<void> {
     await this.unitOfWork.run(async (transaction) => {
-      const person = await this.people.require(transaction, id);
+      const person = await this.requireWithin(transaction, id, actor);
+      this.requireReach(actor, request.roles ?? []);
       if (request.version !== undefined && request.version !== person.version) {
         throw new Refusal({ code: 'people.changed', message: 'somebody changed this person meanwhile' });
       }
@@ -65,28 +72,42 @@ export class PeopleService {
     });
   }
 
-  makeLink(id: string): Promise<OneTimeLink> {
+  makeLink(id: string, actor: PersonAccess): Promise<OneTimeLink> {
     return this.unitOfWork.run(async (transaction) => {
-      await this.people.require(transaction, id);
+      await this.requireWithin(transaction, id, actor);
       return this.links.make(transaction, id);
     });
   }
 
-  async givePassword(id: string, password: string): Promise<void> {
+  async givePassword(id: string, password: string, actor: PersonAccess): Promise<void> {
     const person = await this.people.find(id);
     this.passwords.require(password, person);
     const passwordHash = await this.passwords.hash(password);
     await this.unitOfWork.run(async (transaction) => {
+      await this.requireWithin(transaction, id, actor);
       await this.people.setPassword(transaction, id, passwordHash);
       await this.sessions.endAllOf(transaction, id);
     });
   }
 
-  async endSessions(id: string): Promise<void> {
+  async endSessions(id: string, actor: PersonAccess): Promise<void> {
     await this.unitOfWork.run(async (transaction) => {
-      await this.people.require(transaction, id);
+      await this.requireWithin(transaction, id, actor);
       await this.sessions.endAllOf(transaction, id);
     });
+  }
+
+  /** An administrator of some terminals does nothing to people who hold roles elsewhere. */
+  private async requireWithin(transaction: Transaction, id: string, actor: PersonAccess): Promise<PersonRow> {
+    const person = await this.people.require(transaction, id);
+    this.requireReach(actor, await this.people.rolesOf(transaction, id));
+    return person;
+  }
+
+  /** An administrator of some terminals gives and takes roles there only; least of all roles everywhere. */
+  private requireReach(actor: PersonAccess | undefined, roles: readonly RoleGrant[]): void {
+    if (actor === undefined) return;
+    for (const { terminal } of roles) this.access.require(actor, 'people.manage', terminal);
   }
 
   private async hashOf(owner: {
