@@ -4,5 +4,6 @@ import { defineConfig } from 'vitest/config';
 process.env['TZ'] = 'UTC';
 
 export default defineConfig({
-  test: { environment: 'node', include: ['src/**/*.test.ts'] },
+  // Generous: simulations and properties are counted in rounds, and a busy machine is no failure.
+  test: { environment: 'node', include: ['src/**/*.test.ts'], testTimeout: 60_000 },
 });
