@@ -35,8 +35,8 @@ export class TimetableActivations {
   ) {}
 
   async activate(id: string, request: ActivationRequest, person: Orderer): Promise<void> {
-    requireEverywhere(person);
     const timetable = await this.turns.requireContent(id);
+    requireEverywhere(person);
     const terminals = checkedTerminals(timetable, request.terminals);
     await this.unitOfWork.run(async (transaction) => {
       const now = this.clock.now();
@@ -55,8 +55,8 @@ export class TimetableActivations {
 
   /** Takes the newest order back, which must be one for this timetable; gives the id of the one that runs again. */
   async rollBack(id: string, person: Orderer): Promise<string> {
-    requireEverywhere(person);
     await this.readModel.require(id);
+    requireEverywhere(person);
     return this.unitOfWork.run(async (transaction) => {
       const orders = await this.timetables.findStanding(transaction);
       const newest = orders.at(-1);
