@@ -9,6 +9,7 @@ export {
   fixedServiceDate,
   fixedZone,
 } from './builders';
-
+export { seededRandom } from './seeded-random';
+export { aWireTurn } from './wire-turn';
 export { aFeed, tablesOf } from './feed';
 export type { FeedParts, FeedTexts, FeedTrain } from './feed';
