@@ -3,6 +3,8 @@ process.env.TZ = 'UTC';
 /** @type {import('jest').Config} */
 module.exports = {
   testEnvironment: 'node',
+  // Whole services are booted beside other work on two cores.
+  testTimeout: 30_000,
   roots: ['<rootDir>/src', '<rootDir>/test'],
   testRegex: '[.-]spec\\.ts$',
   moduleNameMapper: {
