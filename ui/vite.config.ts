@@ -47,6 +47,8 @@ const recoloredBlueprint: Plugin = {
     /@blueprintjs[\\/].*\.css$/.test(id.split('?')[0] ?? '') ? recolorBlueprint(code) : null,
 };
 
+const service = `http://127.0.0.1:${process.env['PORT'] ?? '4600'}`;
+
 export default defineConfig({
   plugins: [recoloredBlueprint, react()],
   define: { __ZONES__: JSON.stringify(ZONES.map(packedZone)) },
@@ -61,7 +63,8 @@ export default defineConfig({
     host: '127.0.0.1',
     port: 5173,
     strictPort: true,
-    proxy: { '/api': `http://127.0.0.1:${process.env['PORT'] ?? '4600'}` },
+    // The service takes requests of its own pages only: in development those come through here, under its name.
+    proxy: { '/api': { target: service, changeOrigin: true, headers: { origin: service } } },
   },
   build: { manifest: true },
   test: {

@@ -33,8 +33,10 @@ export function DeskShell() {
           To the page
         </a>
         <NotEncrypted />
-        <TopBar terminal={terminal} terminals={terminals} zone={zone} onFind={() => setFinding(true)} />
-        <PageNames zone={zone} path={pathname} />
+        <header>
+          <TopBar terminal={terminal} terminals={terminals} zone={zone} onFind={() => setFinding(true)} />
+          <PageNames zone={zone} path={pathname} />
+        </header>
         <main className={styles.main} id="page" tabIndex={-1}>
           <PartBoundary key={pathname} part="This page" rest="The other pages are fine.">
             <Outlet />

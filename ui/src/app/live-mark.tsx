@@ -12,8 +12,8 @@ export function LiveMark({ zone }: { zone: string }) {
     if (isLost) announce('Not live. The page asks for news every 15 seconds');
   }, [isLost]);
 
-  if (lastWordAt === null) return <span className={styles.live}>Connecting</span>;
-  const clock = formatClock(lastWordAt, zone);
+  if (lastWordAt === null && retryInSeconds === 0) return <span className={styles.live}>Connecting</span>;
+  const clock = lastWordAt === null ? 'none yet' : formatClock(lastWordAt, zone);
   if (live) {
     return (
       <span className={styles.live} data-live="on">

@@ -53,7 +53,8 @@ export function MeMenu() {
       <Popover content={<MeItems />} placement="bottom-end" minimal>
         <Button variant="minimal">
           {person.name}
-          {role !== undefined && `, ${ROLE_WORDS[role].toLowerCase()}`}
+          {role !== undefined && <span className={styles.role}>, {ROLE_WORDS[role].toLowerCase()}</span>}
+          <span className={styles.caret} aria-hidden="true" />
         </Button>
       </Popover>
     </div>

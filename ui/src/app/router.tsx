@@ -15,6 +15,8 @@ const timetablesPage = () =>
   import('./routes/timetables-page').then(({ TimetablesPage }) => ({ Component: TimetablesPage }));
 const setupPage = () => import('./routes/setup-page').then(({ SetupPage }) => ({ Component: SetupPage }));
 const myPage = () => import('./routes/my-page').then(({ MyPage }) => ({ Component: MyPage }));
+const myTurnPage = () =>
+  import('./routes/my-turn-page').then(({ MyTurnPage }) => ({ Component: MyTurnPage }));
 const peoplePage = () => import('./routes/people-page').then(({ PeoplePage }) => ({ Component: PeoplePage }));
 const mePage = () => import('./routes/me-page').then(({ MePage }) => ({ Component: MePage }));
 const signInPage = () =>
@@ -51,7 +53,7 @@ const phonePages: RouteObject[] = [
     element: <Permitted permission="entries.record" />,
     children: [
       { path: '/my', lazy: myPage },
-      { path: '/my/turn/:turnId', lazy: myPage },
+      { path: '/my/turn/:turnId', lazy: myTurnPage },
     ],
   },
 ];

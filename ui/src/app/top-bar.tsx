@@ -67,7 +67,7 @@ export interface TopBarProps {
 /** Terminal, service date, clock with zone, alerts, find, me: the order never changes. */
 export function TopBar({ terminal, terminals, zone, onFind }: TopBarProps) {
   return (
-    <header className={styles.topbar}>
+    <div className={styles.topbar}>
       <Link className={styles.brand} to="/">
         <PostMark />
         Stubpost
@@ -87,6 +87,6 @@ export function TopBar({ terminal, terminals, zone, onFind }: TopBarProps) {
         )}
       </div>
       <MeMenu />
-    </header>
+    </div>
   );
 }

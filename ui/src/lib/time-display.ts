@@ -133,6 +133,11 @@ export function formatRelative(moment: Moment, now: Instant): string {
   return seconds > 0 ? `in ${words}` : `${words} ago`;
 }
 
+/** How long ago something was; never in the future, as a clock that is read seldom may lag behind it. */
+export function formatSince(moment: Moment, now: Instant): string {
+  return formatRelative(Math.min(toInstant(moment), now), now);
+}
+
 function formatDistance(seconds: number): string {
   if (seconds < 60) return `${seconds} s`;
   const minutes = Math.floor(seconds / 60);

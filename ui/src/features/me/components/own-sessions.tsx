@@ -3,8 +3,9 @@ import type { OwnSession } from '@stubpost/shared';
 import { useQuery } from '@tanstack/react-query';
 import { ErrorState, LoadingRows } from '../../../components/page-states';
 import { errorText } from '../../../lib/error-texts';
-import { formatRelative, formatStamp } from '../../../lib/time-display';
+import { formatSince, formatStamp } from '../../../lib/time-display';
 import { useNow } from '../../../lib/use-now';
+import { deviceWords } from '../model/device-words';
 import { ownSessionsQuery, useEndOwnSession } from '../api/own-sign-in';
 
 interface RowProps {
@@ -18,17 +19,19 @@ interface RowProps {
 function SessionRow({ session, zone, now, onEnd, isBusy }: RowProps) {
   return (
     <tr>
-      <th scope="row">{session.device}</th>
+      <th scope="row" title={session.device}>
+        {deviceWords(session.device)}
+      </th>
       <td>{formatStamp(session.startedAt, zone)}</td>
-      <td>{session.current ? 'now' : formatRelative(session.lastSeenAt, now)}</td>
+      <td className="nowrap">{session.current ? 'now' : formatSince(session.lastSeenAt, now)}</td>
       <td className="number">
         {session.current ? (
-          <span className="muted">this one</span>
+          <span className="muted nowrap">this one</span>
         ) : (
           <Button
             disabled={isBusy}
             onClick={() => onEnd(session.id)}
-            aria-label={`End the session on ${session.device}`}
+            aria-label={`End the session on ${deviceWords(session.device)} since ${formatStamp(session.startedAt, zone)}`}
           >
             End
           </Button>
@@ -42,7 +45,7 @@ function SessionRow({ session, zone, now, onEnd, isBusy }: RowProps) {
 export function OwnSessions({ zone }: { zone: string }) {
   const { data, error, refetch } = useQuery(ownSessionsQuery);
   const end = useEndOwnSession();
-  const now = useNow(60);
+  const now = useNow(10);
   return (
     <section className="sp-panel" aria-labelledby="own-sessions">
       <header>

@@ -1,6 +1,6 @@
 import type { WirePerson } from '@stubpost/shared';
 import { Link } from 'react-router-dom';
-import { formatRelative } from '../../../lib/time-display';
+import { formatSince } from '../../../lib/time-display';
 import { useNow } from '../../../lib/use-now';
 import { rolesInWords } from '../model/role-words';
 import styles from './people.module.css';
@@ -19,7 +19,7 @@ export function PeopleTable({
   people: readonly WirePerson[];
   chosenId: string | null;
 }) {
-  const now = useNow(60);
+  const now = useNow(10);
   const sorted = [...people].sort((one, other) => one.name.localeCompare(other.name));
   return (
     <div className="sp-table-scroll" role="region" aria-label="People" tabIndex={0}>
@@ -45,7 +45,7 @@ export function PeopleTable({
               <td>{rolesInWords(person.roles)}</td>
               <td className="nowrap">{standing(person)}</td>
               <td className="nowrap">
-                {person.lastSeenAt === null ? 'never' : formatRelative(person.lastSeenAt, now)}
+                {person.lastSeenAt === null ? 'never' : formatSince(person.lastSeenAt, now)}
               </td>
             </tr>
           ))}

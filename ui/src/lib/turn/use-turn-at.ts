@@ -1,0 +1,38 @@
+import { latenessSettingsOf, shippedThresholds, type LatenessSettings } from '@stubpost/shared';
+import { skipToken, useQuery } from '@tanstack/react-query';
+import { useMemo } from 'react';
+import { useNow } from '../use-now';
+import { turnAt } from './turn-at';
+import type { TurnNow } from './turn-now';
+import { planQuery, settingsQuery, turnQuery } from './turn-queries';
+
+/** What a terminal counts as late and silent; the shipped values until it has answered. */
+export function useLatenessSettings(terminal: string | undefined, zone: string | undefined): LatenessSettings {
+  const options = settingsQuery(terminal ?? '');
+  const { data } = useQuery({ ...options, queryFn: terminal === undefined ? skipToken : options.queryFn });
+  const thresholds = data?.thresholds ?? shippedThresholds;
+  return useMemo(() => latenessSettingsOf(thresholds, zone ?? 'UTC'), [thresholds, zone]);
+}
+
+export interface TurnAnswer {
+  turn: TurnNow | undefined;
+  isPending: boolean;
+  error: Error | null;
+  refetch: () => void;
+}
+
+/** One turn as it stands this second; null asks for none. */
+export function useTurnAt(turnId: string | null): TurnAnswer {
+  const now = useNow();
+  const asked = turnQuery(turnId ?? '');
+  const found = useQuery({ ...asked, queryFn: turnId === null ? skipToken : asked.queryFn });
+  const wire = found.data;
+  const plan = planQuery(wire?.planId ?? '');
+  const { data } = useQuery({ ...plan, queryFn: wire === undefined ? skipToken : plan.queryFn });
+  const settings = useLatenessSettings(wire?.terminal, wire?.zone);
+  const turn = useMemo(
+    () => (wire === undefined ? undefined : turnAt(wire, { plan: data, settings }, now)),
+    [wire, data, settings, now],
+  );
+  return { turn, isPending: found.isPending, error: found.error, refetch: () => void found.refetch() };
+}
