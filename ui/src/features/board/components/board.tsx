@@ -9,11 +9,11 @@ import { useMay } from '../../../lib/session';
 import { formatServiceDate } from '../../../lib/time-display';
 import { useNow } from '../../../lib/use-now';
 import { noFilter } from '../model/board-search';
-import type { BoardTurn } from '../model/board-turn';
+import type { TurnNow } from '../../../lib/turn/turn-now';
 import { isFiltering } from '../model/filter-turns';
 import type { TurnAct } from '../model/list-keys';
 import { rowWords } from '../model/row-words';
-import { clockText, timeText } from '../model/time-text';
+import { clockText, timeText } from '../../../lib/turn/time-text';
 import { movedChoice, neighbourSpan, resizedChoice, type TimeWindow } from '../model/time-window';
 import { BoardTools } from './board-tools';
 import styles from './board.module.css';
@@ -32,7 +32,7 @@ export interface BoardProps {
   openId: string | null;
   /** Narrow screens have the table only. */
   hasPicture: boolean;
-  onAct: (act: TurnAct, turn: BoardTurn, step: string | null) => void;
+  onAct: (act: TurnAct, turn: TurnNow, step: string | null) => void;
 }
 
 const staleAfter = 60_000;

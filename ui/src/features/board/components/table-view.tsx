@@ -5,7 +5,7 @@ import { formatServiceDate, formatZoneLetters } from '../../../lib/time-display'
 import { clashPartners, groupRows } from '../model/group-rows';
 import { stepColumns } from '../model/step-columns';
 import { tableRow } from '../model/table-cells';
-import { timeText } from '../model/time-text';
+import { timeText } from '../../../lib/turn/time-text';
 import type { BoardPartProps } from './board';
 import styles from './board.module.css';
 import { TurnTable, type TableGroup } from './turn-table';

@@ -6,8 +6,8 @@ import { formatServiceDate, formatZoneLetters } from '../../../lib/time-display'
 import { groupRows, type BoardRow } from '../model/group-rows';
 import { rowHead } from '../model/head-lines';
 import { detailedItems } from '../model/picture-items';
-import { stepWords } from '../model/row-words';
-import { clockText, timeText } from '../model/time-text';
+import { stepWords } from '../../../lib/turn/step-words';
+import { clockText, timeText } from '../../../lib/turn/time-text';
 import { draggedChoice, summaryFromMinutes, type WindowChoice } from '../model/time-window';
 import type { BoardPartProps } from './board';
 import styles from './board.module.css';

@@ -1,22 +1,21 @@
 import {
-  latenessSettingsOf,
-  shippedThresholds,
   type Instant,
-  type LatenessSettings,
   type WireBoard,
   type WireStepPlan,
   type WireTerminal,
   type WireTurn,
 } from '@stubpost/shared';
-import { useQueries, useQuery } from '@tanstack/react-query';
+import { useQueries } from '@tanstack/react-query';
 import { useMemo, useRef } from 'react';
-import { boardQuery, planQuery, settingsQuery } from '../api/board-queries';
-import type { BoardTurn } from '../model/board-turn';
-import { turnAt } from '../model/live-turn';
+import { planQuery } from '../../../lib/turn/turn-queries';
+import { useLatenessSettings } from '../../../lib/turn/use-turn-at';
+import { boardQuery } from '../api/board-queries';
+import type { TurnNow } from '../../../lib/turn/turn-now';
+import { turnAt } from '../../../lib/turn/turn-at';
 
 /** The turns of a terminal for some service dates, as they stand at one moment. */
 export interface BoardTurns {
-  turns: readonly BoardTurn[];
+  turns: readonly TurnNow[];
   isPending: boolean;
   error: Error | null;
   retry: () => void;
@@ -40,7 +39,7 @@ export function useBoardTurns({ terminal, dates, now, holdKey }: BoardTurnsQuest
   });
   const wires = useHeld(boards.turns, holdKey);
   const plans = usePlans(wires);
-  const settings = useLatenessSettings(terminal);
+  const settings = useLatenessSettings(terminal.code, terminal.zone);
   const turns = useMemo(
     () => wires.map((wire) => turnAt(wire, { plan: plans.get(wire.planId), settings }, now)),
     [wires, plans, settings, now],
@@ -86,10 +85,4 @@ function usePlans(wires: readonly WireTurn[]): ReadonlyMap<string, WireStepPlan>
 
 function combinePlans(results: { data: WireStepPlan | undefined }[]): ReadonlyMap<string, WireStepPlan> {
   return new Map(results.flatMap(({ data }) => (data === undefined ? [] : [[data.id, data] as const])));
-}
-
-function useLatenessSettings({ code, zone }: WireTerminal): LatenessSettings {
-  const { data } = useQuery(settingsQuery(code));
-  const thresholds = data?.thresholds ?? shippedThresholds;
-  return useMemo(() => latenessSettingsOf(thresholds, zone), [thresholds, zone]);
 }

@@ -1,11 +1,11 @@
 import type { Instant, WireTerminal } from '@stubpost/shared';
 import { useMemo } from 'react';
 import type { BoardView } from '../model/board-search';
-import type { BoardTurn } from '../model/board-turn';
+import type { TurnNow } from '../../../lib/turn/turn-now';
 import { filterTurns } from '../model/filter-turns';
 import { dayBounds, serviceDateAt, serviceDatesOf } from '../model/service-dates';
 import { overlaps, windowAt, type TimeWindow } from '../model/time-window';
-import { bySchedule, shownStretch } from '../model/turn-times';
+import { bySchedule, shownStretch } from '../../../lib/turn/turn-times';
 import { useBoardTurns, type BoardTurns } from './use-board-turns';
 import { useSteadyIds, type Steady } from './use-steady-ids';
 
@@ -15,8 +15,8 @@ export interface ShownTurns extends Pick<BoardTurns, 'isPending' | 'error' | 're
   /** The service date that the words of the page name. */
   date: string;
   /** In the window and matching the filter, in order of departure, held in place under pointer and focus. */
-  shown: readonly BoardTurn[];
-  all: ReadonlyMap<string, BoardTurn>;
+  shown: readonly TurnNow[];
+  all: ReadonlyMap<string, TurnNow>;
   /** Turns of the service date, without window and filter. */
   total: number;
   /** Turns in the window, without the filter. */

@@ -1,6 +1,6 @@
 import type { TurnFilter } from './board-search';
-import type { BoardTurn } from './board-turn';
-import { isOver, isStanding } from './turn-times';
+import type { TurnNow } from '../../../lib/turn/turn-now';
+import { isOver, isStanding } from '../../../lib/turn/turn-times';
 
 /** Whether anything narrows the list. */
 export function isFiltering(filter: TurnFilter): boolean {
@@ -11,14 +11,14 @@ export function isFiltering(filter: TurnFilter): boolean {
  * Whether somebody has to do something about a turn now: an alert stands, a step is overdue, or it is not on plan.
  * A turn that has left or was annulled needs action only while an alert stands.
  */
-export function needsAction(turn: BoardTurn): boolean {
+export function needsAction(turn: TurnNow): boolean {
   if (turn.alerts.some(isStanding)) return true;
   if (isOver(turn)) return false;
   return turn.health !== 'on-plan' || turn.steps.some((step) => step.state === 'overdue');
 }
 
 /** The turns that match; each word of the text must be found somewhere in train, set, track, car or person. */
-export function filterTurns(turns: readonly BoardTurn[], filter: TurnFilter): BoardTurn[] {
+export function filterTurns(turns: readonly TurnNow[], filter: TurnFilter): TurnNow[] {
   const words = filter.text.toLocaleLowerCase().split(/\s+/).filter(Boolean);
   return turns.filter(
     (turn) =>
@@ -28,7 +28,7 @@ export function filterTurns(turns: readonly BoardTurn[], filter: TurnFilter): Bo
   );
 }
 
-function matches(turn: BoardTurn, words: readonly string[]): boolean {
+function matches(turn: TurnNow, words: readonly string[]): boolean {
   if (words.length === 0) return true;
   const texts = [
     turn.outboundTrain,

@@ -1,7 +1,7 @@
 import type { Instant, WireTrack } from '@stubpost/shared';
-import type { BoardTurn } from './board-turn';
+import type { TurnNow } from '../../../lib/turn/turn-now';
 import { findClashes, packRows, type Clash } from './pack-rows';
-import { bySchedule, plannedStretch, trackStretch } from './turn-times';
+import { bySchedule, plannedStretch, trackStretch } from '../../../lib/turn/turn-times';
 
 /** What a row of the picture stands for. */
 export type RowSubject = 'track' | 'set';
@@ -14,7 +14,7 @@ export interface BoardRow {
   label: string | null;
   /** Further rows of the same track or set, where trains overlap on it, count from 1. */
   part: number;
-  turns: BoardTurn[];
+  turns: TurnNow[];
   clashes: Clash[];
 }
 
@@ -26,13 +26,13 @@ const natural = new Intl.Collator('en', { numeric: true });
  * beside it, and turns without a track or set are packed into as few rows as needed, last.
  */
 export function groupRows(
-  turns: readonly BoardTurn[],
+  turns: readonly TurnNow[],
   subject: RowSubject,
   tracks: readonly WireTrack[],
   now: Instant,
 ): BoardRow[] {
-  const labelOf = (turn: BoardTurn): string | null => (subject === 'track' ? turn.track : turn.set);
-  const groups = new Map<string | null, BoardTurn[]>();
+  const labelOf = (turn: TurnNow): string | null => (subject === 'track' ? turn.track : turn.set);
+  const groups = new Map<string | null, TurnNow[]>();
   for (const label of rowLabels(turns.map(labelOf), subject, tracks)) groups.set(label, []);
   for (const turn of turns) groups.get(labelOf(turn))?.push(turn);
   return [...groups].flatMap(([label, members]) => rowsOf(label, members, subject, now));
@@ -52,7 +52,7 @@ function rowLabels(
 
 function rowsOf(
   label: string | null,
-  members: BoardTurn[],
+  members: TurnNow[],
   subject: RowSubject,
   now: Instant,
 ): BoardRow[] {
@@ -71,7 +71,7 @@ function rowsOf(
 }
 
 /** Overlaps on one track or set as things stand now; a turn that was annulled takes up nothing. */
-function clashesOf(members: readonly BoardTurn[], now: Instant): Clash[] {
+function clashesOf(members: readonly TurnNow[], now: Instant): Clash[] {
   return findClashes(
     members.filter((turn) => turn.annulled === null).map((turn) => ({ id: turn.id, ...trackStretch(turn, now) })),
   );

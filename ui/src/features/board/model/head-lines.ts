@@ -2,10 +2,10 @@ import { millisecondsInMinute, type Instant, type WireTrack } from '@stubpost/sh
 import { HEALTH_WORDS, TURN_STATE_WORDS } from '../../../components/words';
 import { formatSlack } from '../../../lib/time-display';
 import type { BoardRow } from './group-rows';
-import type { BoardTurn } from './board-turn';
+import type { TurnNow } from '../../../lib/turn/turn-now';
 import { markerFor, surname, type FlagKind } from './table-cells';
-import { clockText, timeText } from './time-text';
-import { departureOf, isOver, isUntaken } from './turn-times';
+import { clockText, timeText } from '../../../lib/turn/time-text';
+import { departureOf, isOver, isUntaken } from '../../../lib/turn/turn-times';
 
 /** One line of a row's head. */
 export interface HeadLine {
@@ -62,14 +62,14 @@ function labelWords(row: BoardRow): string {
 }
 
 /** Three turns if there are three; of more, the two that matter now. Those that left give way first. */
-function linesFor(turns: readonly BoardTurn[]): BoardTurn[] {
+function linesFor(turns: readonly TurnNow[]): TurnNow[] {
   if (turns.length <= mostLines) return [...turns];
   const firstStanding = turns.findIndex((turn) => !isOver(turn));
   const from = firstStanding === -1 ? turns.length - 2 : Math.min(firstStanding, turns.length - 2);
   return turns.slice(from, from + 2);
 }
 
-function headLine(turn: BoardTurn, row: BoardRow, isCurrent: boolean): HeadLine {
+function headLine(turn: TurnNow, row: BoardRow, isCurrent: boolean): HeadLine {
   const flagged = !isOver(turn) && turn.state !== 'scheduled' && turn.health !== 'on-plan';
   const leaves = turn.departedAt ?? turn.scheduledDepartureAt;
   return {
@@ -87,7 +87,7 @@ function headLine(turn: BoardTurn, row: BoardRow, isCurrent: boolean): HeadLine 
 
 function about(
   row: BoardRow,
-  turn: BoardTurn | undefined,
+  turn: TurnNow | undefined,
   hidden: number,
   context: HeadContext,
 ): RowHead['about'] {
@@ -114,7 +114,7 @@ function about(
   return { text: standsAt(turn, context.tracks), flag: null };
 }
 
-function standsAt(turn: BoardTurn, tracks: readonly WireTrack[]): string {
+function standsAt(turn: TurnNow, tracks: readonly WireTrack[]): string {
   const track = tracks.find((one) => one.label === turn.track);
   const cars = turn.cars.length;
   const parts = [

@@ -1,12 +1,12 @@
 import { millisecondsInMinute, type Instant } from '@stubpost/shared';
 import { formatSlack } from '../../../lib/time-display';
 import type { BoardRow } from './group-rows';
-import type { BoardTurn } from './board-turn';
+import type { TurnNow } from '../../../lib/turn/turn-now';
 import { planText } from './mark-pitch';
 import { markItems } from './picture-marks';
 import { overlaps, type TimeWindow } from './time-window';
 import { nextLane, workLane, type NextLane, type WorkLane } from './turn-picture';
-import { arrivalOf, isFarOffPlan, isOver, isUntaken, plannedStretch, shownStretch } from './turn-times';
+import { arrivalOf, isFarOffPlan, isOver, isUntaken, plannedStretch, shownStretch } from '../../../lib/turn/turn-times';
 import { wordItems } from './picture-words';
 
 /** One thing drawn on a lane. Looks hang on class names alone; content is plain text. */
@@ -36,7 +36,7 @@ export interface Scene {
 
 /** Where an item of a turn goes: its scene and the lanes of its row. */
 export interface TurnScene {
-  turn: BoardTurn;
+  turn: TurnNow;
   now: Instant;
   clock: (instant: Instant) => string;
   /** Pixels from one instant to another. */
@@ -63,7 +63,7 @@ export function pictureItems(scene: Scene): PictureItem[] {
   );
 }
 
-function turnScene(scene: Scene, rowId: string, turn: BoardTurn): TurnScene {
+function turnScene(scene: Scene, rowId: string, turn: TurnNow): TurnScene {
   const perMillisecond = scene.pixelsPerMinute / millisecondsInMinute;
   return {
     turn,
@@ -168,10 +168,10 @@ function summaryItems({ turn, item }: TurnScene): PictureItem[] {
 }
 
 /** Which of the four cells of the summary are filled. */
-export function summaryCells(turn: BoardTurn): { set: boolean; tested: boolean; ends: boolean; ready: boolean } {
+export function summaryCells(turn: TurnNow): { set: boolean; tested: boolean; ends: boolean; ready: boolean } {
   const inward = turn.steps.filter((step) => step.anchor === 'arrival');
-  const all = (steps: BoardTurn['steps']): boolean => steps.every((step) => step.doneAt !== null);
-  const some = (steps: BoardTurn['steps']): boolean => steps.length > 0 && all(steps);
+  const all = (steps: TurnNow['steps']): boolean => steps.every((step) => step.doneAt !== null);
+  const some = (steps: TurnNow['steps']): boolean => steps.length > 0 && all(steps);
   return {
     set: some(inward.filter((step) => step.kind === 'securement')),
     tested: some(inward.filter((step) => step.kind === 'brake-test')),

@@ -1,9 +1,9 @@
 import type { Instant } from '@stubpost/shared';
 import { stepMarkClass } from '../../../components/step-mark';
-import type { BoardStep, BoardTurn } from './board-turn';
+import type { StepNow, TurnNow } from '../../../lib/turn/turn-now';
 import { markPitch, spacedMarks } from './mark-pitch';
 import type { PictureItem, TurnScene } from './picture-items';
-import { isFarOffPlan } from './turn-times';
+import { isFarOffPlan } from '../../../lib/turn/turn-times';
 
 /** The marks of one turn, and the right edge of the last of them. */
 export interface Marks {
@@ -34,12 +34,12 @@ export function markItems(scene: TurnScene): Marks {
 }
 
 interface PlacedMark {
-  step: BoardStep;
+  step: StepNow;
   at: Instant;
 }
 
 /** Where a step's mark belongs; null where it has no place: after the departure only what is recorded or still asked for. */
-function markAt(step: BoardStep, turn: BoardTurn): Instant | null {
+function markAt(step: StepNow, turn: TurnNow): Instant | null {
   if (step.doneAt !== null) return step.doneAt;
   if (step.holdsDeparture) return turn.departedAt === null ? step.finishAt : null;
   return turn.departedAt !== null && step.state !== 'not-needed' ? step.dueAt : null;
@@ -58,7 +58,7 @@ function markItem(scene: TurnScene, { step, at }: PlacedMark): PictureItem {
 }
 
 /** What the mark lies on, for its contrast: a done mark lies on the bar, one still to do on the paper right of it. */
-function ground(turn: BoardTurn, step: BoardStep): string {
+function ground(turn: TurnNow, step: StepNow): string {
   if (step.doneAt === null) return '';
   if (turn.departedAt !== null) return step.doneAt > turn.departedAt ? '' : 'on-gone';
   if (turn.health === 'no-word') return step.doneAt > (turn.lastHeardAt ?? 0) ? '' : 'on-work';

@@ -1,8 +1,8 @@
 import type { Instant } from '@stubpost/shared';
 import type { PictureItem, TurnScene } from './picture-items';
 import type { WorkLane } from './turn-picture';
-import { arrivalOf, isUntaken, plannedStretch } from './turn-times';
-import { healthFlag } from './health-words';
+import { arrivalOf, isUntaken, plannedStretch } from '../../../lib/turn/turn-times';
+import { healthFlag } from '../../../lib/turn/health-flag';
 
 /** Words beside a bar: what is the matter with the turn, right of its last mark. */
 export function wordItems(scene: TurnScene, lane: WorkLane, lastPixelAt: Instant | null): PictureItem[] {

@@ -1,9 +1,9 @@
 import { formatInstant, millisecondsInHour, type CalendarDate, type Instant } from '@stubpost/shared';
 import { dateAt, wallTime } from '../../../lib/time-display';
 import { instantOfWallTime } from '../../../lib/time-entry';
-import type { BoardTurn } from './board-turn';
+import type { TurnNow } from '../../../lib/turn/turn-now';
 import type { TimeWindow } from './time-window';
-import { plannedStretch } from './turn-times';
+import { plannedStretch } from '../../../lib/turn/turn-times';
 
 /** Trains of a service day may run after midnight: until this hour a clock reading belongs to the day before. Our choice. */
 const firstHour = 3;
@@ -32,7 +32,7 @@ export function serviceDatesOf(window: TimeWindow, zone: string): CalendarDate[]
 }
 
 /** From the hour of the first turn of a service date to the hour after the last; without turns its daytime. */
-export function dayBounds(turns: readonly BoardTurn[], date: CalendarDate, zone: string): TimeWindow {
+export function dayBounds(turns: readonly TurnNow[], date: CalendarDate, zone: string): TimeWindow {
   const stretches = turns.filter((turn) => turn.serviceDate === date).map(plannedStretch);
   if (stretches.length === 0) {
     const start = instantOfWallTime(date, 5 * 3600, zone);

@@ -1,7 +1,7 @@
 import { stepMarkClass } from '../../../components/step-mark';
-import type { BoardStep, BoardTurn } from './board-turn';
-import { clockText, timeText } from './time-text';
-import { isFarOffPlan, isOver } from './turn-times';
+import type { StepNow, TurnNow } from '../../../lib/turn/turn-now';
+import { clockText, timeText } from '../../../lib/turn/time-text';
+import { isFarOffPlan, isOver } from '../../../lib/turn/turn-times';
 
 /** A step in a cell: its mark, its time or the word for it, and under that when it was due or how it is known. */
 export interface StepCell {
@@ -14,7 +14,7 @@ export interface StepCell {
 }
 
 /** The cell of one step of a turn. */
-export function stepCell(step: BoardStep, turn: BoardTurn): StepCell {
+export function stepCell(step: StepNow, turn: TurnNow): StepCell {
   const due = step.dueAt === null ? '' : `due ${timeText(step.dueAt, turn.zone)}`;
   const cell = { key: step.key, mark: stepMarkClass(step.kind, step.state, step.source), estimate: false, strong: false, small: due };
   if (turn.annulled !== null) return { ...cell, mark: null, text: '–', small: '' };
@@ -32,7 +32,7 @@ export function stepCell(step: BoardStep, turn: BoardTurn): StepCell {
   return { ...cell, text: timeText(step.finishAt, turn.zone), estimate: true };
 }
 
-function saidOf(step: BoardStep, due: string): Pick<StepCell, 'small' | 'strong'> {
+function saidOf(step: StepNow, due: string): Pick<StepCell, 'small' | 'strong'> {
   if (step.state === 'in-question') return { small: 'in question', strong: true };
   if (step.source === 'by-radio') return { small: 'by radio', strong: false };
   if (step.source === 'entered-later') return { small: 'later', strong: false };

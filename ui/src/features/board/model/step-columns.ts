@@ -1,5 +1,5 @@
 import type { Anchor } from '@stubpost/shared';
-import type { BoardTurn } from './board-turn';
+import type { TurnNow } from '../../../lib/turn/turn-now';
 
 /** A column of the table for one step of the plan. */
 export interface StepColumn {
@@ -12,7 +12,7 @@ export interface StepColumn {
  * The step columns: every step that holds a departure on any of the turns, those from the arrival first, in the order in
  * which the plans have them. A step that only an unusual plan has comes after the ones it follows there.
  */
-export function stepColumns(turns: readonly BoardTurn[]): StepColumn[] {
+export function stepColumns(turns: readonly TurnNow[]): StepColumn[] {
   const columns: StepColumn[] = [];
   for (const turn of turns) {
     let place = 0;

@@ -1,11 +1,11 @@
 import { millisecondsInMinute, type Instant, type WireTrack } from '@stubpost/shared';
 import { PRIORITY_WORDS, TURN_STATE_WORDS } from '../../../components/words';
 import { formatSlack } from '../../../lib/time-display';
-import type { BoardTurn } from './board-turn';
-import { healthFlag } from './health-words';
+import type { TurnNow } from '../../../lib/turn/turn-now';
+import { healthFlag } from '../../../lib/turn/health-flag';
 import { stepCell, type StepCell } from './step-cell';
-import { clockText, timeText } from './time-text';
-import { arrivalOf, departureOf, foremostAlert, isFarOffPlan, isOver, isUntaken } from './turn-times';
+import { clockText, timeText } from '../../../lib/turn/time-text';
+import { arrivalOf, departureOf, foremostAlert, isFarOffPlan, isOver, isUntaken } from '../../../lib/turn/turn-times';
 
 /** A cell of two lines. `estimate` marks a forecast time (written ~17:37, read out "about 17:37"). */
 export interface Cell {
@@ -62,7 +62,7 @@ const dash = '–';
 const nothing: Cell = { text: dash };
 
 /** The row of a turn at `now`. */
-export function tableRow(turn: BoardTurn, context: RowContext): TableRow {
+export function tableRow(turn: TurnNow, context: RowContext): TableRow {
   const { now, tracks } = context;
   return {
     id: turn.id,
@@ -87,18 +87,18 @@ export function tableRow(turn: BoardTurn, context: RowContext): TableRow {
   };
 }
 
-function lookOf(turn: BoardTurn): TableRow['look'] {
+function lookOf(turn: TurnNow): TableRow['look'] {
   if (turn.annulled !== null) return 'annulled';
   if (isOver(turn)) return 'over';
   return turn.state === 'scheduled' ? 'scheduled' : 'standing';
 }
 
-function trainCell(turn: BoardTurn): Cell {
+function trainCell(turn: TurnNow): Cell {
   if (turn.outboundTrain === null) return { text: turn.train, small: 'ties up' };
   return { text: turn.train, small: turn.inboundTrain === null ? 'first out' : `in ${turn.inboundTrain}` };
 }
 
-function leavesCell(turn: BoardTurn): Cell {
+function leavesCell(turn: TurnNow): Cell {
   const { zone, scheduledDepartureAt: scheduled, departedAt } = turn;
   if (scheduled === null) return nothing;
   if (departedAt !== null) return { text: clockText(departedAt, zone), small: `sched ${timeText(scheduled, zone)}` };
@@ -112,7 +112,7 @@ function leavesCell(turn: BoardTurn): Cell {
   return leaves > scheduled ? { text, small: `held to ${timeText(leaves, zone)}` } : { text };
 }
 
-function planCell(turn: BoardTurn, { now, me, clashesWith }: RowContext): PlanCell {
+function planCell(turn: TurnNow, { now, me, clashesWith }: RowContext): PlanCell {
   const alert = foremostAlert(turn.alerts);
   const untaken = alert?.state === 'raised';
   const has = alert === null ? '' : alertSaid(alert, turn.zone, me);
@@ -126,7 +126,7 @@ function planCell(turn: BoardTurn, { now, me, clashesWith }: RowContext): PlanCe
   return { ...base, flag: 'blue-signal', text: 'Blue signal', small: has || `${since}${surname(turn.blueSignal.by)}` };
 }
 
-function alertSaid(alert: BoardTurn['alerts'][number], zone: string, me: string): string {
+function alertSaid(alert: TurnNow['alerts'][number], zone: string, me: string): string {
   const priority = PRIORITY_WORDS[alert.priority];
   if (alert.state === 'raised') return `${priority}, `;
   if (alert.state === 'set-aside' && alert.setAsideUntil !== null) {
@@ -137,18 +137,18 @@ function alertSaid(alert: BoardTurn['alerts'][number], zone: string, me: string)
   return `${priority}, ${who}${at}`;
 }
 
-function stateCell(turn: BoardTurn): Cell {
+function stateCell(turn: TurnNow): Cell {
   const text = TURN_STATE_WORDS[turn.state];
   const small = turn.annulled === null ? stateSaid(turn) : annulledSaid(turn);
   return small === '' ? { text } : { text, small };
 }
 
-function annulledSaid({ annulled, zone }: BoardTurn): string {
+function annulledSaid({ annulled, zone }: TurnNow): string {
   if (annulled === null) return '';
   return annulled.at === null ? annulled.reason : `${timeText(annulled.at, zone)}, ${annulled.reason}`;
 }
 
-function stateSaid(turn: BoardTurn): string {
+function stateSaid(turn: TurnNow): string {
   if (turn.departedAt !== null) return runningTestSaid(turn);
   if (turn.state === 'inbound') return latenessSaid(turn);
   if (turn.state === 'scheduled') return turn.extra ? 'extra' : '';
@@ -157,20 +157,20 @@ function stateSaid(turn: BoardTurn): string {
   return asked.length === 0 ? '' : `${done} of ${asked.length} done`;
 }
 
-function runningTestSaid(turn: BoardTurn): string {
+function runningTestSaid(turn: TurnNow): string {
   const test = turn.steps.find((step) => !step.holdsDeparture && step.state !== 'not-needed');
   if (test === undefined) return '';
   if (test.doneAt !== null) return `test ${clockText(test.doneAt, turn.zone)}`;
   return test.dueAt === null ? '' : `test due ${timeText(test.dueAt, turn.zone)}`;
 }
 
-function latenessSaid(turn: BoardTurn): string {
+function latenessSaid(turn: TurnNow): string {
   const late = (arrivalOf(turn) ?? 0) - (turn.scheduledArrivalAt ?? 0);
   const minutes = Math.floor(late / millisecondsInMinute);
   return turn.scheduledArrivalAt === null || minutes < 1 ? 'on time' : `${minutes} min late`;
 }
 
-function markerCell(turn: BoardTurn, tracks: readonly WireTrack[]): Cell {
+function markerCell(turn: TurnNow, tracks: readonly WireTrack[]): Cell {
   const track = tracks.find((one) => one.label === turn.track);
   const marker = markerFor(track, turn.cars.length);
   const small = track?.cars === undefined ? {} : { small: `${track.cars} fit` };
@@ -184,7 +184,7 @@ export function markerFor(track: WireTrack | undefined, cars: number): string | 
 
 const carsSaid = (count: number): string => `${count} ${count === 1 ? 'car' : 'cars'}`;
 
-function arrivedCell(turn: BoardTurn): Cell {
+function arrivedCell(turn: TurnNow): Cell {
   const { zone, scheduledArrivalAt: scheduled, arrivedAt } = turn;
   if (scheduled === null) return nothing;
   const small = `sched ${timeText(scheduled, zone)}`;
@@ -194,7 +194,7 @@ function arrivedCell(turn: BoardTurn): Cell {
   return { text: timeText(expected, zone), estimate: true, small };
 }
 
-function readyCell(turn: BoardTurn, now: Instant): Cell {
+function readyCell(turn: TurnNow, now: Instant): Cell {
   if (isOver(turn) || turn.outboundTrain === null) return nothing;
   if (turn.health === 'no-word' || turn.readyAt === null) return { text: dash, small: 'no forecast' };
   const held = turn.steps.filter((step) => step.holdsDeparture && step.state !== 'not-needed');
@@ -204,7 +204,7 @@ function readyCell(turn: BoardTurn, now: Instant): Cell {
   return { text: timeText(Math.max(turn.readyAt, now), turn.zone), estimate: true };
 }
 
-function conductorCell(turn: BoardTurn): Cell {
+function conductorCell(turn: TurnNow): Cell {
   const conductor = turn.crew.find((member) => member.as === 'conductor');
   const heard = turn.lastHeardAt === null ? {} : { small: `heard ${clockText(turn.lastHeardAt, turn.zone)}` };
   return { text: conductor === undefined ? dash : surname(conductor.name), ...heard };

@@ -1,14 +1,12 @@
 import { millisecondsInMinute, type Instant } from '@stubpost/shared';
+import type { Stretch } from '../../../lib/turn/turn-times';
 
 /** Lengths offered as buttons, in minutes; `day` is the whole service day. */
 export const SPANS = [60, 120, 240, 480, 'day'] as const;
 export type Span = number | 'day';
 
-/** Half-open stretch of time, `from` included. */
-export interface TimeWindow {
-  from: Instant;
-  to: Instant;
-}
+/** The stretch of time that is shown. */
+export type TimeWindow = Stretch;
 
 /** What the person chose: how long, and where it starts (of a day: any moment in it); a null start follows now. */
 export interface WindowChoice {

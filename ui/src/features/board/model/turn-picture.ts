@@ -1,7 +1,7 @@
 import type { Instant } from '@stubpost/shared';
-import type { BoardStep, BoardTurn } from './board-turn';
+import type { StepNow, TurnNow } from '../../../lib/turn/turn-now';
 import type { TimeWindow } from './time-window';
-import { arrivalOf, departureOf, isFarOffPlan, isOver, plannedStretch } from './turn-times';
+import { arrivalOf, departureOf, isFarOffPlan, isOver, plannedStretch } from '../../../lib/turn/turn-times';
 
 /** Where the parts of the work lane begin and end; null where there is nothing of it. */
 export interface WorkLane {
@@ -32,7 +32,7 @@ const nonEmpty = (from: Instant | null, to: Instant | null): TimeWindow | null =
   from !== null && to !== null && from < to ? { from, to } : null;
 
 /** When work on the train began: at the post, or for a first train out with the first thing recorded. */
-export function workBegan(turn: BoardTurn): Instant | null {
+export function workBegan(turn: TurnNow): Instant | null {
   if (turn.arrivedAt !== null) return turn.arrivedAt;
   if (turn.kind !== 'first-out') return null;
   const done = turn.steps.map((step) => step.doneAt).filter((at) => at !== null);
@@ -40,7 +40,7 @@ export function workBegan(turn: BoardTurn): Instant | null {
 }
 
 /** The work lane of a turn at `now`. */
-export function workLane(turn: BoardTurn, now: Instant): WorkLane {
+export function workLane(turn: TurnNow, now: Instant): WorkLane {
   const none: WorkLane = { work: null, over: null, unheard: null, open: null };
   if (isFarOffPlan(turn)) return none;
   const began = workBegan(turn);
@@ -54,7 +54,7 @@ export function workLane(turn: BoardTurn, now: Instant): WorkLane {
   return { ...standingBar(turn, began, now), open: nonEmpty(now, ends) };
 }
 
-function standingBar(turn: BoardTurn, began: Instant, now: Instant): Omit<WorkLane, 'open'> {
+function standingBar(turn: TurnNow, began: Instant, now: Instant): Omit<WorkLane, 'open'> {
   if (turn.health === 'no-word') {
     const heard = Math.max(began, turn.lastHeardAt ?? began);
     return { work: nonEmpty(began, heard), over: null, unheard: nonEmpty(heard, now) };
@@ -67,13 +67,13 @@ function standingBar(turn: BoardTurn, began: Instant, now: Instant): Omit<WorkLa
 }
 
 /** When the open end closes: at the departure, or when the work will be done if that is later. */
-export function expectedEnd(turn: BoardTurn): Instant | null {
+export function expectedEnd(turn: TurnNow): Instant | null {
   const leaves = departureOf(turn);
   if (leaves === null) return turn.readyAt;
   return Math.max(leaves, turn.health === 'no-word' ? leaves : (turn.readyAt ?? leaves));
 }
 
-function lastDone(turn: BoardTurn): Instant | null {
+function lastDone(turn: TurnNow): Instant | null {
   const done = turn.steps.map((step) => step.doneAt).filter((at) => at !== null);
   return done.length === 0 ? null : Math.max(...done);
 }
@@ -82,7 +82,7 @@ function lastDone(turn: BoardTurn): Instant | null {
  * The next lane: hatch for the work that holds the departure and is not done, a line for the time between, a bracket
  * for the minutes beyond the departure. Null when there is no forecast to draw: far off, gone, or nothing heard.
  */
-export function nextLane(turn: BoardTurn, now: Instant): NextLane | null {
+export function nextLane(turn: TurnNow, now: Instant): NextLane | null {
   const leaves = departureOf(turn);
   if (isFarOffPlan(turn) || isOver(turn) || turn.health === 'no-word' || leaves === null) return null;
   const began = workBegan(turn) === null ? (arrivalOf(turn) ?? now) : now;
@@ -99,10 +99,10 @@ export function nextLane(turn: BoardTurn, now: Instant): NextLane | null {
   };
 }
 
-const isAhead = (step: BoardStep): boolean =>
+const isAhead = (step: StepNow): boolean =>
   step.holdsDeparture && step.doneAt === null && step.finishAt !== null && step.state !== 'not-needed';
 
-function pieceOf(step: BoardStep, from: Instant): TimeWindow {
+function pieceOf(step: StepNow, from: Instant): TimeWindow {
   const finish = step.finishAt ?? from;
   return { from: Math.max(from, step.startAt ?? finish), to: Math.max(from, finish) };
 }
