@@ -7,7 +7,10 @@ export default defineConfig({
   resolve: {
     alias: [
       { find: /^@stubpost\/shared$/, replacement: resolve(__dirname, '../shared/src/index.ts') },
-      { find: /^@stubpost\/shared\/testing$/, replacement: resolve(__dirname, '../shared/src/testing/index.ts') },
+      {
+        find: /^@stubpost\/shared\/testing$/,
+        replacement: resolve(__dirname, '../shared/src/testing/index.ts'),
+      },
     ],
   },
   test: {

@@ -22,3 +22,7 @@ export { type OpenTurnsCommand, TurnOpener, type WithdrawTurnsCommand } from './
 export { TurnSweepJob } from './turns/turn-sweep.job';
 export { TurnSweep } from './turns/turn-sweep.service';
 export { TurnsService } from './turns/turns.service';
+export { TimetableActivations } from './timetables/timetable-activations.service';
+export { TimetableDays } from './timetables/timetable-days.service';
+export { type IncomingFile, TimetableImports } from './timetables/timetable-imports.service';
+export { TurnFiles } from './turns/turn-files';

@@ -44,6 +44,17 @@ export class TimetableDays {
     return dates;
   }
 
+  /** Opens a service day outside the rolling ones, such as a past one. Nothing happens where nothing runs, or twice. */
+  async open(serviceDate: CalendarDate): Promise<void> {
+    await this.unitOfWork.run(async (transaction) => {
+      const orders = (await this.timetables.findStanding(transaction)).map(activationOf);
+      const order = activationOn(orders, serviceDate);
+      const opener = await this.timetables.findOpener(transaction, serviceDate);
+      if (order === null || order.number === opener) return;
+      await this.openDay(transaction, { order, serviceDate, now: this.clock.now() });
+    });
+  }
+
   /** As `roll`, inside a larger piece of work. */
   async rollIn(transaction: Transaction, now: Instant): Promise<CalendarDate[]> {
     const orders = (await this.timetables.findStanding(transaction)).map(activationOf);

@@ -43,5 +43,6 @@ import { incomingFolder, UploadStore } from './upload-store';
     TimetablesRepository,
     UploadStore,
   ],
+  exports: [TimetableActivations, TimetableDays, TimetableImports],
 })
 export class TimetablesModule {}

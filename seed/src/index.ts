@@ -1,0 +1,1 @@
+export { startDemo } from './start-demo';
