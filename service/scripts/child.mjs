@@ -6,6 +6,7 @@ import { Failure } from './say.mjs';
 
 const running = new Set();
 const watchers = new Set();
+let isEnding = false;
 
 /** Calls `tell` with the list of running child processes whenever it changes. */
 export function onChildrenChanged(tell) {
@@ -35,6 +36,8 @@ export function run(command, args, { cwd, env, limitMilliseconds } = {}) {
     function end(code) {
       clearTimeout(timer);
       running.delete(child);
+      // Once we are told to end nobody may draw a conclusion from a child that we ended ourselves.
+      if (isEnding) return;
       tellWatchers();
       resolve({ code, output, timedOut });
     }
@@ -81,10 +84,9 @@ async function stopEverything() {
  */
 export function endChildrenOnSignal({ before = () => undefined } = {}) {
   const names = ['SIGINT', 'SIGTERM', 'SIGHUP'];
-  let ending = false;
   async function onSignal(name) {
-    if (ending) return;
-    ending = true;
+    if (isEnding) return;
+    isEnding = true;
     await stopEverything();
     before();
     process.exit(128 + constants.signals[name]);

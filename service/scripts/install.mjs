@@ -71,7 +71,8 @@ export async function ensureInstalled() {
   const toolchain = await ensureToolchain();
   const args = npmArguments(wanted);
   stamp.clear();
-  await stage(`Installing packages (npm ${args.join(' ')}; the first time takes a few minutes)`, async () => {
+  const patience = args[0] === 'ci' ? '; this takes a few minutes' : '';
+  await stage(`Installing packages (npm ${args.join(' ')}${patience})`, async () => {
     const env = npmEnvironment(process.env, toolchain);
     await npmOrFail(args, env);
     if (!(await driverLoads())) await npmOrFail(['rebuild', 'better-sqlite3'], env);
