@@ -1,6 +1,10 @@
-import { PageHeader } from '../../components/page-header';
+import { useEffect } from 'react';
+import { MyTurnsScreen } from '../../features/my-turn/components/my-turns-screen';
 
-/** Heading alone, until the parts of the page stand. */
+/** The turns of a crew on the phone. */
 export function MyPage() {
-  return <PageHeader title="My" />;
+  useEffect(() => {
+    document.title = 'My turns · Stubpost';
+  }, []);
+  return <MyTurnsScreen />;
 }

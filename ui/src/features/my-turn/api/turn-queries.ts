@@ -3,6 +3,7 @@ import {
   type WireBoard,
   type WireEntry,
   type WireStepPlan,
+  type WireTerminalSettings,
   type WireTurn,
 } from '@stubpost/shared';
 import { keepPreviousData, queryOptions } from '@tanstack/react-query';
@@ -35,6 +36,15 @@ export const planQuery = (planId: string) =>
     queryKey: queryKeys.plans.detail(planId),
     queryFn: ({ signal }) => api.get<WireStepPlan>(`/api/plans/${encodeURIComponent(planId)}`, { signal }),
     staleTime: Infinity,
+  });
+
+/** What a terminal counts as late and silent. */
+export const settingsQuery = (terminal: string) =>
+  queryOptions({
+    queryKey: queryKeys.terminals.settings(terminal),
+    queryFn: ({ signal }) =>
+      api.get<WireTerminalSettings>(`/api/terminals/${encodeURIComponent(terminal)}/settings`, { signal }),
+    staleTime: 5 * 60_000,
   });
 
 /** Turns of one terminal round now, as `/my` needs them. The window moves in round ten minutes. */

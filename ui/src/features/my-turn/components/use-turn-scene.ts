@@ -1,9 +1,10 @@
+import { latenessSettingsOf, shippedThresholds } from '@stubpost/shared';
 import { useQuery } from '@tanstack/react-query';
 import { useEffect, useMemo } from 'react';
 import { rememberTerminal, terminalsQuery } from '../../../lib/terminal-choice';
 import { usePerson } from '../../../lib/session';
 import { useNow } from '../../../lib/use-now';
-import { entriesQuery, myBoardQuery, planQuery, turnQuery } from '../api/turn-queries';
+import { entriesQuery, myBoardQuery, planQuery, settingsQuery, turnQuery } from '../api/turn-queries';
 import { useEntryQueue } from '../api/use-entry-queue';
 import { useRecorder } from '../api/use-recorder';
 import { nextArrivalAsEngineer } from '../model/controls';
@@ -33,6 +34,8 @@ export function useTurnSceneOf(turnId: string): SceneState {
   const entries = useQuery(entriesQuery(turnId)).data;
   const terminals = useQuery(terminalsQuery).data;
   const mine = useQuery({ ...myBoardQuery(told?.terminal ?? '', now), enabled: told !== undefined }).data;
+  const thresholds = useQuery({ ...settingsQuery(told?.terminal ?? ''), enabled: told !== undefined }).data
+    ?.thresholds;
   const { waiting } = queue.state;
   const plan = planResult.data;
 
@@ -61,8 +64,8 @@ export function useTurnSceneOf(turnId: string): SceneState {
   const error = turnResult.error ?? planResult.error;
   if (known === null) return error === null ? { kind: 'loading', retry } : { kind: 'failed', error, retry };
 
-  const hasOwnWord = waiting.some((entry) => entry.turnId === turnId);
-  const turn = turnAt(known.turn, known.steps, now, hasOwnWord);
+  const rules = latenessSettingsOf(thresholds ?? shippedThresholds, known.turn.zone);
+  const turn = turnAt(known.turn, known.planSteps, rules, now);
   const me = {
     id: person.id,
     name: person.name,

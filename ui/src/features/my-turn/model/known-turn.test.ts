@@ -31,6 +31,7 @@ describe('a turn with entries under way', () => {
       by: 'Ortiz',
       entryId: request.id,
     });
+    expect(know([request]).turn.lastHeardAt).toBe(at('17:23:08'));
   });
 
   it('shows it as open again once it is taken back, sent or not', () => {

@@ -21,6 +21,8 @@ export interface KnownTurn {
   turn: WireTurn;
   /** The steps of this turn, by the plan in force on its day. */
   steps: readonly PlanStep[];
+  /** The steps of the whole plan. */
+  planSteps: readonly PlanStep[];
   /** Handbrakes by all entries; null until the entries of the turn are here. */
   handbrakes: TurnFacts['handbrakes'] | null;
   /** Keys of the steps that take handbrakes off. */
@@ -75,6 +77,7 @@ export function knownTurn({ turn, plan, entries, waiting, writer }: TurnSources)
         ? withCrew(turn, waiting, writer)
         : withCrew(withFacts(turn, before, after), waiting, writer),
     steps,
+    planSteps: plan.steps,
     handbrakes: entries === undefined ? null : after.handbrakes,
     releases,
   };
@@ -86,11 +89,15 @@ function withFacts(turn: WireTurn, before: TurnFacts, after: TurnFacts): WireTur
   const departureAt = changed(before.departureAt, after.departureAt, outbound?.actualDepartureAt ?? null);
   return {
     ...turn,
+    lastHeardAt: newest(turn.lastHeardAt, after.lastHeardAt),
     inbound: inbound === null ? null : { ...inbound, actualArrivalAt: arrivalAt },
     outbound: outbound === null ? null : { ...outbound, actualDepartureAt: departureAt },
     steps: turn.steps.map((step) => withAccount(step, before.done[step.key], after.done[step.key])),
   };
 }
+
+const newest = (told: string | null, own: number | null): string | null =>
+  own === null || (told !== null && Date.parse(told) >= own) ? told : formatInstant(own);
 
 /** The service's word, unless the entries under way say something else. */
 function changed(before: number | null, after: number | null, told: string | null): string | null {

@@ -1,9 +1,10 @@
 import { at, aWireTurn, ms, pushPullPlan, withDone } from '../testing/a-wire-turn';
+import { shippedLatenessSettings } from '@stubpost/shared';
 import { turnAt } from './turn-now';
 
 const { steps } = pushPullPlan;
-const now = (turn: ReturnType<typeof aWireTurn>, clock: string, hasOwnWord = false) =>
-  turnAt(turn, steps, ms(clock), hasOwnWord);
+const settings = { ...shippedLatenessSettings, formatTime: String, formatExactTime: String };
+const now = (turn: ReturnType<typeof aWireTurn>, clock: string) => turnAt(turn, steps, settings, ms(clock));
 const secured = withDone(aWireTurn(), { 'handbrake-set': '17:19:52' });
 
 describe('a turn at this second', () => {
@@ -46,9 +47,9 @@ describe('a turn at this second', () => {
     expect(now(left, '17:46').health).toBe('on-plan');
   });
 
-  it('ends "no word" with an entry of this phone', () => {
-    const silent = { ...secured, health: 'no-word' as const };
-    expect(now(silent, '17:22:41').health).toBe('no-word');
-    expect(now(silent, '17:22:41', true).health).toBe('on-plan');
+  it('has no word three minutes past a due act without an entry since', () => {
+    expect(now(secured, '17:27:19').health).toBe('on-plan');
+    expect(now(secured, '17:27:20').health).toBe('no-word');
+    expect(now({ ...secured, lastHeardAt: at('17:25') }, '17:27:20').health).toBe('on-plan');
   });
 });
