@@ -7,6 +7,7 @@ import { LinksController } from './links.controller';
 import { OneTimeLinks } from './one-time-links.service';
 import { OwnSessionsReadModel } from './own-sessions.read-model';
 import { Passwords } from './passwords';
+import { SessionCache } from './session-cache';
 import { SessionCookie } from './session-cookie';
 import { SessionEndings } from './session-endings';
 import { loadSessionKey } from './session-secret';
@@ -28,6 +29,7 @@ import { SignInThrottle } from './sign-in-throttle';
     OneTimeLinks,
     OwnSessionsReadModel,
     Passwords,
+    SessionCache,
     SessionCookie,
     SessionEndings,
     SessionStrategy,

@@ -4,6 +4,7 @@ import { Clock } from '../common/clock';
 import type { CurrentPersonFacts } from '../common/signed-in';
 import { Reader } from '../database/reader';
 import { type Transaction, UnitOfWork } from '../database/unit-of-work';
+import { type ReadSession, SessionCache } from './session-cache';
 import { SessionEndings } from './session-endings';
 import { SessionTokens } from './session-tokens';
 
@@ -39,6 +40,7 @@ export class SessionsService {
     private readonly reader: Reader,
     private readonly clock: Clock,
     private readonly tokens: SessionTokens,
+    private readonly cache: SessionCache,
     private readonly endings: SessionEndings,
   ) {}
 
@@ -56,19 +58,18 @@ export class SessionsService {
 
   /** The person of a standing session, or null. Using it keeps it from falling idle. */
   async resolve(sessionId: string): Promise<CurrentPersonFacts | null> {
-    const rows = await this.reader.query<SessionPersonRow>(
-      `SELECT s.person_id, p.name, s.last_seen_at, s.ends_at, r.role, r.terminal
-       FROM session s JOIN person p ON p.id = s.person_id LEFT JOIN person_role r ON r.person_id = p.id
-       WHERE s.id = ? AND s.ended_at IS NULL AND p.active = ?`,
-      [sessionId, true],
-    );
-    const [first] = rows;
-    if (first === undefined) return null;
     const now = this.clock.now();
-    const lastSeenAt = Number(first.last_seen_at);
-    if (now >= Number(first.ends_at) || now - lastSeenAt >= sessionIdleMilliseconds) return null;
-    if (now - lastSeenAt >= touchMilliseconds) await this.touch(sessionId, now);
-    return { id: first.person_id, name: first.name, sessionId, roles: rows.flatMap(grantOf) };
+    const session = this.cache.find(sessionId, now) ?? (await this.read(sessionId, now));
+    if (session === null) return null;
+    const idleMilliseconds = now - session.lastSeenAt;
+    if (now >= session.endsAt || idleMilliseconds >= sessionIdleMilliseconds) return null;
+    if (idleMilliseconds >= touchMilliseconds) await this.touch(sessionId, now);
+    return session.person;
+  }
+
+  /** To be called where a person's name, roles or being active change: the next request sees it. */
+  personChanges(transaction: Transaction, personId: string): void {
+    transaction.afterCommit(() => this.cache.dropPerson(personId));
   }
 
   /** Ends a person's sessions, all of them or all but one. */
@@ -77,7 +78,10 @@ export class SessionsService {
       'UPDATE session SET ended_at = ? WHERE person_id = ? AND ended_at IS NULL AND id <> ? RETURNING id',
       [this.clock.now(), personId, exceptSessionId ?? ''],
     );
-    transaction.afterCommit(() => this.endings.publish(rows.map((row) => row.id)));
+    transaction.afterCommit(() => {
+      this.cache.dropPerson(personId);
+      this.endings.publish(rows.map((row) => row.id));
+    });
   }
 
   /** Ends one session of a person; false when there is no such standing one. */
@@ -87,15 +91,38 @@ export class SessionsService {
         'UPDATE session SET ended_at = ? WHERE id = ? AND person_id = ? AND ended_at IS NULL',
         [this.clock.now(), sessionId, personId],
       );
-      if (ended > 0) transaction.afterCommit(() => this.endings.publish([sessionId]));
+      transaction.afterCommit(() => {
+        this.cache.drop(sessionId);
+        if (ended > 0) this.endings.publish([sessionId]);
+      });
       return ended > 0;
     });
   }
 
-  private touch(sessionId: string, now: Instant): Promise<number> {
-    return this.unitOfWork.run((transaction) =>
-      transaction.execute('UPDATE session SET last_seen_at = ? WHERE id = ?', [now, sessionId]),
+  private async read(sessionId: string, now: Instant): Promise<ReadSession | null> {
+    const { mark } = this.cache;
+    const rows = await this.reader.query<SessionPersonRow>(
+      `SELECT s.person_id, p.name, s.last_seen_at, s.ends_at, r.role, r.terminal
+       FROM session s JOIN person p ON p.id = s.person_id LEFT JOIN person_role r ON r.person_id = p.id
+       WHERE s.id = ? AND s.ended_at IS NULL AND p.active = ?`,
+      [sessionId, true],
     );
+    const [first] = rows;
+    if (first === undefined) return null;
+    const session: ReadSession = {
+      person: { id: first.person_id, name: first.name, sessionId, roles: rows.flatMap(grantOf) },
+      lastSeenAt: Number(first.last_seen_at),
+      endsAt: Number(first.ends_at),
+    };
+    this.cache.keep(session, now, mark);
+    return session;
+  }
+
+  private touch(sessionId: string, now: Instant): Promise<number> {
+    return this.unitOfWork.run((transaction) => {
+      transaction.afterCommit(() => this.cache.drop(sessionId));
+      return transaction.execute('UPDATE session SET last_seen_at = ? WHERE id = ?', [now, sessionId]);
+    });
   }
 }
 

@@ -68,6 +68,7 @@ export class PeopleService {
       if (request.roles !== undefined) await this.requireTerminals(transaction, request.roles);
       await this.people.update(transaction, person, request);
       await this.requireAnAdministrator(transaction);
+      this.sessions.personChanges(transaction, id);
       if (request.active === false) await this.sessions.endAllOf(transaction, id);
     });
   }
