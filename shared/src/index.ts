@@ -98,7 +98,7 @@ export type {
   Reading,
   SubjectKind,
 } from './turn/entry';
-export type { EntryFinding, EntryFindingCode } from './turn/entry-findings';
+export type { EntryFinding, EntryFindingCode } from './turn/entry-finding';
 export { evolve, startOfTurn, turnFrom } from './turn/evolve';
 export type { CannotDo, InQuestion, TurnFacts, TurnNote } from './turn/facts';
 export { formatEntryFinding, sourceWords, stepRemarks } from './turn/finding-words';

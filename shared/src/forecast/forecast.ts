@@ -231,7 +231,7 @@ function criticalChain({ prepared }: Passes, from: number): string[] {
 }
 
 function stepForecasts(passes: Passes, leavesAt: Instant | null, now: Instant): StepForecast[] {
-  const { prepared, input, departureAt, arrivalAt, free, finish } = passes;
+  const { prepared, departureAt, arrivalAt, free, finish } = passes;
   const forecasts = new Array<StepForecast>(prepared.length);
   for (let place = 0; place < prepared.length; place += 1) {
     const step = prepared[place];

@@ -112,7 +112,7 @@ export function anEntry<Kind extends EntryKind>(kind: Kind, overrides: EntryOver
     source: 'by-hand' satisfies EntrySource,
     by: { personId: 'p-conductor', name: 'M. Tolland' },
   };
-  return { ...facts, ...contents[kind], ...overrides } as Entry;
+  return { ...facts, ...contents[kind], ...overrides };
 }
 
 /** A step done, so many seconds after the scheduled arrival of `aTurn()`. */

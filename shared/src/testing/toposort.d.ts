@@ -5,5 +5,5 @@ declare module 'toposort' {
     array(nodes: readonly string[], edges: readonly [string, string][]): string[];
   }
   const toposort: Toposort;
-  export default toposort;
+  export = toposort;
 }

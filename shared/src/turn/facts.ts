@@ -4,7 +4,7 @@ import type { Account } from './account';
 import type { BlueSignal } from './blue-signals';
 import type { CrewOnTurn, ReliefFact } from './crew';
 import type { Entry } from './entry';
-import type { EntryFinding } from './entry-findings';
+import type { EntryFinding } from './entry-finding';
 import type { Handbrakes } from './handbrakes';
 import type { PlannedTurn } from './turn';
 

@@ -4,7 +4,7 @@ import { arrivalEvent, departureEvent } from '../plan/step-network';
 import type { PlanStep } from '../plan/step-plan';
 import type { Account } from './account';
 import type { EntrySource } from './entry';
-import type { EntryFinding } from './entry-findings';
+import type { EntryFinding } from './entry-finding';
 import type { TurnFacts } from './facts';
 
 /** Writes an instant as a time of day with seconds, in the terminal's zone. */
