@@ -66,6 +66,8 @@ export interface DemoLine {
   /** Minutes between trains in the rush and outside it. */
   rushHeadwayMinutes: number;
   headwayMinutes: number;
+  /** Minutes between the few trains after midnight. */
+  nightHeadwayMinutes: number;
 }
 
 export const demoLines: readonly DemoLine[] = [
@@ -79,6 +81,7 @@ export const demoLines: readonly DemoLine[] = [
     firstTrains: { fromQuay: 0, fromOuter: 28 },
     rushHeadwayMinutes: 15,
     headwayMinutes: 30,
+    nightHeadwayMinutes: 60,
   },
   {
     routeId: 'head-line',
@@ -90,5 +93,6 @@ export const demoLines: readonly DemoLine[] = [
     firstTrains: { fromQuay: 7, fromOuter: 17 },
     rushHeadwayMinutes: 20,
     headwayMinutes: 40,
+    nightHeadwayMinutes: 60,
   },
 ];

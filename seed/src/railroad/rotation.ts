@@ -19,7 +19,9 @@ export type DayPattern = 'weekday' | 'weekend';
 
 const quay = 'ostrel-quay';
 const firstMinute = 5 * 60;
-const lastMinute = 24 * 60;
+/** Trains run through the night, fewer of them: whoever looks in at three in the morning finds some. */
+const midnightMinute = 24 * 60;
+const lastMinute = 28 * 60 + 30;
 /** Shortest scheduled layover when sets are assigned: the default plan's 520 s and about 2½ minutes of air. */
 const shortestLayoverMinutes = 11;
 /** The one layover of the demo that is too short on purpose, so that planners have something to find. */
@@ -34,7 +36,8 @@ function departures(line: DemoLine, pattern: DayPattern, offsetMinutes: number):
   while (minute <= lastMinute) {
     minutes.push(minute);
     const rush = pattern === 'weekday' && inRush(minute);
-    minute += rush ? line.rushHeadwayMinutes : line.headwayMinutes;
+    const night = minute >= midnightMinute;
+    minute += night ? line.nightHeadwayMinutes : rush ? line.rushHeadwayMinutes : line.headwayMinutes;
   }
   return minutes;
 }

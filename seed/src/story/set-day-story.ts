@@ -5,12 +5,12 @@ import { demoDay, hourAt, isRush, minutes, type DemoDay } from './demo-day';
 import { playSteps } from './step-story';
 
 /** Running time that a late train wins back on a trip. Our choice for the demo. */
-const recoverySeconds = 100;
-const incidentChance = { usual: 0.012, badWeek: 0.06 };
+const recoverySeconds = 80;
+const incidentChance = { usual: 0.035, badWeek: 0.12 };
 
 /** Seconds late of an arrival: what the set carried in, what the line added, and now and then an incident. */
 function arrivalDelaySeconds(carriedSeconds: number, hour: number, day: DemoDay, random: Random): number {
-  const line = 15 + 45 * random.normal() + (isRush(hour) ? 35 : 0);
+  const line = 20 + 60 * random.normal() + (isRush(hour) ? 60 : 0);
   const incident = random.next() < (day.badWeek ? incidentChance.badWeek : incidentChance.usual);
   const extra = incident ? 240 + 480 * random.next() : 0;
   return Math.max(

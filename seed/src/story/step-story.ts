@@ -1,7 +1,7 @@
 import { addSeconds, type EntrySource, type Instant, type PlanStep, type Reading } from '@stubpost/shared';
 import type { Random } from '../railroad/random';
 import type { Act, StoryTurn, Teller } from './act';
-import type { DemoDay } from './demo-day';
+import { isRush, type DemoDay } from './demo-day';
 
 /** What the play of one turn's steps needs to know. */
 export interface StepScene {
@@ -20,6 +20,8 @@ export interface StepScene {
 const tellingChances = { byRadio: 0.09, later: 0.015, notAtAll: 0.002, runningTestForgotten: 0.02 };
 const coldMorningEndsAtHour = 9;
 const coldAirFactor = 1.7;
+/** Crowded platforms slow everything down. */
+const rushFactor = 1.06;
 /** Handbrakes that the demo's crews set on a standing train; an example, not a rule. */
 const handbrakesSet = 2;
 
@@ -61,7 +63,9 @@ function tellingOf(step: PlanStep, scene: StepScene): Telling | null {
 }
 
 function durationOf(step: PlanStep, scene: StepScene): number {
-  const drawn = scene.random.threePoint(step.shortSeconds, step.typicalSeconds, step.longSeconds);
+  const drawn =
+    scene.random.threePoint(step.shortSeconds, step.typicalSeconds, step.longSeconds) *
+    (isRush(scene.hour) ? rushFactor : 1);
   const cold = scene.day.coldMorning && scene.hour < coldMorningEndsAtHour && step.kind === 'air';
   return cold ? drawn * coldAirFactor : drawn;
 }
