@@ -1,6 +1,23 @@
+import { useNavigate } from 'react-router-dom';
 import { PageHeader } from '../../components/page-header';
+import { EmptyState, ErrorState, LoadingRows } from '../../components/page-states';
+import { AlertsView } from '../../features/alerts/components/alerts-view';
+import { useTerminalChoice } from '../../lib/terminal-choice';
 
-/** Heading alone, until the parts of the page stand. */
+/** Alerts of the chosen terminal. */
 export function AlertsPage() {
-  return <PageHeader title="Alerts" />;
+  const { terminal, isPending, error } = useTerminalChoice();
+  const navigate = useNavigate();
+  if (error !== null) return <ErrorState error={error} />;
+  if (isPending) return <LoadingRows what="terminals" />;
+  if (terminal === null) return <EmptyState words="There is no terminal here that you may look at." />;
+  return (
+    <>
+      <PageHeader hidden title={`Alerts, ${terminal.name}`} />
+      <AlertsView
+        terminal={terminal}
+        onOpen={(turnId) => void navigate(`/turns/${turnId}?terminal=${encodeURIComponent(terminal.code)}`)}
+      />
+    </>
+  );
 }
