@@ -3,8 +3,11 @@ import { defineConfig } from 'vitest/config';
 
 process.env['TZ'] = 'UTC';
 
+const here = (path: string): string => fileURLToPath(new URL(path, import.meta.url));
+
 export default defineConfig({
-  root: fileURLToPath(new URL('.', import.meta.url)),
+  root: here('.'),
+  resolve: { alias: [{ find: /^@stubpost\/shared$/, replacement: here('../../shared/src/index.ts') }] },
   test: {
     environment: 'node',
     include: ['**/*.e2e.test.ts'],
