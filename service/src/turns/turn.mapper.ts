@@ -4,30 +4,26 @@ import {
   type LatenessSettings,
   type PlanStep,
   type StepForecast,
+  type StepState,
   type TurnFacts,
   type WireStep,
   type WireTurn,
-  assessedTurnOf,
-  forecastInputOf,
-  forecastTurn,
   formatEntryFinding,
   formatInstant,
-  healthOf,
   shortByDesignSeconds,
   stepRemarks,
-  stepStateOf,
   wireSecurementOf,
 } from '@stubpost/shared';
 import { wireAlertOf } from '../alerts/alert-record';
 import type { TurnFile } from './turn-file';
+import type { TurnMoment } from './turn-moment';
 
 const wireInstant = (instant: Instant | null): string | null => (instant === null ? null : formatInstant(instant));
 
-/** A turn as every route gives it, computed for one moment under the rules of its terminal. */
-export function wireTurnOf(file: TurnFile, rules: LatenessSettings, now: Instant): WireTurn {
+/** A turn as every route gives it, at one moment; times in words follow the rules of its terminal. */
+export function wireTurnOf(file: TurnFile, moment: TurnMoment, rules: LatenessSettings): WireTurn {
   const { record, facts } = file;
-  const forecast = forecastTurn(forecastInputOf(facts), now);
-  const assessed = assessedTurnOf(facts, forecast, now);
+  const { now, forecast, assessed } = moment;
   const clock = rules.formatExactTime;
   return {
     id: record.id,
@@ -37,7 +33,7 @@ export function wireTurnOf(file: TurnFile, rules: LatenessSettings, now: Instant
     zone: record.zone,
     serviceDate: record.serviceDate,
     state: assessed.state,
-    health: healthOf(assessed, rules, now),
+    health: moment.health,
     extra: record.origin === 'extra',
     reverses: record.reverses,
     track: facts.track,
@@ -48,7 +44,9 @@ export function wireTurnOf(file: TurnFile, rules: LatenessSettings, now: Instant
     planId: record.planId,
     inbound: inboundOf(file),
     outbound: outboundOf(file, forecast),
-    steps: facts.steps.map((step, index) => wireStepOf({ facts, step, times: forecast.steps[index], clock, now })),
+    steps: facts.steps.map((step, index) =>
+      wireStepOf({ facts, step, times: forecast.steps[index], state: moment.stepStates[index], clock }),
+    ),
     forecast: {
       readyAt: wireInstant(forecast.readyAt),
       readyAtNineInTen: null,
@@ -96,12 +94,12 @@ interface StepQuestion {
   facts: TurnFacts;
   step: PlanStep;
   times: StepForecast | undefined;
+  state: StepState | undefined;
   clock: (instant: Instant) => string;
-  now: Instant;
 }
 
-function wireStepOf({ facts, step, times, clock, now }: StepQuestion): WireStep {
-  if (times === undefined) throw new Error(`step ${step.key} has no forecast`);
+function wireStepOf({ facts, step, times, state, clock }: StepQuestion): WireStep {
+  if (times === undefined || state === undefined) throw new Error(`step ${step.key} has no forecast`);
   const account = facts.done[step.key];
   return {
     key: step.key,
@@ -114,7 +112,7 @@ function wireStepOf({ facts, step, times, clock, now }: StepQuestion): WireStep 
     dueAt: formatInstant(times.dueAt),
     latestFinishAt: formatInstant(times.latestFinishAt),
     forecastFinishAt: formatInstant(times.finishAt),
-    state: stepStateOf(facts, step, times, now),
+    state,
     doneAt: wireInstant(account?.at ?? null),
     source: account?.source ?? null,
     by: account?.by?.name ?? null,
