@@ -56,7 +56,7 @@ export class HistoryFiller {
       .get(Reader)
       .query<{ entry_count: number }>('SELECT entry_count FROM turn WHERE id = ?', [story.turnId]);
     if (known === undefined || known.entry_count > 0) return;
-    await this.app.get(TurnsService).recordEntries(
+    await this.app.get(TurnsService).recordPastEntries(
       story.acts.map((act) => ({
         turnId: story.turnId,
         request: actRequest(story.turnId, act, personIdIn(this.cast)),

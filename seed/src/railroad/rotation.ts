@@ -61,7 +61,13 @@ function tripsOf(line: DemoLine, pattern: DayPattern): Unassigned[] {
   ];
 }
 
-/** First in, first out at each station; a departure that finds no set standing takes a new one from the yard. */
+/** A set that would stand longer than this goes to the yard instead, and comes back as a first train out. */
+const longestStandMinutes = 75;
+
+/**
+ * The set that came in last and has had time to turn goes out first; those left over go to the yard after a while. A
+ * departure that finds no set standing takes one from the yard.
+ */
 function assignBlocks(
   trips: readonly Unassigned[],
   pattern: DayPattern,
@@ -74,7 +80,11 @@ function assignBlocks(
   );
   return byDeparture.map((trip) => {
     const here = standing.get(trip.fromStation) ?? [];
-    const position = here.findIndex((set) => set.sinceMinute + shortestLayoverMinutes <= trip.departsMinute);
+    const position = here.findLastIndex(
+      (set) =>
+        set.sinceMinute + shortestLayoverMinutes <= trip.departsMinute &&
+        set.sinceMinute + longestStandMinutes >= trip.departsMinute,
+    );
     const taken = position < 0 ? undefined : here.splice(position, 1)[0];
     const block = taken?.block ?? `${prefix}${String((blocks += 1)).padStart(2, '0')}`;
     const there = standing.get(trip.toStation) ?? [];
