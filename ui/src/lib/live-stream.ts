@@ -90,15 +90,24 @@ export class LiveStream {
     if (this.lastEventId !== '') question.set('lastEventId', this.lastEventId);
     const source = this.open(`/api/live?${question.toString()}`);
     this.source = source;
-    source.addEventListener('beat', (event) => this.onBeat(parse(event.data as string)));
+    source.addEventListener('beat', (event) => this.onBeat(event));
     source.addEventListener('turn', (event) => this.onObject('turn', event));
     source.addEventListener('alert', (event) => this.onObject('alert', event));
-    source.addEventListener('reload', () => this.heard({ kind: 'reload' }));
+    source.addEventListener('reload', (event) => {
+      this.noteId(event);
+      this.heard({ kind: 'reload' });
+    });
     source.addEventListener('open', () => this.heard(null));
   }
 
-  private onBeat(data: unknown): void {
-    const now = (data as { now?: unknown } | null)?.now;
+  /** Every event says how far the stream has come, also a beat. */
+  private noteId(event: MessageEvent): void {
+    if (event.lastEventId !== '') this.lastEventId = event.lastEventId;
+  }
+
+  private onBeat(event: MessageEvent): void {
+    this.noteId(event);
+    const now = (parse(event.data as string) as { now?: unknown } | null)?.now;
     const server = typeof now === 'string' ? Date.parse(now) : Number.NaN;
     // The words were on their way for an unknown but short time.
     if (!Number.isNaN(server)) {
@@ -110,7 +119,7 @@ export class LiveStream {
 
   private onObject(kind: 'turn' | 'alert', event: MessageEvent): void {
     const data = parse(event.data as string);
-    if (event.lastEventId !== '') this.lastEventId = event.lastEventId;
+    this.noteId(event);
     if (kind === 'turn') {
       const turn = objectIn<WireTurn>(data, 'turn');
       this.heard(turn === null ? null : { kind, turn });

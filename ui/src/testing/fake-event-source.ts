@@ -20,8 +20,8 @@ export class FakeEventSource extends EventTarget {
     this.isClosed = true;
   }
 
-  emit(name: 'open' | 'turn' | 'alert' | 'beat' | 'reload', data: unknown = {}): void {
+  emit(name: 'open' | 'turn' | 'alert' | 'beat' | 'reload', data: unknown = {}, lastEventId = ''): void {
     if (this.isClosed) throw new Error('The stream was closed');
-    this.dispatchEvent(new MessageEvent(name, { data: JSON.stringify(data) }));
+    this.dispatchEvent(new MessageEvent(name, { data: JSON.stringify(data), lastEventId }));
   }
 }

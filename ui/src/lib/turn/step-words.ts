@@ -17,7 +17,8 @@ export function stepWords(step: StepNow, zone: string): string {
   const name = lowerFirst(step.label);
   const due = step.dueAt === null ? '' : `, due ${formatTime(step.dueAt, zone)}`;
   if (step.doneAt !== null) {
-    const relayed = step.source === 'by-radio' ? ', by radio' : step.source === 'entered-later' ? ', entered later' : '';
+    const relayed =
+      step.source === 'by-radio' ? ', by radio' : step.source === 'entered-later' ? ', entered later' : '';
     const doubt = step.state === 'in-question' ? ', in question' : '';
     return `${name} recorded ${formatTime(step.doneAt, zone)}${relayed}${doubt}`;
   }

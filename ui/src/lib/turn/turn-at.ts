@@ -48,7 +48,12 @@ export function turnAt(wire: WireTurn, { plan, settings }: TurnContext, now: Ins
     ...turn,
     state: stateAt(turn, now),
     health: healthOf(assessed, settings, now),
-    steps: liveSteps(turn, stepsFor(plan.steps, wire), forecast, stepStatesOfWire(wire, plan.steps, forecast, now)),
+    steps: liveSteps(
+      turn,
+      stepsFor(plan.steps, wire),
+      forecast,
+      stepStatesOfWire(wire, plan.steps, forecast, now),
+    ),
     readyAt: forecast.readyAt,
     expectedDepartureAt: turn.departedAt === null ? forecast.expectedDepartureAt : turn.expectedDepartureAt,
     slackSeconds: turn.annulled === null ? forecast.slackSeconds : null,
@@ -87,5 +92,7 @@ function plannedDue(turn: TurnNow, planned: PlanStep): Instant | null {
 function stateAt(turn: TurnNow, now: Instant): TurnState {
   if (turn.state !== 'scheduled' || turn.kind === 'first-out') return turn.state;
   const arrives = Math.max(turn.scheduledArrivalAt ?? -Infinity, turn.expectedArrivalAt ?? -Infinity);
-  return arrives !== -Infinity && now >= addSeconds(arrives, -inboundHorizonSeconds) ? 'inbound' : 'scheduled';
+  return arrives !== -Infinity && now >= addSeconds(arrives, -inboundHorizonSeconds)
+    ? 'inbound'
+    : 'scheduled';
 }

@@ -139,8 +139,7 @@ export function readTurn(turn: WireTurn): TurnNow {
     alerts: turn.alerts,
     blueSignal:
       turn.blueSignal === null ? null : { since: instant(turn.blueSignal.since), by: turn.blueSignal.by },
-    annulled:
-      turn.annulled === null ? null : { at: instant(turn.annulled.at), reason: turn.annulled.reason },
+    annulled: turn.annulled === null ? null : { at: instant(turn.annulled.at), reason: turn.annulled.reason },
     shortByDesign: turn.shortByDesign,
     lastHeardAt: instant(turn.lastHeardAt),
     findings: turn.findings,

@@ -7,7 +7,10 @@ import type { TurnNow } from './turn-now';
 import { planQuery, settingsQuery, turnQuery } from './turn-queries';
 
 /** What a terminal counts as late and silent; the shipped values until it has answered. */
-export function useLatenessSettings(terminal: string | undefined, zone: string | undefined): LatenessSettings {
+export function useLatenessSettings(
+  terminal: string | undefined,
+  zone: string | undefined,
+): LatenessSettings {
   const options = settingsQuery(terminal ?? '');
   const { data } = useQuery({ ...options, queryFn: terminal === undefined ? skipToken : options.queryFn });
   const thresholds = data?.thresholds ?? shippedThresholds;
