@@ -77,11 +77,24 @@ export class TurnsService {
   /** Records entries one after the other in one transaction: all are kept, or none. */
   recordEntries(commands: readonly RecordCommand[]): Promise<Recorded[]> {
     return this.unitOfWork.run(async (transaction) => {
-      const recorded: Recorded[] = [];
-      for (const command of commands) recorded.push(await this.recorder.record(transaction, command));
+      const recorded = await this.recordAll(transaction, commands);
       await this.changes.write(transaction);
       return recorded;
     });
+  }
+
+  /** The same for days gone by, when a whole history is told: nobody who watches the present hears of each turn. */
+  recordPastEntries(commands: readonly RecordCommand[]): Promise<Recorded[]> {
+    return this.unitOfWork.run((transaction) => this.recordAll(transaction, commands));
+  }
+
+  private async recordAll(
+    transaction: Transaction,
+    commands: readonly RecordCommand[],
+  ): Promise<Recorded[]> {
+    const recorded: Recorded[] = [];
+    for (const command of commands) recorded.push(await this.recorder.record(transaction, command));
+    return recorded;
   }
 
   /** Enters an extra turn. An unknown track is added to the terminal; two turns on one track are a clash to show. */
