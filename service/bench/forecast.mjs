@@ -2,7 +2,7 @@ import { createRequire } from 'node:module';
 import { goal, interleave, note } from './measure.mjs';
 
 const require = createRequire(import.meta.url);
-const { defaultStepPlanSteps, forecastTurn, stepsFor } = require('@stubpost/shared');
+const { defaultStepPlanSteps, outlookOf, stepsFor } = require('@stubpost/shared');
 const { DirectedGraph } = require('graphology');
 const { topologicalSort } = require('graphology-dag');
 const toposort = require('toposort');
@@ -84,7 +84,7 @@ function withGraphLibrary(now) {
 
 function withShared(now) {
   let sum = 0;
-  for (const input of inputs) sum += (forecastTurn(input, now).readyAt ?? 0) % 1_000_003;
+  for (const input of inputs) sum += (outlookOf(input, now).readyAt ?? 0) % 1_000_003;
   return sum;
 }
 

@@ -118,9 +118,10 @@ export { HEALTHS, STEP_STATES, TURN_KINDS, TURN_STATES } from './turn/turn';
 export type { Health, PlannedTurn, StepState, TurnKind, TurnState } from './turn/turn';
 
 // forecast
-export { forecastTurn } from './forecast/forecast';
-export type { Forecast, ForecastInput, StepForecast } from './forecast/forecast';
+export { forecastTurn, outlookOf } from './forecast/forecast';
+export type { Forecast, Outlook, StepForecast } from './forecast/forecast';
 export { forecastInputOf } from './forecast/forecast-input';
+export type { ForecastInput } from './forecast/forecast-input';
 export { scheduleNetwork } from './forecast/network';
 export type { Activity, ActivityTimes, NetworkRefusal, NetworkSchedule } from './forecast/network';
 

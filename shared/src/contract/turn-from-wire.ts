@@ -1,4 +1,5 @@
-import { forecastTurn, type Forecast, type ForecastInput } from '../forecast/forecast';
+import { forecastTurn, type Forecast } from '../forecast/forecast';
+import type { ForecastInput } from '../forecast/forecast-input';
 import type { AssessedStep, AssessedTurn } from '../lateness/assessed-turn';
 import { formatInstant, parseInstant, type Instant } from '../lib/instant';
 import type { PlanStep } from '../plan/step-plan';

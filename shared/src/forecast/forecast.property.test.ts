@@ -5,7 +5,8 @@ import { defaultStepPlanSteps } from '../plan/default-step-plan';
 import { orderSteps } from '../plan/step-network';
 import type { PlanStep } from '../plan/step-plan';
 import { aStep } from '../testing/builders';
-import { forecastTurn, type ForecastInput } from './forecast';
+import { forecastTurn } from './forecast';
+import type { ForecastInput } from './forecast-input';
 import { scheduleNetwork } from './network';
 
 const arrival: Instant = Date.UTC(2026, 2, 3, 22, 0, 0);

@@ -3,7 +3,8 @@ import { addSeconds, type Instant } from '../lib/instant';
 import { defaultStepPlanSteps } from '../plan/default-step-plan';
 import { stepsFor } from '../plan/steps-for-turn';
 import { aStep } from '../testing/builders';
-import { forecastTurn, type Forecast, type ForecastInput, type StepForecast } from './forecast';
+import { forecastTurn, outlookOf, type Forecast, type StepForecast } from './forecast';
+import type { ForecastInput } from './forecast-input';
 
 const arrival: Instant = Date.UTC(2026, 2, 3, 22, 0, 0);
 const departure = addSeconds(arrival, 1200);

@@ -18,14 +18,12 @@ export interface PreparedStep {
   notBefore: number;
   /** Places of its predecessors in the prepared order. */
   before: readonly number[];
-  /** Places in the prepared order of the steps that wait for it. */
-  next: readonly number[];
   /** Whether it waits for the arrival, directly or because it waits for nothing else. */
   waitsForArrival: boolean;
-  /** Whether it waits for nothing at all and has no not-before time. */
-  isUnbound: boolean;
   /** Latest finish counted from the departure; null where no step that holds the departure depends on it. */
   latestFinish: number | null;
+  /** Its key and those of the successors that leave it the least time, up to the departure. */
+  chain: readonly string[];
 }
 
 const known = new WeakMap<readonly PlanStep[], readonly PreparedStep[]>();
@@ -51,9 +49,7 @@ function prepare(steps: readonly PlanStep[]): PreparedStep[] {
   const latest = latestFinishes(ordered, afterDeparture);
   return ordered.map((step): PreparedStep => {
     const before = step.after.flatMap((key) => places.get(key) ?? []);
-    const next = ordered.flatMap((other, index) => (other.after.includes(step.key) ? [index] : []));
     const waitsForEvent = step.after.includes(arrivalEvent) || step.after.includes(departureEvent);
-    const isUnbound = before.length === 0 && !waitsForEvent && step.notBeforeSeconds === null;
     return {
       key: step.key,
       place: steps.indexOf(step),
@@ -65,10 +61,9 @@ function prepare(steps: readonly PlanStep[]): PreparedStep[] {
       long: step.longSeconds * millisecondsInSecond,
       notBefore: step.notBeforeSeconds === null ? -Infinity : step.notBeforeSeconds * millisecondsInSecond,
       before,
-      next,
       waitsForArrival: step.after.includes(arrivalEvent) || (before.length === 0 && !waitsForEvent),
-      isUnbound,
       latestFinish: latest.get(step.key) ?? null,
+      chain: chainFrom(step, ordered, latest),
     };
   });
 }
@@ -94,4 +89,24 @@ function latestFinishes(
   const schedule = scheduleNetwork(activities, 0);
   if (!schedule.ok) throw new Error(`No schedule: ${schedule.error.code}`);
   return new Map(schedule.value.activities.map(({ id, latestFinish }) => [id, latestFinish]));
+}
+
+/** From a step along the first successor whose latest start is the latest finish before it. */
+function chainFrom(
+  from: PlanStep,
+  ordered: readonly PlanStep[],
+  latest: ReadonlyMap<string, number>,
+): string[] {
+  const chain: string[] = [];
+  for (let step: PlanStep | undefined = from; step !== undefined;) {
+    const { key } = step;
+    chain.push(key);
+    const finish = latest.get(key);
+    step = ordered.find((next) => {
+      const nextFinish = latest.get(next.key);
+      if (nextFinish === undefined || !next.after.includes(key)) return false;
+      return nextFinish - next.typicalSeconds * millisecondsInSecond === finish;
+    });
+  }
+  return chain;
 }
