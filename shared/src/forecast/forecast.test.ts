@@ -370,3 +370,22 @@ describe('turns with one end', () => {
     expect(forecast).toMatchObject({ readyAt: addSeconds(departure, 60), slackSeconds: -60 });
   });
 });
+
+describe('the outlook', () => {
+  it('is the forecast without its single steps', () => {
+    const { steps, ...rest } = forecastTurn(anInput({ doneAt: endsChanged }), afterArrival(400));
+    expect(steps).toHaveLength(8);
+    expect(outlookOf(anInput({ doneAt: endsChanged }), afterArrival(400))).toEqual(rest);
+  });
+
+  it('of one turn leaves nothing behind in that of another, however many steps they have', () => {
+    const chain = Array.from({ length: 40 }, (_, index) =>
+      aStep({ key: `step-${index}`, after: index === 0 ? ['arrival'] : [`step-${index - 1}`] }),
+    );
+    const short = forecastTurn(anInput(), arrival);
+    const long = forecastTurn(anInput({ steps: chain }), arrival);
+    expect(long.readyAt).toBe(afterArrival(2400));
+    expect(long.criticalSteps).toHaveLength(40);
+    expect(forecastTurn(anInput(), arrival)).toEqual(short);
+  });
+});
