@@ -4,13 +4,13 @@ import {
   type AlertEvent,
   type CloseAlertRequest,
   type Instant,
+  type PersonAccess,
   type SetAsideRequest,
   alertAfter,
   longestSetAsideMinutes,
 } from '@stubpost/shared';
 import { Access } from '../common/access';
 import { Refusal } from '../common/refusal';
-import type { CurrentPersonFacts } from '../common/signed-in';
 import { ChangeLog } from '../database/change-log';
 import { type Transaction, UnitOfWork } from '../database/unit-of-work';
 import { TurnRepository } from '../turns/turn.repository';
@@ -23,7 +23,7 @@ const neverAside: readonly AlertCause[] = ['unsecured', 'no-required-record'];
 /** Who does something about which alert, and when. */
 export interface AlertAct {
   alertId: string;
-  person: CurrentPersonFacts;
+  person: PersonAccess & { name: string };
   now: Instant;
 }
 
@@ -109,6 +109,11 @@ export class AlertDesk {
     await this.changes.append(transaction, { kind: 'alert', objectId: id, version, terminalCode });
     if (turnId === null) return;
     const turnVersion = await this.turns.touch(transaction, turnId);
-    await this.changes.append(transaction, { kind: 'turn', objectId: turnId, version: turnVersion, terminalCode });
+    await this.changes.append(transaction, {
+      kind: 'turn',
+      objectId: turnId,
+      version: turnVersion,
+      terminalCode,
+    });
   }
 }

@@ -63,7 +63,8 @@ export class AlertKeeper {
     turn: { turnId: string; alerts: readonly AlertRecord[] },
     now: Instant,
   ): Promise<void> {
-    for (const alert of turn.alerts) await this.keep(transaction, { ...after(alert, 'clear'), clearedAt: now });
+    for (const alert of turn.alerts)
+      await this.keep(transaction, { ...after(alert, 'clear'), clearedAt: now });
     for (const cause of (await this.watches.findOf(transaction, turn.turnId)).keys()) {
       await this.watches.forget(transaction, turn.turnId, cause);
     }
@@ -101,7 +102,8 @@ export class AlertKeeper {
     alert: AlertRecord | null,
     now: Instant,
   ): Promise<AlertRecord | null> {
-    if (alert?.state !== 'set-aside' || alert.setAsideUntil === null || now < alert.setAsideUntil) return alert;
+    if (alert?.state !== 'set-aside' || alert.setAsideUntil === null || now < alert.setAsideUntil)
+      return alert;
     const back = { setAsideUntil: null, setAsideReason: null, setAsideBy: null };
     return this.keep(transaction, { ...after(alert, 'return'), ...back });
   }

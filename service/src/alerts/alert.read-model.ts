@@ -23,7 +23,10 @@ export class AlertReadModel {
     ];
     const where = conditions.length === 0 ? '' : `WHERE ${conditions.join(' AND ')}`;
     const parameters = [...(everywhere ? [] : terminals), ...states];
-    const rows = await this.reader.query<RawAlert>(`SELECT * FROM alert ${where} ORDER BY raised_at, id`, parameters);
+    const rows = await this.reader.query<RawAlert>(
+      `SELECT * FROM alert ${where} ORDER BY raised_at, id`,
+      parameters,
+    );
     return rows.map(alertRecordOf).sort(mostUrgentFirst).map(wireAlertOf);
   }
 

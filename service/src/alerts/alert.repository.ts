@@ -1,7 +1,13 @@
 import { Injectable } from '@nestjs/common';
 import type { AlertCause } from '@stubpost/shared';
 import type { Transaction } from '../database/unit-of-work';
-import { type AlertRecord, type RawAlert, alertColumnValue, alertColumns, alertRecordOf } from './alert-record';
+import {
+  type AlertRecord,
+  type RawAlert,
+  alertColumnValue,
+  alertColumns,
+  alertRecordOf,
+} from './alert-record';
 
 const insertSql = `INSERT INTO alert (${alertColumns.map(([, column]) => column).join(', ')})
   VALUES (${alertColumns.map(() => '?').join(', ')})`;
@@ -50,7 +56,11 @@ export class AlertRepository {
   }
 
   /** The newest alert of a cause on a subject that does not stand any more. */
-  async findLast(transaction: Transaction, subjectId: string, cause: AlertCause): Promise<AlertRecord | null> {
+  async findLast(
+    transaction: Transaction,
+    subjectId: string,
+    cause: AlertCause,
+  ): Promise<AlertRecord | null> {
     const [raw] = await transaction.query<RawAlert[]>(
       `SELECT * FROM alert WHERE subject_id = ? AND cause = ? AND state IN ('cleared', 'closed')
        ORDER BY raised_at DESC, id LIMIT 1`,

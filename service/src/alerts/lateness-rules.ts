@@ -1,5 +1,10 @@
 import { Injectable, type OnModuleDestroy, type OnModuleInit } from '@nestjs/common';
-import { type AlertHoldTimes, type LatenessSettings, holdTimesOf, latenessSettingsOf } from '@stubpost/shared';
+import {
+  type AlertHoldTimes,
+  type LatenessSettings,
+  holdTimesOf,
+  latenessSettingsOf,
+} from '@stubpost/shared';
 import type { Subscription } from 'rxjs';
 import { ChangeFeed } from '../database/change-log';
 import { TerminalsReadModel } from '../terminals/terminals.read-model';

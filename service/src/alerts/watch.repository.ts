@@ -26,7 +26,9 @@ export class WatchRepository {
   /** Every memory there is; the sweep looks at all of them at once. */
   async findAll(): Promise<Map<string, Map<AlertCause, AlertMemory>>> {
     const bySubject = new Map<string, Map<AlertCause, AlertMemory>>();
-    for (const row of await this.reader.query<RawWatch>('SELECT subject_id, cause, memory FROM alert_watch')) {
+    for (const row of await this.reader.query<RawWatch>(
+      'SELECT subject_id, cause, memory FROM alert_watch',
+    )) {
       const memories = bySubject.get(row.subject_id) ?? new Map<AlertCause, AlertMemory>();
       bySubject.set(row.subject_id, memories);
       memories.set(row.cause as AlertCause, JSON.parse(row.memory) as AlertMemory);
@@ -48,6 +50,9 @@ export class WatchRepository {
   }
 
   async forget(transaction: Transaction, subjectId: string, cause: AlertCause): Promise<void> {
-    await transaction.execute('DELETE FROM alert_watch WHERE subject_id = ? AND cause = ?', [subjectId, cause]);
+    await transaction.execute('DELETE FROM alert_watch WHERE subject_id = ? AND cause = ?', [
+      subjectId,
+      cause,
+    ]);
   }
 }

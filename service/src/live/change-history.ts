@@ -23,7 +23,9 @@ export class ChangeHistory {
 
   /** Number of the newest change, 0 when there is none. */
   async newest(): Promise<number> {
-    const [row] = await this.reader.query<{ number: number | null }>('SELECT max(number) AS number FROM change');
+    const [row] = await this.reader.query<{ number: number | null }>(
+      'SELECT max(number) AS number FROM change',
+    );
     return row?.number ?? 0;
   }
 

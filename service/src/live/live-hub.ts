@@ -130,7 +130,8 @@ export class LiveHub implements OnModuleInit, OnModuleDestroy {
       const person = await this.sessions.resolve(sessionId);
       this.closeWhere(
         (facts) =>
-          facts.sessionId === sessionId && (person === null || !may(person, 'board.read', facts.terminalCode)),
+          facts.sessionId === sessionId &&
+          (person === null || !may(person, 'board.read', facts.terminalCode)),
       );
     }
   }

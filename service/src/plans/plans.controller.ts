@@ -45,7 +45,12 @@ export class PlansController {
     @CurrentPerson() person: CurrentPersonFacts,
   ): Promise<WireStepPlan> {
     await this.terminals.require(terminalCode);
-    const plan = await this.plans.create({ terminalCode, request, authorName: person.name, now: this.clock.now() });
+    const plan = await this.plans.create({
+      terminalCode,
+      request,
+      authorName: person.name,
+      now: this.clock.now(),
+    });
     return wirePlanOf(plan);
   }
 }

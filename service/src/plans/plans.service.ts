@@ -54,7 +54,12 @@ export class PlansService {
   }
 
   /** The version in force at a terminal on a service date. A terminal without a plan gets the one we ship. */
-  async inForce(transaction: Transaction, terminalCode: string, serviceDate: CalendarDate, now: Instant): Promise<StoredPlan> {
+  async inForce(
+    transaction: Transaction,
+    terminalCode: string,
+    serviceDate: CalendarDate,
+    now: Instant,
+  ): Promise<StoredPlan> {
     const found = await this.repository.findInForce(transaction, terminalCode, serviceDate);
     if (found !== null) return this.known.get(found.id) ?? found;
     const version = 1 + (await this.repository.lastVersion(transaction, terminalCode, defaultStepPlanKey));
@@ -91,7 +96,11 @@ export class PlansService {
     const steps: PlanStep[] = request.steps;
     const problems = checkPlan(steps);
     if (problems.length > 0) {
-      throw new Refusal({ code: 'plan.invalid', message: problems[0]?.message ?? 'the plan cannot be used', facts: { problems } });
+      throw new Refusal({
+        code: 'plan.invalid',
+        message: problems[0]?.message ?? 'the plan cannot be used',
+        facts: { problems },
+      });
     }
     return this.unitOfWork.run(async (transaction) => {
       await this.inForce(transaction, terminalCode, sinceEver, now);

@@ -1,6 +1,12 @@
 import { createHash } from 'node:crypto';
 import { Injectable } from '@nestjs/common';
-import { type CalendarDate, type Instant, type SubjectKind, noPreviousHash, sealEntry } from '@stubpost/shared';
+import {
+  type CalendarDate,
+  type Instant,
+  type SubjectKind,
+  noPreviousHash,
+  sealEntry,
+} from '@stubpost/shared';
 import { Counters } from '../database/counters';
 import { Reader } from '../database/reader';
 import type { Transaction } from '../database/unit-of-work';

@@ -1,5 +1,11 @@
 import { Injectable } from '@nestjs/common';
-import { type PutSetRequest, type UnitKind, type WireSet, type WireUnit, formatInstant } from '@stubpost/shared';
+import {
+  type PutSetRequest,
+  type UnitKind,
+  type WireSet,
+  type WireUnit,
+  formatInstant,
+} from '@stubpost/shared';
 import { Reader } from '../database/reader';
 import type { Transaction } from '../database/unit-of-work';
 
@@ -66,7 +72,9 @@ export class SetRepository {
   async findByLabel(transaction: Transaction, label: string): Promise<WireSet | null> {
     const [set] = await transaction.query<RawSet[]>('SELECT * FROM equipment_set WHERE label = ?', [label]);
     if (set === undefined) return null;
-    const units = await transaction.query<RawUnit[]>(`${unitsSql} WHERE su.set_id = ? ORDER BY su.position`, [set.id]);
+    const units = await transaction.query<RawUnit[]>(`${unitsSql} WHERE su.set_id = ? ORDER BY su.position`, [
+      set.id,
+    ]);
     return setOf(set, units);
   }
 
@@ -84,7 +92,10 @@ export class SetRepository {
     return bySet;
   }
 
-  async insert(transaction: Transaction, set: { id: string; label: string; createdAt: number }): Promise<void> {
+  async insert(
+    transaction: Transaction,
+    set: { id: string; label: string; createdAt: number },
+  ): Promise<void> {
     await transaction.execute(
       `INSERT INTO equipment_set (id, version, label, leading_unit, off_air_since, created_at)
        VALUES (?, 0, ?, NULL, NULL, ?)`,
@@ -117,7 +128,15 @@ export class SetRepository {
         `INSERT INTO unit (id, number, kind, length_feet, tons, handbrake_pounds, created_at) VALUES (?, ?, ?, ?, ?, ?, ?)
          ON CONFLICT (number) DO UPDATE SET kind = excluded.kind, length_feet = excluded.length_feet,
          tons = excluded.tons, handbrake_pounds = excluded.handbrake_pounds RETURNING id`,
-        [id, unit.number, unit.kind, unit.lengthFeet ?? null, unit.tons ?? null, unit.handbrakePounds ?? null, now],
+        [
+          id,
+          unit.number,
+          unit.kind,
+          unit.lengthFeet ?? null,
+          unit.tons ?? null,
+          unit.handbrakePounds ?? null,
+          now,
+        ],
       );
       if (row === undefined) throw new Error(`unit ${unit.number} was not kept`);
       await transaction.execute('DELETE FROM set_unit WHERE unit_id = ?', [row.id]);

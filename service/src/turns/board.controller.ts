@@ -1,5 +1,11 @@
 import { Controller, Get, Query, Req, Res } from '@nestjs/common';
-import { type BoardQuery, type FindQuery, type FoundTurn, boardQuerySchema, findQuerySchema } from '@stubpost/shared';
+import {
+  type BoardQuery,
+  type FindQuery,
+  type FoundTurn,
+  boardQuerySchema,
+  findQuerySchema,
+} from '@stubpost/shared';
 import type { Request, Response } from 'express';
 import { Clock } from '../common/clock';
 import { Permit } from '../common/decorators';

@@ -41,7 +41,11 @@ export class CrewCarrier {
   }
 
   /** Brings the later turns of a set after a change of the crew before them; gives those that changed. */
-  async carryOn(transaction: Transaction, set: string, from: { id: string; spanFrom: Instant }): Promise<TurnRecord[]> {
+  async carryOn(
+    transaction: Transaction,
+    set: string,
+    from: { id: string; spanFrom: Instant },
+  ): Promise<TurnRecord[]> {
     const changed: TurnRecord[] = [];
     let previous: { id: string; spanFrom: Instant } = from;
     for (let count = 0; count < longestChain; count += 1) {

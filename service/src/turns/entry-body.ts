@@ -77,7 +77,10 @@ function contentOf(
       return {
         target: request.target,
         reason: request.reason,
-        ...given('correctedObservedAt', request.correctedObservedAt && inOneForm(request.correctedObservedAt)),
+        ...given(
+          'correctedObservedAt',
+          request.correctedObservedAt && inOneForm(request.correctedObservedAt),
+        ),
         ...given('reading', request.reading),
       };
     case 'cannot-do':
@@ -159,7 +162,11 @@ function contentFrom(body: EntryBody): EntryContent {
     case 'expected-arrival':
       return { kind, expectedAt: instantOf(field('expectedAt')) };
     case 'step-done':
-      return { kind, step: field('step'), ...given('reading', field<Content<'step-done'>['reading']>('reading')) };
+      return {
+        kind,
+        step: field('step'),
+        ...given('reading', field<Content<'step-done'>['reading']>('reading')),
+      };
     case 'withdrawn':
       return { kind, target: field('target'), reason: field('reason') };
     case 'corrected':

@@ -74,7 +74,11 @@ export class EntryRecorder {
     for (const id of peopleNamedIn(request)) {
       const name = id === actor.id ? actor.name : await this.people.nameOf(id);
       if (name === null) {
-        throw new Refusal({ code: 'entry.person_unknown', message: 'there is no such person', facts: { person: id } });
+        throw new Refusal({
+          code: 'entry.person_unknown',
+          message: 'there is no such person',
+          facts: { person: id },
+        });
       }
       names.set(id, name);
     }
@@ -85,7 +89,11 @@ export class EntryRecorder {
   /** The same id twice is one entry and one receipt; with another body it is somebody's mistake. */
   private again(known: LoggedEntry, body: EntryBody, file: TurnFile): Recorded {
     if (!saysTheSame(known.body as EntryBody, body)) {
-      throw new Refusal({ code: 'entry.id_taken', message: 'another entry has that id', facts: { id: known.id } });
+      throw new Refusal({
+        code: 'entry.id_taken',
+        message: 'another entry has that id',
+        facts: { id: known.id },
+      });
     }
     return { isNew: false, sequence: known.sequence, hash: known.hash, file };
   }

@@ -86,7 +86,8 @@ export class RecordingRights {
     if (!bars) return;
     throw new Refusal({
       code: 'entry.at_the_controls',
-      message: 'the engineer at the controls records nothing: the conductor does, or the desk by radio, or it is entered later',
+      message:
+        'the engineer at the controls records nothing: the conductor does, or the desk by radio, or it is entered later',
     });
   }
 

@@ -26,7 +26,8 @@ const unheardMilliseconds = 2 * millisecondsInHour;
 /** What a board question asks for at a moment. */
 export function boardRangeOf(query: BoardQuery, now: Instant): BoardRange {
   if (query.serviceDate !== undefined) return { kind: 'day', serviceDate: query.serviceDate };
-  const from = query.from === undefined ? now - boardBackMinutes * millisecondsInMinute : Date.parse(query.from);
+  const from =
+    query.from === undefined ? now - boardBackMinutes * millisecondsInMinute : Date.parse(query.from);
   const to = query.to === undefined ? now + boardAheadMinutes * millisecondsInMinute : Date.parse(query.to);
   return query.from === undefined ? { kind: 'now', from, to, now } : { kind: 'range', from, to };
 }

@@ -118,7 +118,8 @@ export class TurnBoards implements OnModuleInit, OnModuleDestroy {
       if (file !== undefined) turns.push(await this.views.jsonOf(file, now));
     }
     const before = this.snapshots.get(key);
-    const etag = before !== undefined && isSame(before.facts.turns, turns) ? before.facts.etag : this.nextTag();
+    const etag =
+      before !== undefined && isSame(before.facts.turns, turns) ? before.facts.etag : this.nextTag();
     const snapshot = new BoardSnapshot({ terminal, etag, generation, stretch, now, turns });
     this.keep(key, snapshot);
     return snapshot;

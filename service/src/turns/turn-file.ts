@@ -32,7 +32,11 @@ export function turnFileFrom(parts: TurnFileParts): TurnFile {
 }
 
 /** The facts of a turn from its row, its plan and its entries. */
-export function turnFactsFrom({ record, plan, entries }: Pick<TurnFileParts, 'record' | 'plan' | 'entries'>): TurnFacts {
+export function turnFactsFrom({
+  record,
+  plan,
+  entries,
+}: Pick<TurnFileParts, 'record' | 'plan' | 'entries'>): TurnFacts {
   const steps = stepsFor(plan.steps, { kind: record.kind, reverses: record.reverses });
   return turnFrom(plannedTurnOf(record), steps, entries, record.carriedCrew.map(carriedOver));
 }

@@ -121,7 +121,12 @@ export class TurnOpener {
 
   /** One word for all turns of a terminal: whoever looks at it loads anew. */
   private async tell(transaction: Transaction, terminalCode: string, timetableId: string): Promise<void> {
-    await this.changes.append(transaction, { kind: 'timetable', objectId: timetableId, version: 0, terminalCode });
+    await this.changes.append(transaction, {
+      kind: 'timetable',
+      objectId: timetableId,
+      version: 0,
+      terminalCode,
+    });
   }
 }
 

@@ -36,6 +36,7 @@ type Memories = Map<string, Map<AlertCause, AlertMemory>>;
 @Injectable()
 export class TurnSweep {
   private running: Promise<SweepCounts> | undefined;
+  private holds = 0;
 
   constructor(
     private readonly sweepable: SweepableTurns,
@@ -50,10 +51,25 @@ export class TurnSweep {
 
   /** One run as of a moment. While one is running, a second call waits for that one and runs none of its own. */
   sweep(now: Instant): Promise<SweepCounts> {
+    if (this.holds > 0) return Promise.resolve({ looked: 0, written: 0 });
     this.running ??= this.run(now).finally(() => {
       this.running = undefined;
     });
     return this.running;
+  }
+
+  /**
+   * Does something during which nothing is swept, such as writing down a past that nobody can act on any more; what
+   * is still so afterwards is found by the next run.
+   */
+  async holdWhile<Outcome>(work: () => Promise<Outcome>): Promise<Outcome> {
+    this.holds += 1;
+    try {
+      await this.running?.catch(() => undefined);
+      return await work();
+    } finally {
+      this.holds -= 1;
+    }
   }
 
   private async run(now: Instant): Promise<SweepCounts> {
@@ -68,7 +84,8 @@ export class TurnSweep {
     for (const chunk of chunksOf(due, writesAtOnce)) await this.write(chunk, now);
     const left = await this.sweepable.findLeftBehind();
     for (const chunk of chunksOf(left, writesAtOnce)) await this.release(chunk, now);
-    if (failures.length > 0) throw new AggregateError(failures, `${failures.length} turns could not be looked at`);
+    if (failures.length > 0)
+      throw new AggregateError(failures, `${failures.length} turns could not be looked at`);
     return { looked: open.length, written: due.length + left.length };
   }
 
@@ -91,7 +108,11 @@ export class TurnSweep {
     return due;
   }
 
-  private async isDue(file: TurnFile, memories: Map<AlertCause, AlertMemory>, now: Instant): Promise<boolean> {
+  private async isDue(
+    file: TurnFile,
+    memories: Map<AlertCause, AlertMemory>,
+    now: Instant,
+  ): Promise<boolean> {
     const { terminalCode, zone } = file.record;
     const rules = await this.rules.of(terminalCode, zone);
     if (lookAt(watchedTurnOf(file), rules, memories, now).some(isNews)) return true;

@@ -29,7 +29,8 @@ export class TurnViews {
   async jsonOf(file: TurnFile, now: Instant): Promise<string> {
     const stretch = Math.floor(now / viewMilliseconds);
     const known = this.kept.get(file);
-    if (known !== undefined && (known.stretch === stretch || file.record.settledAt !== null)) return known.json;
+    if (known !== undefined && (known.stretch === stretch || file.record.settledAt !== null))
+      return known.json;
     const { lateness } = await this.rules.of(file.record.terminalCode, file.record.zone);
     const moment = turnMomentOf(file, lateness, now);
     const look = lookOf(moment);

@@ -18,7 +18,8 @@ import { wireAlertOf } from '../alerts/alert-record';
 import type { TurnFile } from './turn-file';
 import type { TurnMoment } from './turn-moment';
 
-const wireInstant = (instant: Instant | null): string | null => (instant === null ? null : formatInstant(instant));
+const wireInstant = (instant: Instant | null): string | null =>
+  instant === null ? null : formatInstant(instant);
 
 /** A turn as every route gives it, at one moment; times in words follow the rules of its terminal. */
 export function wireTurnOf(file: TurnFile, moment: TurnMoment, rules: LatenessSettings): WireTurn {
@@ -56,9 +57,13 @@ export function wireTurnOf(file: TurnFile, moment: TurnMoment, rules: LatenessSe
     },
     alerts: file.alerts.map(wireAlertOf),
     blueSignal:
-      facts.blueSignal === null ? null : { since: formatInstant(facts.blueSignal.since), by: facts.blueSignal.by },
+      facts.blueSignal === null
+        ? null
+        : { since: formatInstant(facts.blueSignal.since), by: facts.blueSignal.by },
     annulled:
-      facts.annulled === null ? null : { at: formatInstant(facts.annulled.at), reason: facts.annulled.reason },
+      facts.annulled === null
+        ? null
+        : { at: formatInstant(facts.annulled.at), reason: facts.annulled.reason },
     securement: wireSecurementOf(facts, now),
     shortByDesign: shortByDesignSeconds(assessed) > 0,
     lastHeardAt: wireInstant(facts.lastHeardAt),

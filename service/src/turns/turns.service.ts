@@ -88,10 +88,7 @@ export class TurnsService {
     return this.unitOfWork.run((transaction) => this.recordAll(transaction, commands));
   }
 
-  private async recordAll(
-    transaction: Transaction,
-    commands: readonly RecordCommand[],
-  ): Promise<Recorded[]> {
+  private async recordAll(transaction: Transaction, commands: readonly RecordCommand[]): Promise<Recorded[]> {
     const recorded: Recorded[] = [];
     for (const command of commands) recorded.push(await this.recorder.record(transaction, command));
     return recorded;
@@ -101,7 +98,9 @@ export class TurnsService {
   async createExtra(request: CreateTurnRequest, now: Instant): Promise<TurnFile> {
     const terminal = await this.terminals.require(request.terminal);
     checkTimes(request, terminal.zone);
-    return this.unitOfWork.run((transaction) => this.createExtraIn(transaction, request, { zone: terminal.zone, now }));
+    return this.unitOfWork.run((transaction) =>
+      this.createExtraIn(transaction, request, { zone: terminal.zone, now }),
+    );
   }
 
   private async createExtraIn(

@@ -4,7 +4,11 @@ import type { WatchedTurn } from '../alerts/watched-turn';
 import type { TurnFile } from './turn-file';
 
 /** What the alerts need to know about a turn. */
-export function watchedTurnOf({ record, facts, alerts }: TurnFile): WatchedTurn & { alerts: readonly AlertRecord[] } {
+export function watchedTurnOf({
+  record,
+  facts,
+  alerts,
+}: TurnFile): WatchedTurn & { alerts: readonly AlertRecord[] } {
   return {
     turnId: record.id,
     terminalCode: record.terminalCode,

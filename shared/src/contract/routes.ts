@@ -8,4 +8,9 @@ import { turnAreaRoutes } from './turn-routes';
  * Every route of the service. The guard's permission, the OpenAPI document and the test that walks roles and routes
  * are held against this table; a route that is missing here fails a test.
  */
-export const ROUTES: readonly RouteSpec[] = [...accountRoutes, ...turnAreaRoutes, ...historyRoutes, ...timetableRoutes];
+export const ROUTES: readonly RouteSpec[] = [
+  ...accountRoutes,
+  ...turnAreaRoutes,
+  ...historyRoutes,
+  ...timetableRoutes,
+];
