@@ -1,9 +1,7 @@
 import { mkdirSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
-import express from 'express';
 import supertest from 'supertest';
 import { pathForLog } from '../src/common/log.module';
-import { serveUserInterface } from '../src/common/user-interface';
 import { bootApp, type Booted } from './support/boot';
 import { signIn } from './support/sign-in';
 import { temporaryFolder } from './support/temporary-folder';
@@ -22,7 +20,7 @@ describe('answers of the service', () => {
       code: 'route.unknown',
       message: 'there is no such route',
       facts: {},
-      requestId: answer.headers['x-request-id'] as unknown,
+      requestId: answer.headers['x-request-id'],
     });
   });
 
@@ -81,7 +79,7 @@ describe('headers', () => {
     const booted = await bootApp({ environment });
     try {
       const answer = await supertest(booted.app.getHttpServer()).get('/api/health');
-      return answer.headers as Record<string, string>;
+      return answer.headers;
     } finally {
       await booted.close();
     }
@@ -156,41 +154,39 @@ describe('the cross-site rule', () => {
 
 describe('the user interface', () => {
   const temporary = temporaryFolder();
-  const app = express();
-  beforeAll(() => {
+  let booted: Booted;
+  beforeAll(async () => {
     mkdirSync(path.join(temporary.folder, 'assets'));
     writeFileSync(path.join(temporary.folder, 'index.html'), '<title>Stubpost</title>');
     writeFileSync(path.join(temporary.folder, 'assets', 'app-1a2b.js'), '0');
     writeFileSync(path.join(temporary.folder, 'icon.svg'), '<svg/>');
-    serveUserInterface(
-      {
-        use: (handler) => app.use(handler),
-        useStaticAssets: (folder, options) => app.use(express.static(folder, options)),
-      },
-      temporary.folder,
-    );
+    booted = await bootApp({ uiFolder: temporary.folder });
   });
-  afterAll(() => temporary.remove());
+  afterAll(async () => {
+    await booted.close();
+    temporary.remove();
+  });
+  const ask = () => supertest(booted.app.getHttpServer());
 
   test.each(['/', '/board/HBR', '/turns/0b5c', '/link/abc'])('%s is the one page', async (address) => {
-    const answer = await supertest(app).get(address).expect(200);
+    const answer = await ask().get(address).expect(200);
     expect(answer.text).toContain('Stubpost');
     expect(answer.headers['cache-control']).toBe('no-cache');
   });
 
   test('files with a hash in their name are kept for good, others asked for again', async () => {
-    const hashed = await supertest(app).get('/assets/app-1a2b.js').expect(200);
+    const hashed = await ask().get('/assets/app-1a2b.js').expect(200);
     expect(hashed.headers['cache-control']).toContain('immutable');
-    const plain = await supertest(app).get('/icon.svg').expect(200);
+    const plain = await ask().get('/icon.svg').expect(200);
     expect(plain.headers['cache-control']).toBe('no-cache');
   });
 
   test.each(['/assets/old.js', '/gone.png', '/../package.json'])('%s is not there', async (address) => {
-    await supertest(app).get(address).expect(404);
+    await ask().get(address).expect(404);
   });
 
   test('only reading gets the page', async () => {
-    await supertest(app).post('/board/HBR').expect(404);
+    await ask().post('/board/HBR').expect(404);
   });
 });
 

@@ -2,11 +2,11 @@ import { Body, Controller, Get, HttpCode, Param, Post, Req, Res } from '@nestjs/
 import { type SessionAnswer, type UseLinkRequest, useLinkSchema, type WireLink } from '@stubpost/shared';
 import type { Request, Response } from 'express';
 import { Public } from '../common/decorators';
+import { visitorOf } from '../common/visitor';
 import { ZodPipe } from '../common/zod.pipe';
 import { OneTimeLinks } from './one-time-links.service';
 import { SessionCookie } from './session-cookie';
 import { SignInService } from './sign-in.service';
-import { visitorOf } from './visitor';
 
 /** What somebody with a one-time link can do: see whom it is for, set a password, be signed in. */
 @Controller('api/links')

@@ -11,13 +11,13 @@ import type { Request, Response } from 'express';
 import { CurrentPerson, Permit, Public } from '../common/decorators';
 import { Refusal } from '../common/refusal';
 import type { CurrentPersonFacts } from '../common/signed-in';
+import { visitorOf } from '../common/visitor';
 import { ZodPipe } from '../common/zod.pipe';
 import { OwnSessionsReadModel } from './own-sessions.read-model';
 import { SessionCookie } from './session-cookie';
 import { SessionTokens } from './session-tokens';
 import { SessionsService } from './sessions.service';
 import { SignInService } from './sign-in.service';
-import { visitorOf } from './visitor';
 
 /** Signing in and out, and what a person may see and do about their own sign-in. */
 @Controller('api/session')

@@ -1,17 +1,12 @@
 import { Injectable } from '@nestjs/common';
 import type { Role, SignedInPerson } from '@stubpost/shared';
 import { Refusal } from '../common/refusal';
+import type { Visitor } from '../common/visitor';
 import { Reader } from '../database/reader';
 import { UnitOfWork } from '../database/unit-of-work';
 import { Passwords } from './passwords';
 import { SignInThrottle } from './sign-in-throttle';
 import { type OpenedSession, SessionsService } from './sessions.service';
-
-/** Where a request to come in is from. */
-export interface Visitor {
-  address: string;
-  device: string;
-}
 
 /** Somebody who has just come in. */
 export interface SignedIn extends OpenedSession {

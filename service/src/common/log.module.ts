@@ -1,6 +1,7 @@
 import type { IncomingMessage, ServerResponse } from 'node:http';
 import { type DynamicModule, Module } from '@nestjs/common';
 import { LoggerModule } from 'nestjs-pino';
+import { stdTimeFunctions } from 'pino';
 import { Config } from '../config/config';
 import { requestIdOf } from './request-id';
 
@@ -16,7 +17,7 @@ export class LogModule {
       useFactory: (config: Config) => ({
         pinoHttp: {
           level: config.logLevel,
-          timestamp: () => `,"time":"${new Date().toISOString()}"`,
+          timestamp: stdTimeFunctions.isoTime,
           base: null,
           genReqId: requestIdOf,
           serializers: {

@@ -7,8 +7,8 @@ import {
 } from '@stubpost/shared';
 import type { Request, Response } from 'express';
 import { SessionCookie } from '../auth/session-cookie';
-import { visitorOf } from '../auth/visitor';
 import { Permit, Public } from '../common/decorators';
+import { visitorOf } from '../common/visitor';
 import { ZodPipe } from '../common/zod.pipe';
 import { DemoService } from './demo.service';
 

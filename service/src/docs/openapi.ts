@@ -106,14 +106,14 @@ function responsesOf(route: RouteSpec): Json {
               ? { [response]: { schema: { type: 'string' } } }
               : { 'application/json': { schema: jsonSchemaOf(response, 'output') } },
         };
-  const noes = refusalStatusesOf(route).map((status) => [
+  const noes = refusalStatusesOf(route).map((status): [string, Json] => [
     String(status),
     {
       description: describe(status),
       content: { 'application/json': { schema: { $ref: '#/components/schemas/Error' } } },
     },
   ]);
-  return { [String(route.status ?? 200)]: yes, ...Object.fromEntries(noes) };
+  return { [String(route.status ?? 200)]: yes, ...Object.fromEntries<Json>(noes) };
 }
 
 /** Statuses of the refusals a caller should expect, the usual ones included. */

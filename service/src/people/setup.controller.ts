@@ -8,9 +8,9 @@ import {
 import type { Request, Response } from 'express';
 import { SessionCookie } from '../auth/session-cookie';
 import { SignInService } from '../auth/sign-in.service';
-import { visitorOf } from '../auth/visitor';
 import { Public } from '../common/decorators';
 import { Refusal } from '../common/refusal';
+import { visitorOf } from '../common/visitor';
 import { ZodPipe } from '../common/zod.pipe';
 import { Installation } from '../database/installation';
 import { PeopleReadModel } from './people.read-model';

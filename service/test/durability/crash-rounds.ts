@@ -29,7 +29,7 @@ const databaseName = 'crash.sqlite';
 /** Builds the library that remembers what was synced. */
 export function buildPowerCutLibrary(folder: string): string {
   const library = path.join(folder, 'power-cut.so');
-  execFileSync('gcc', [
+  execFileSync(process.env.CC ?? 'gcc', [
     '-shared',
     '-fPIC',
     '-O1',
@@ -51,7 +51,7 @@ export async function crashOnce(round: CrashRound): Promise<AfterCrash> {
 
 /** Everything that reached the pipe counts as acknowledged, also what came between the decision to kill and the end. */
 function writeUntilKilled(round: CrashRound): Promise<number[]> {
-  const script = path.join(__dirname, 'acknowledging-writer.cjs');
+  const script = path.join(__dirname, 'acknowledging-writer.mjs');
   const child = spawn(process.execPath, [script, path.join(round.folder, databaseName), round.synchronous], {
     stdio: ['ignore', 'pipe', 'inherit'],
     env: {

@@ -3,7 +3,7 @@ import os from 'node:os';
 import path from 'node:path';
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import type { Clock } from '../../src/common/clock';
-import { readConfig } from '../../src/config/config';
+import { Config, readConfig } from '../../src/config/config';
 import { createApp } from '../../src/create-app';
 
 /** A service on a folder of its own. */
@@ -18,6 +18,8 @@ export interface Booted {
 export interface BootOptions {
   clock?: Clock;
   environment?: NodeJS.ProcessEnv;
+  /** A built user interface, or something like it. */
+  uiFolder?: string;
   /** A folder that is already there; it is left in place. */
   dataDir?: string;
 }
@@ -25,12 +27,13 @@ export interface BootOptions {
 /** Boots the whole service on a SQLite file in a temporary folder; supertest speaks to it without a port. */
 export async function bootApp(options: BootOptions = {}): Promise<Booted> {
   const dataDir = options.dataDir ?? mkdtempSync(path.join(os.tmpdir(), 'stubpost-test-'));
-  const config = readConfig({
+  const read = readConfig({
     DATA_DIR: dataDir,
     DEMO: 'off',
     LOG_LEVEL: 'silent',
     ...options.environment,
   });
+  const config = new Config({ ...read, uiFolder: options.uiFolder ?? read.uiFolder });
   const app = await createApp({ config, ...(options.clock === undefined ? {} : { clock: options.clock }) });
   return {
     app,

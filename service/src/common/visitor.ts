@@ -1,5 +1,10 @@
 import type { Request } from 'express';
-import type { Visitor } from './sign-in.service';
+
+/** Where a request to come in is from. */
+export interface Visitor {
+  address: string;
+  device: string;
+}
 
 /** Where a request comes from: its address behind trusted proxies, and what its browser calls itself. */
 export function visitorOf(request: Request): Visitor {
