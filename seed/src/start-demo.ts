@@ -1,9 +1,10 @@
 import { setTimeout as pause } from 'node:timers/promises';
 import { Logger } from '@nestjs/common';
-import { Clock, DemoService, type StartDemo } from '@stubpost/service';
+import { Clock, DemoService, type StartDemo, TurnSweep } from '@stubpost/service';
 import { addDays, calendarDateAt, datesBetween } from '@stubpost/shared';
 import { gatherCast } from './player/cast';
 import { DayPlayer } from './player/day-player';
+import { DeskPlayer } from './player/desk-player';
 import { HistoryFiller } from './player/history-filler';
 import { ensureTerminals, openDemoDay, prepareRailroad } from './player/prepare-railroad';
 import { demoZone } from './railroad/geography';
@@ -20,10 +21,11 @@ async function rest(milliseconds: number, signal: AbortSignal): Promise<void> {
   await pause(milliseconds, undefined, { signal }).catch(() => undefined);
 }
 
-async function playDays(player: DayPlayer, signal: AbortSignal): Promise<void> {
+async function playDays(player: DayPlayer, desk: DeskPlayer, signal: AbortSignal): Promise<void> {
   while (!signal.aborted) {
     try {
       await player.tick();
+      await desk.tick();
     } catch (error) {
       if (!signal.aborted) logger.error(`the crews stopped for a moment: ${String(error)}`);
     }
@@ -41,12 +43,15 @@ export const startDemo: StartDemo = async (app, signal) => {
   await ensureTerminals(app);
   const cast = await gatherCast(app);
   const today = calendarDateAt(app.get(Clock).now(), demoZone);
-  await prepareRailroad(app, cast, { today, firstDay: addDays(today, -allDays) });
   const player = new DayPlayer(app, cast);
-  demo.report({ state: 'filling', message: 'Today is being brought up to now' });
-  await player.tick();
-  const playing = playDays(player, signal);
-  const filler = new HistoryFiller(app, cast, (date) => openDemoDay(app, date));
+  const desk = new DeskPlayer(app, cast);
+  await app.get(TurnSweep).holdWhile(async () => {
+    await prepareRailroad(app, cast, { today, firstDay: addDays(today, -allDays) });
+    demo.report({ state: 'filling', message: 'Today is being brought up to now' });
+    await player.tick();
+  });
+  const playing = playDays(player, desk, signal);
+  const filler = new HistoryFiller(app, cast, desk, (date) => openDemoDay(app, date));
   const past = datesBetween(addDays(today, -allDays), addDays(today, -2)).reverse();
   for (const [index, date] of past.entries()) {
     if (signal.aborted) break;

@@ -1,3 +1,4 @@
+export { AlertDesk } from './alerts/alert-desk';
 export { Clock, FixedClock, SystemClock } from './common/clock';
 export { Refusal } from './common/refusal';
 export type { CurrentPersonFacts } from './common/signed-in';

@@ -1,17 +1,21 @@
 import { setTimeout as pause } from 'node:timers/promises';
 import type { INestApplicationContext } from '@nestjs/common';
 import { INSTALLATION, Reader, Settings, TurnsService, UnitOfWork } from '@stubpost/service';
-import type { CalendarDate } from '@stubpost/shared';
+import { addDays, serviceInstant, type CalendarDate } from '@stubpost/shared';
+import { demoZone } from '../railroad/geography';
 import type { TurnStory } from '../story/act';
 import { actRequest } from './act-entry';
 import type { Cast } from './cast';
 import { storiesOfDay } from './day-book';
+import type { DeskPlayer } from './desk-player';
 import { personIdIn, writerOf } from './teller';
 
 /** Name of the setting that lists the service dates which are filled. */
 const filledDays = 'demo-filled-days';
 /** Breath for everybody else between two turns of the past. */
 const breathMilliseconds = 2;
+/** When the supervisor goes through yesterday: 09:30. */
+const morningSeconds = 9.5 * 3600;
 
 /** Opens one service date of the running timetable. */
 export type OpenDay = (serviceDate: CalendarDate) => Promise<void>;
@@ -21,6 +25,7 @@ export class HistoryFiller {
   constructor(
     private readonly app: INestApplicationContext,
     private readonly cast: Cast,
+    private readonly desk: DeskPlayer,
     private readonly openDay: OpenDay,
   ) {}
 
@@ -36,6 +41,7 @@ export class HistoryFiller {
         await pause(breathMilliseconds);
       }
     }
+    await this.desk.settle(serviceDate, serviceInstant(addDays(serviceDate, 1), morningSeconds, demoZone));
     const settings = this.app.get(Settings);
     await this.app.get(UnitOfWork).run((transaction) =>
       settings.put(transaction, {
