@@ -28,7 +28,6 @@ export function ActInputs({ page }: { page: ActOnPage }) {
           onDigit={(digit) => setForm(withDigit(form, active, digit))}
           onErase={() => setForm(withoutDigit(form, active))}
           onNone={() => setForm(withNone(form, active))}
-          {...(active === 'brakePipePsi' ? { hint: 'As the engineer reads it off the gauge.' } : {})}
         />
       )}
     </>

@@ -70,7 +70,7 @@ export function ActPlace(props: ActPlaceProps) {
     <>
       <div className={styles.main}>
         <TrainFacts turn={turn} now={now} marker={marker} />
-        {bar === null || bar.kind === 'own-act' ? <Standing isCompact={hasInputs} /> : null}
+        {bar === null || bar.kind === 'own-act' ? <Standing isCompact={hasInputs || page.asksTime} /> : null}
         {bar !== null && !isAfter ? (
           <AtTheControls bar={bar} />
         ) : (
@@ -115,7 +115,12 @@ function ActBody({ page, lead, isAfter, ways }: ActBodyProps) {
       {brakes.shortCount !== null && !isAfter && (
         <OpenCount count={brakes.shortCount} onTellDesk={ways.onTellDesk} />
       )}
-      <NextStep act={act} lead={lead} {...(brakes.hand === null ? {} : { hint: handHint(page) })}>
+      <NextStep
+        act={act}
+        lead={lead}
+        isBrief={page.fields.length > 0 && !isAfter}
+        {...(brakes.hand === null ? {} : { hint: handHint(page) })}
+      >
         {!isAfter && <ActInputs page={page} />}
         {isAfter && isDue && (
           <button type="button" className={`${styles.button} ${styles.wide}`} onClick={ways.onGoOn}>

@@ -13,6 +13,8 @@ import { useHeadingFocus } from './use-heading-focus';
 export function AllSteps({ onPick, onBack }: { onPick: (key: string) => void; onBack: () => void }) {
   const { turn } = useTurnScene();
   const heading = useHeadingFocus();
+  const said = turn.steps.flatMap((step) => step.remarks);
+  const findings = turn.findings.filter((finding) => !said.includes(finding));
   return (
     <>
       <h1 tabIndex={-1} ref={heading}>
@@ -36,9 +38,9 @@ export function AllSteps({ onPick, onBack }: { onPick: (key: string) => void; on
           </li>
         ))}
       </ol>
-      {turn.findings.length > 0 && (
+      {findings.length > 0 && (
         <section className={styles.said} aria-label="What is open about the entries">
-          {turn.findings.map((finding) => (
+          {findings.map((finding) => (
             <p key={finding}>{finding}</p>
           ))}
         </section>

@@ -17,7 +17,7 @@ export function LastEntry({ onWithdraw }: { onWithdraw: (entry: EntryToWithdraw)
   const { turn, entries, me } = useTurnScene();
   const step = newestStep(turn);
   if (step === null || step.doneAt === null) return null;
-  const words = recordWords(step, turn.zone);
+  const words = recordWords({ ...step, reading: null }, turn.zone);
   const isOwn = step.entryId !== null && entries.find(({ id }) => id === step.entryId)?.by?.id === me.id;
   const canWithdraw = isOwn && !hasLeft(turn);
   return (

@@ -35,7 +35,7 @@ export function LaterTime({ chosen, onChoose, onNow }: LaterTimeProps) {
   return (
     <section className={styles.next} aria-label="When it happened">
       <h3>When did it happen?</h3>
-      <div className={styles.buttons}>
+      <div className={styles.pairs}>
         {minutesAgoChoices.map((minutes) => (
           <button
             key={minutes}

@@ -14,10 +14,12 @@ export interface NextStepProps {
   children?: ReactNode;
   /** Instead of who makes the step and who records it. */
   hint?: string;
+  /** Leaves out the long wording, where the page needs the room. */
+  isBrief?: boolean;
 }
 
 /** The one next thing: its mark, its name, by when. */
-export function NextStep({ act, lead, children, hint }: NextStepProps) {
+export function NextStep({ act, lead, children, hint, isBrief = false }: NextStepProps) {
   const { steps, me, turn } = useTurnScene();
   const planned = act.kind === 'step' ? steps.find((step) => step.key === act.step.key) : undefined;
   const fullLabel = act.kind === 'step' && act.step.label !== act.step.shortLabel ? act.step.label : null;
@@ -27,20 +29,14 @@ export function NextStep({ act, lead, children, hint }: NextStepProps) {
     <section className={styles.next} aria-label={lead}>
       <p className="muted">{lead}</p>
       <h2 className={styles.lead}>
-        {act.kind === 'step' && (
-          <StepMark
-            kind={act.step.kind}
-            state={act.step.state === 'overdue' ? 'due' : act.step.state}
-            size={30}
-          />
-        )}
+        {act.kind === 'step' && <StepMark kind={act.step.kind} state="due" size={30} />}
         {act.kind === 'arrival' || act.kind === 'departure' ? (
           <StepMark kind="movement" state="due" size={30} />
         ) : null}
         {actLabel(act)}
       </h2>
       <DueWords act={act} />
-      {fullLabel !== null && <p>{fullLabel}.</p>}
+      {fullLabel !== null && !isBrief && <p>{fullLabel}.</p>}
       {words !== '' && <p>{words}</p>}
       {children}
     </section>

@@ -10,8 +10,6 @@ export interface NumberPadProps {
   form: ActForm;
   /** The field the keys write into. */
   active: NumberField;
-  /** Words before the box, by field. */
-  hint?: string;
   onField: (field: NumberField) => void;
   onDigit: (digit: string) => void;
   onErase: () => void;
@@ -20,7 +18,7 @@ export interface NumberPadProps {
 
 /** Boxes for what is read off or counted, and keys large enough for gloves. */
 export function NumberPad(props: NumberPadProps) {
-  const { fields, form, active, hint, onDigit, onErase, onNone } = props;
+  const { fields, form, active, onDigit, onErase, onNone } = props;
   const noneWord = active === 'count' ? 'No count' : 'No reading';
   return (
     <>
@@ -34,7 +32,6 @@ export function NumberPad(props: NumberPadProps) {
             onField={props.onField}
           />
         ))}
-        {hint !== undefined && <p>{hint}</p>}
       </div>
       <div
         className={styles.pad}

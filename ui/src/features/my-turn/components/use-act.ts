@@ -56,7 +56,8 @@ export function useAct(act: NextAct): ActOnPage {
   const mustBeLater =
     planned !== undefined && hasLeft(turn) && !rolesOf(steps).afterDeparture.has(planned.key);
   const asksTime = wantsTime || mustBeLater;
-  const missing = missingField(fields, form);
+  const filled = withLeftCars(form, brakes);
+  const missing = missingField(fields, filled);
   const waitsForField = missing === null ? null : fieldWords[missing].waitsFor;
   return {
     act,
@@ -66,7 +67,7 @@ export function useAct(act: NextAct): ActOnPage {
     setForm,
     active: chosenField ?? numbers[0] ?? null,
     setActive,
-    reading: readingOf(fields, form),
+    reading: readingOf(fields, filled),
     waitsFor: waitsForField ?? (asksTime && earlier === null ? 'waits for the time' : null),
     lock: lockOf(turn, steps, act, now),
     isLockLifted,
@@ -77,4 +78,10 @@ export function useAct(act: NextAct): ActOnPage {
     setAsksTime: setWantsTime,
     mustBeLater,
   };
+}
+
+/** While the counts differ and nothing is touched, the bar offers the cars that are left. */
+function withLeftCars(form: ActForm, { shortCount }: HandbrakeView): ActForm {
+  const isUntouched = form.cars.length === 0 && !form.none.includes('cars');
+  return shortCount !== null && isUntouched ? { ...form, cars: shortCount.carsStillSet } : form;
 }

@@ -35,7 +35,11 @@ export function fieldsOf(step: Pick<PlanStep, 'reads'>, carsKnown: readonly stri
 export const fieldWords: Record<FormField, { name: string; unit: string; waitsFor: string }> = {
   cars: { name: 'Cars', unit: '', waitsFor: 'waits for the cars' },
   count: { name: 'Handbrakes', unit: '', waitsFor: 'waits for the count' },
-  brakePipePsi: { name: 'Brake pipe', unit: 'psi', waitsFor: 'waits for the reading' },
+  brakePipePsi: {
+    name: 'Brake pipe, as the engineer reads it',
+    unit: 'psi',
+    waitsFor: 'waits for the reading',
+  },
   p0: { name: 'Pressure at the start', unit: 'psi', waitsFor: 'waits for the reading' },
   p1: { name: 'Pressure at the end', unit: 'psi', waitsFor: 'waits for the reading' },
   seconds: { name: 'Length of the test', unit: 's', waitsFor: 'waits for the reading' },

@@ -6,9 +6,7 @@ const step = (key: string) => pushPullPlan.steps.find((each) => each.key === key
 describe('the words of an act', () => {
   it('say who makes a step and who records it', () => {
     expect(doerLine(step('handbrake-set'), 'conductor')).toBe('Yours to make and to record.');
-    expect(doerLine(step('cab-brake-check'), 'conductor')).toBe(
-      'The engineer makes it: ask, or see it. You record it.',
-    );
+    expect(doerLine(step('cab-brake-check'), 'conductor')).toBe('The engineer makes it, you record it.');
     expect(doerLine(step('handbrake-set'), 'engineer')).toBe('The conductor makes it, you record it.');
   });
 

@@ -8,10 +8,7 @@ const doerWords = { conductor: 'the conductor', engineer: 'the engineer', crew: 
 export function doerLine(step: PlanStep, role: CrewRole | null): string {
   if (step.doer === role) return 'Yours to make and to record.';
   const doer = doerWords[step.doer];
-  const makes = `${doer[0]?.toUpperCase() ?? ''}${doer.slice(1)} makes it`;
-  return step.place === 'cab' && step.doer === 'engineer'
-    ? `${makes}: ask, or see it. You record it.`
-    : `${makes}, you record it.`;
+  return `${doer[0]?.toUpperCase() ?? ''}${doer.slice(1)} makes it, you record it.`;
 }
 
 /** What the bar says, from what has been put in: "Set: 1408 and 1412", "Released: 2 handbrakes", "Air charged: 110 psi". */
