@@ -6,7 +6,8 @@ import type { Transaction } from '../database/unit-of-work';
 import { PlansService } from '../plans/plans.service';
 import { EntryLog, type LoggedEntry } from '../records/entry-log';
 import { SetsService } from '../sets/sets.service';
-import { type EntryBody, entryFrom } from './entry-body';
+import type { EntryBody } from './entry-body';
+import { entryFrom } from './entry-from-body';
 import { type TurnFile, turnFileFrom } from './turn-file';
 import { type RawTurn, type TurnRecord, turnRecordOf } from './turn-record';
 

@@ -11,6 +11,7 @@ import { Clock } from '../common/clock';
 import { CurrentPerson, Permit } from '../common/decorators';
 import type { CurrentPersonFacts } from '../common/signed-in';
 import { ZodPipe } from '../common/zod.pipe';
+import { ExtraTurns } from './extra-turns.service';
 import { sendJson } from './send-json';
 import { TurnViews } from './turn-views';
 import { TurnsService } from './turns.service';
@@ -19,6 +20,7 @@ import { TurnsService } from './turns.service';
 export class TurnsController {
   constructor(
     private readonly turns: TurnsService,
+    private readonly extras: ExtraTurns,
     private readonly views: TurnViews,
     private readonly clock: Clock,
   ) {}
@@ -30,7 +32,7 @@ export class TurnsController {
     @Res() response: Response,
   ): Promise<void> {
     const now = this.clock.now();
-    const file = await this.turns.createExtra(request, now);
+    const file = await this.extras.create(request, now);
     sendJson(response, HttpStatus.CREATED, await this.views.jsonOf(file, now));
   }
 

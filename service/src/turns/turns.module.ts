@@ -9,6 +9,7 @@ import { TerminalsModule } from '../terminals/terminals.module';
 import { BoardController } from './board.controller';
 import { CrewCarrier } from './crew-carrier';
 import { EntryRecorder } from './entry-recorder';
+import { ExtraTurns } from './extra-turns.service';
 import { RecordingRights } from './recording-rights';
 import { SweepableTurns } from './sweepable-turns.read-model';
 import { TurnBoardReadModel } from './turn-board.read-model';
@@ -40,6 +41,7 @@ import { TurnsService } from './turns.service';
   providers: [
     CrewCarrier,
     EntryRecorder,
+    ExtraTurns,
     RecordingRights,
     SweepableTurns,
     TurnBoardReadModel,
