@@ -38,6 +38,11 @@ describe('a standing train', () => {
     expect(gapsAt(880, [set, endsChanged, inCab])).toEqual({ unattended: null, unsecured: null });
   });
 
+  it('is attended when the ends are changed and the leaving cab is manned at the same time', () => {
+    const atOnce = [aStepDone('ends-changed', 340), aStepDone('engineer-in-cab', 340)];
+    expect(gapsAt(341, atOnce)).toEqual({ unattended: null, unsecured: null });
+  });
+
   it('is unsecured when it is unattended and no handbrake stands set', () => {
     expect(gapsAt(400, [endsChanged])).toEqual({ unattended: 340, unsecured: 340 });
   });

@@ -3,7 +3,14 @@ import { describe, expect, it } from 'vitest';
 import { addSeconds } from '../lib/instant';
 import { defaultStepPlanSteps } from '../plan/default-step-plan';
 import { aTurn, fixedArrival } from '../testing/builders';
-import { CREW_ROLES, ENTRY_KINDS, ENTRY_SOURCES, type Entry, type EntryAuthor, type EntryContent } from './entry';
+import {
+  CREW_ROLES,
+  ENTRY_KINDS,
+  ENTRY_SOURCES,
+  type Entry,
+  type EntryAuthor,
+  type EntryContent,
+} from './entry';
 import { evolve, startOfTurn, turnFrom } from './evolve';
 import { formatEntryFinding } from './finding-words';
 import { lifeOf } from './life';
@@ -12,7 +19,10 @@ import { TURN_STATES } from './turn';
 /* Few ids, few times and few people, so that targets are met, ties happen and one id comes with two bodies. */
 const ids = fc.constantFrom('a', 'b', 'c', 'd', 'e', 'f', 'g');
 const times = fc.integer({ min: -10, max: 40 }).map((half) => addSeconds(fixedArrival, half * 30));
-const people: fc.Arbitrary<EntryAuthor> = fc.constantFrom({ personId: 'p', name: 'P' }, { personId: 'q', name: 'Q' });
+const people: fc.Arbitrary<EntryAuthor> = fc.constantFrom(
+  { personId: 'p', name: 'P' },
+  { personId: 'q', name: 'Q' },
+);
 const roles = fc.constantFrom(...CREW_ROLES);
 const words = fc.string({ maxLength: 6 });
 const steps = fc.constantFrom(...defaultStepPlanSteps.map((step) => step.key), 'lunch', 'constructor');

@@ -328,6 +328,13 @@ describe('handbrakes', () => {
     expect(facts.handbrakes.set).toBeNull();
   });
 
+  it('are not released by a record that says that none was', () => {
+    expect(
+      turnWith(aStepDone('handbrake-set', 70), release(960, { count: 0 })).doneAt['handbrake-released'],
+    ).toBeUndefined();
+    expect(turnWith(setTwo, release(960, { count: 0 })).doneAt['handbrake-released']).toBeUndefined();
+  });
+
   it('released in greater number than set are done, and a finding', () => {
     const facts = turnWith(setTwo, release(960, { count: 3 }));
     expect(facts.doneAt['handbrake-released']).toBe(at(960));
@@ -415,6 +422,14 @@ describe('the crew', () => {
       ['conductor', 'R. Sato'],
       ['engineer', 'P. Varga'],
     ]);
+  });
+
+  it('of two that say so at the same time is the one with the smaller id', () => {
+    const facts = turnWith(
+      anEntry('crew', { id: 'a', person: conductor, as: 'conductor' }),
+      anEntry('crew', { id: 'b', person: { personId: 'c-2', name: 'R. Sato' }, as: 'conductor' }),
+    );
+    expect(facts.crew.map(({ name }) => name)).toEqual(['M. Tolland']);
   });
 
   it('from the turn before counts until somebody says otherwise', () => {
