@@ -118,7 +118,7 @@ function ActBody({ page, lead, isAfter, ways }: ActBodyProps) {
       <NextStep
         act={act}
         lead={lead}
-        isBrief={page.fields.length > 0 && !isAfter}
+        isBrief={(page.fields.length > 0 || page.asksTime) && !isAfter}
         {...(brakes.hand === null ? {} : { hint: handHint(page) })}
       >
         {!isAfter && <ActInputs page={page} />}
@@ -141,7 +141,8 @@ function ActBody({ page, lead, isAfter, ways }: ActBodyProps) {
           {...(page.mustBeLater ? {} : { onNow: () => page.setAsksTime(false) })}
         />
       )}
-      <Lines ways={ways} />
+      {/* Where keys stand above the bar, nothing that takes back stands between them. */}
+      {(isAfter || page.active === null) && <Lines ways={ways} />}
       <SecondaryButtons page={page} ways={ways} isAfter={isAfter} />
     </>
   );
