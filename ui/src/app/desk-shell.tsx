@@ -15,6 +15,9 @@ import styles from './shell.module.css';
 
 const ownZone = Intl.DateTimeFormat().resolvedOptions().timeZone;
 
+/** A board and the panel of a turn over it are one page: opening a turn must not draw the board anew. */
+const pageOf = (pathname: string): string => (/^\/(board|turns)\//.test(pathname) ? '/board' : pathname);
+
 /** Bars of the desk: one stream, one terminal, one place for everything that stands on every page. */
 export function DeskShell() {
   const { terminal, terminals } = useTerminalChoice();
@@ -38,7 +41,7 @@ export function DeskShell() {
           <PageNames zone={zone} path={pathname} />
         </header>
         <main className={styles.main} id="page" tabIndex={-1}>
-          <PartBoundary key={pathname} part="This page" rest="The other pages are fine.">
+          <PartBoundary key={pageOf(pathname)} part="This page" rest="The other pages are fine.">
             <Outlet />
           </PartBoundary>
         </main>
