@@ -1,13 +1,15 @@
-import { useNavigate } from 'react-router-dom';
+import { useLocation, useNavigate } from 'react-router-dom';
 import { PageHeader } from '../../components/page-header';
 import { EmptyState, ErrorState, LoadingRows } from '../../components/page-states';
 import { AlertsView } from '../../features/alerts/components/alerts-view';
 import { useTerminalChoice } from '../../lib/terminal-choice';
+import { panelAddress } from './turn-address';
 
 /** Alerts of the chosen terminal. */
 export function AlertsPage() {
   const { terminal, isPending, error } = useTerminalChoice();
   const navigate = useNavigate();
+  const { pathname, search } = useLocation();
   if (error !== null) return <ErrorState error={error} />;
   if (isPending) return <LoadingRows what="terminals" />;
   if (terminal === null) return <EmptyState words="There is no terminal here that you may look at." />;
@@ -16,7 +18,7 @@ export function AlertsPage() {
       <PageHeader hidden title={`Alerts, ${terminal.name}`} />
       <AlertsView
         terminal={terminal}
-        onOpen={(turnId) => void navigate(`/turns/${turnId}?terminal=${encodeURIComponent(terminal.code)}`)}
+        onOpen={(turnId) => void navigate(panelAddress(turnId, terminal.code, new URLSearchParams()), { state: { backTo: `${pathname}${search}` } })}
       />
     </>
   );

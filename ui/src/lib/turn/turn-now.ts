@@ -27,6 +27,8 @@ export interface StepNow {
   anchor: Anchor;
   holdsDeparture: boolean;
   state: StepState;
+  /** The entry that counts for the step. */
+  entryId: string | null;
   /** Counted from the recorded or expected arrival and the departure as it now is to be. */
   dueAt: Instant | null;
   /** Counted from the timetable alone; does not move with a late arrival. */
@@ -49,6 +51,8 @@ export interface TurnNow {
   id: string;
   version: number;
   kind: TurnKind;
+  terminal: string;
+  planId: string;
   serviceDate: string;
   zone: string;
   extra: boolean;
@@ -77,6 +81,8 @@ export interface TurnNow {
   criticalSteps: readonly string[];
   alerts: readonly WireAlert[];
   blueSignal: { since: Instant | null; by: string } | null;
+  /** Handbrakes by the records: how many were set and released, and on which cars they still stand. */
+  securement: NonNullable<WireTurn['securement']> | null;
   annulled: { at: Instant | null; reason: string } | null;
   shortByDesign: boolean;
   lastHeardAt: Instant | null;
@@ -98,6 +104,7 @@ function readStep(step: WireStep): StepNow {
     anchor: step.anchor,
     holdsDeparture: step.holdsDeparture,
     state: step.state,
+    entryId: step.entryId,
     dueAt: instant(step.dueAt),
     plannedDueAt: instant(step.dueAt),
     latestFinishAt: instant(step.latestFinishAt),
@@ -118,6 +125,8 @@ export function readTurn(turn: WireTurn): TurnNow {
     id: turn.id,
     version: turn.version,
     kind: turn.kind,
+    terminal: turn.terminal,
+    planId: turn.planId,
     serviceDate: turn.serviceDate,
     zone: turn.zone,
     extra: turn.extra,
@@ -140,6 +149,7 @@ export function readTurn(turn: WireTurn): TurnNow {
     blueSignal:
       turn.blueSignal === null ? null : { since: instant(turn.blueSignal.since), by: turn.blueSignal.by },
     annulled: turn.annulled === null ? null : { at: instant(turn.annulled.at), reason: turn.annulled.reason },
+    securement: turn.securement ?? null,
     shortByDesign: turn.shortByDesign,
     lastHeardAt: instant(turn.lastHeardAt),
     findings: turn.findings,
