@@ -177,6 +177,16 @@ describe('the forward pass', () => {
     expect(forecast.criticalSteps).toEqual(['work']);
   });
 
+  it('gives a step that holds nothing itself the latest finish of the step that waits for it', () => {
+    const steps = [
+      aStep({ key: 'before', holdsDeparture: false }),
+      aStep({ key: 'work', after: ['before'] }),
+    ];
+    const forecast = forecastTurn(anInput({ steps }), arrival);
+    expect(stepOf(forecast, 'before').latestFinishAt).toBe(beforeDeparture(60));
+    expect(forecast.readyAt).toBe(afterArrival(120));
+  });
+
   it('gives a step that waits for nothing the arrival to start from', () => {
     const steps = [aStep({ key: 'work', after: [] })];
     expect(forecastTurn(anInput({ steps }), arrival).steps[0]).toMatchObject({

@@ -132,7 +132,7 @@ describe('a late departure', () => {
       priority: 'watch',
       text: 'Cab brake check not recorded, latest 17:13; ready about 17:21, leaves 17:20, 1 min short',
       action:
-        'Call the engineer. If it is done, record it by radio; if not, send help or arrange a later departure.',
+        'Call engineer P. Varga. If it is done, record it by radio; if not, send help or arrange a later departure.',
       actor: 'dispatcher, engineer P. Varga',
       byWhen: addSeconds(fixedDeparture, -385),
       lines: [
@@ -144,6 +144,12 @@ describe('a late departure', () => {
         'Leaving-end test: due 17:19, latest 17:20, about 17:21',
       ],
     });
+  });
+
+  it('calls people by their role where no name is known', () => {
+    const finding = findingAt(at(910), 'late-departure', { entries: [lateArrival] });
+    expect(finding.action).toMatch(/^Call the conductor\./);
+    expect(finding.actor).toBe('dispatcher, conductor');
   });
 
   it('is one finding with a line for each late step, however many they are', () => {
@@ -274,6 +280,7 @@ describe('a missing required record', () => {
     expect(findingAt(at(1090), 'no-required-record', { entries })).toMatchObject({
       priority: 'act-now',
       text: '1 of 2 handbrakes released. Still set: car 1412.',
+      action: 'Call conductor M. Tolland: release the rest, or correct the count.',
       byWhen: fixedDeparture,
     });
   });

@@ -3,7 +3,7 @@ import type { AssessedStep, AssessedTurn } from './assessed-turn';
 import type { Finding } from './finding';
 import { lateSlackSeconds } from './horizon';
 import type { LatenessSettings } from './settings';
-import { deskAnd, openSteps } from './words';
+import { calledWords, deskAnd, openSteps } from './words';
 
 /**
  * *Late departure*: one finding while slack is below 0, however many steps are late. Its lines are the open steps
@@ -55,7 +55,7 @@ function whatToDo(turn: AssessedTurn, step: AssessedStep | undefined): string {
   if (!hasCome(turn)) return 'Ask for a second person at the turn, another set, or a later departure.';
   if (step === undefined) return 'Tell the next station and give the cause when the train has left.';
   if (step.cannotDo !== null) return 'Send help, or arrange another set or a later departure.';
-  return `Call the ${step.doer}. If it is done, record it by radio; if not, send help or arrange a later departure.`;
+  return `Call ${calledWords(turn, step.doer)}. If it is done, record it by radio; if not, send help or arrange a later departure.`;
 }
 
 function lineOf(step: AssessedStep, settings: LatenessSettings): string {

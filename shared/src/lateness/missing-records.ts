@@ -3,7 +3,7 @@ import { formatDuration } from '../lib/zone-time';
 import type { AssessedStep, AssessedTurn } from './assessed-turn';
 import type { Finding } from './finding';
 import type { LatenessSettings } from './settings';
-import { deskAnd, openSteps } from './words';
+import { calledWords, deskAnd, openSteps } from './words';
 
 /**
  * *No required record*: the train left without a record of a brake test or a securement step that its plan lets the
@@ -48,7 +48,7 @@ function findSmallerCount(turn: AssessedTurn): Finding | null {
     cause: 'no-required-record',
     priority: 'act-now',
     text: `${released} of ${set} handbrakes released.${cars}`,
-    action: 'Call the conductor: release the rest, or correct the count.',
+    action: `Call ${calledWords(turn, 'conductor')}: release the rest, or correct the count.`,
     actor: deskAnd(turn, 'conductor'),
     byWhen: turn.forecast.departureAnchorAt,
     lines: [],

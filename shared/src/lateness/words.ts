@@ -7,6 +7,12 @@ export function personWords(turn: Pick<AssessedTurn, 'crew'>, doer: Doer): strin
   return member === undefined ? doer : `${doer} ${member.name}`;
 }
 
+/** Whom to call: the name where it is known, "the engineer" where it is not. */
+export function calledWords(turn: Pick<AssessedTurn, 'crew'>, doer: Doer): string {
+  const words = personWords(turn, doer);
+  return words === doer ? `the ${doer}` : words;
+}
+
 /** Who acts on something a crew member must do: the desk first, for it reads the alert. */
 export function deskAnd(turn: Pick<AssessedTurn, 'crew'>, doer: Doer): string {
   return `dispatcher, ${personWords(turn, doer)}`;
