@@ -8,7 +8,11 @@ export class ApiPerson {
     private readonly cookie: string,
   ) {}
 
-  static async signIn(url: string, email = administrator.email, password = administrator.password): Promise<ApiPerson> {
+  static async signIn(
+    url: string,
+    email = administrator.email,
+    password = administrator.password,
+  ): Promise<ApiPerson> {
     const answer = await fetch(`${url}/api/session`, {
       method: 'POST',
       headers: { 'content-type': 'application/json' },

@@ -43,7 +43,13 @@ export async function openWindow(
   colorScheme: 'light' | 'dark' = 'light',
 ): Promise<{ context: BrowserContext; page: Page; errors: string[] }> {
   const touch = viewport.width < 600;
-  const context = await browser.newContext({ baseURL, viewport, colorScheme, hasTouch: touch, reducedMotion: 'reduce' });
+  const context = await browser.newContext({
+    baseURL,
+    viewport,
+    colorScheme,
+    hasTouch: touch,
+    reducedMotion: 'reduce',
+  });
   const page = await context.newPage();
   const errors: string[] = [];
   page.on('pageerror', (error) => errors.push(error.message));

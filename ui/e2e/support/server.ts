@@ -29,8 +29,12 @@ async function freePort(): Promise<number> {
 
 async function untilHealthy(url: string, child: ChildProcess): Promise<void> {
   for (let attempt = 0; attempt < 600; attempt += 1) {
-    if (child.exitCode !== null) throw new Error(`the service ended with ${child.exitCode} before it was well`);
-    const well = await fetch(`${url}/api/health`).then((answer) => answer.ok, () => false);
+    if (child.exitCode !== null)
+      throw new Error(`the service ended with ${child.exitCode} before it was well`);
+    const well = await fetch(`${url}/api/health`).then(
+      (answer) => answer.ok,
+      () => false,
+    );
     if (well) return;
     await pause(100);
   }
@@ -52,7 +56,9 @@ export async function startServer(demo: 'live' | 'off' = 'off'): Promise<TestSer
         DATA_DIR: dataDir,
         DEMO: demo,
         LOG_LEVEL: 'error',
-        ...(demo === 'off' ? { ADMIN_EMAIL: administrator.email, ADMIN_PASSWORD: administrator.password } : {}),
+        ...(demo === 'off'
+          ? { ADMIN_EMAIL: administrator.email, ADMIN_PASSWORD: administrator.password }
+          : {}),
       },
       stdio: ['ignore', 'inherit', 'inherit'],
     });
