@@ -3,6 +3,9 @@ import os from 'node:os';
 import path from 'node:path';
 import { alertSchema, type WireAlert, type WireTurn } from '@stubpost/shared';
 import { Reader } from '../src/database/reader';
+import { UnitOfWork } from '../src/database/unit-of-work';
+import { SweepHeartbeat } from '../src/health/sweep-heartbeat';
+import { TurnSweepJob } from '../src/turns/turn-sweep.job';
 import { TurnSweep } from '../src/turns/turn-sweep.service';
 import { listen } from './support/live';
 import { agentFor } from './support/sign-in';
@@ -88,7 +91,9 @@ describe('a turn with a step left out', () => {
     expect(await alertsOf(railroad)).toHaveLength(1);
     await passTo(railroad, 250);
     expect(await alertsOf(railroad)).toEqual([]);
-    expect(await alertsOf(railroad, 'cleared')).toMatchObject([{ cause: 'late-departure', clearedAt: at(250) }]);
+    expect(await alertsOf(railroad, 'cleared')).toMatchObject([
+      { cause: 'late-departure', clearedAt: at(250) },
+    ]);
     expect((await look(turn)).alerts).toEqual([]);
   });
 
@@ -158,7 +163,9 @@ describe('the sweep', () => {
     await passTo(railroad, 170);
     railroad.clock.set(Date.parse(at(290)));
     await railroad.app.get(TurnSweep).sweep(railroad.clock.now());
-    expect(await alertsOf(railroad)).toMatchObject([{ cause: 'late-departure', turnId: turn.id, raisedAt: at(290) }]);
+    expect(await alertsOf(railroad)).toMatchObject([
+      { cause: 'late-departure', turnId: turn.id, raisedAt: at(290) },
+    ]);
   });
 
   test('goes on after a stop without warning as if nothing had been', async () => {
@@ -198,6 +205,28 @@ describe('the sweep', () => {
     expect(answer.body).toMatchObject({ state: 'closed' });
   });
 
+  test('looks at all the others when one turn cannot be read, and then counts as failed', async () => {
+    const broken = await openTurn(await railroad.as('dispatcher'), { train: '1' });
+    await railroad.app
+      .get(UnitOfWork)
+      .run((transaction) =>
+        transaction.execute("UPDATE turn SET plan_id = 'gone', version = version + 1 WHERE id = ?", [
+          broken.id,
+        ]),
+      );
+    const turn = await aForgottenTurn();
+    const sweep = railroad.app.get(TurnSweep);
+    for (const seconds of [160, 200]) {
+      railroad.clock.set(Date.parse(at(seconds)));
+      await expect(sweep.sweep(railroad.clock.now())).rejects.toThrow('1 turns could not be looked at');
+    }
+    expect(await alertsOf(railroad)).toMatchObject([{ cause: 'late-departure', turnId: turn.id }]);
+    const heartbeat = railroad.app.get(SweepHeartbeat);
+    const before = heartbeat.lastSweepAt;
+    await railroad.app.get(TurnSweepJob).tick();
+    expect(heartbeat.lastSweepAt).toBe(before);
+  });
+
   test('says when nothing was heard of a train that is due, once', async () => {
     const turn = await openTurn(await railroad.as('dispatcher'), { arriveIn: 60, layoverSeconds: 3000 });
     await passTo(railroad, 235);
@@ -222,7 +251,9 @@ describe('a train that stands unsecured', () => {
     railroad.clock.set(Date.parse(at(460)));
     const secured = await say(turn, 'step-done', 460, { step: 'handbrake-set', reading: { count: 1 } });
     expect(secured.alerts.map((alert) => alert.cause)).not.toContain('unsecured');
-    expect(await alertsOf(railroad, 'cleared')).toMatchObject([{ cause: 'unsecured', lines: ['Gap: 60 s (1 min)'] }]);
+    expect(await alertsOf(railroad, 'cleared')).toMatchObject([
+      { cause: 'unsecured', lines: ['Gap: 60 s (1 min)'] },
+    ]);
   });
 
   test('cannot be set aside', async () => {
@@ -260,7 +291,12 @@ describe('an alert', () => {
     const answer = await post(alert, 'taking');
     const { name } = await railroad.as('dispatcher');
     expect(answer.status).toBe(200);
-    expect(answer.body).toMatchObject({ state: 'taken', takenBy: name, takenAt: at(240), version: alert.version + 1 });
+    expect(answer.body).toMatchObject({
+      state: 'taken',
+      takenBy: name,
+      takenAt: at(240),
+      version: alert.version + 1,
+    });
     await passTo(railroad, 260);
     expect(await alertsOf(railroad)).toMatchObject([{ id: alert.id, state: 'taken' }]);
   });
@@ -269,10 +305,16 @@ describe('an alert', () => {
     const alert = await raise();
     const until = (seconds: number) => ({ until: at(seconds), reason: 'Crew is on the way' });
     expect((await post(alert, 'setting-aside', until(240))).body).toMatchObject({ code: 'alert.until_past' });
-    expect((await post(alert, 'setting-aside', until(240 + 1801))).body).toMatchObject({ code: 'alert.until_far' });
+    expect((await post(alert, 'setting-aside', until(240 + 1801))).body).toMatchObject({
+      code: 'alert.until_far',
+    });
     expect((await post(alert, 'setting-aside', { until: at(300) })).status).toBe(400);
     const aside = await post(alert, 'setting-aside', until(300));
-    expect(aside.body).toMatchObject({ state: 'set-aside', setAsideUntil: at(300), setAsideReason: 'Crew is on the way' });
+    expect(aside.body).toMatchObject({
+      state: 'set-aside',
+      setAsideUntil: at(300),
+      setAsideReason: 'Crew is on the way',
+    });
     await passTo(railroad, 295);
     expect((await alertsOf(railroad))[0]).toMatchObject({ state: 'set-aside' });
     await passTo(railroad, 300);
@@ -290,7 +332,11 @@ describe('an alert', () => {
     const turn = { id: alert.turnId } as WireTurn;
     await say(turn, 'departure', 240);
     const closed = await post(alert, 'closing', { cause: 'Conductor was late' });
-    expect(closed.body).toMatchObject({ state: 'closed', closedCause: 'Conductor was late', closedAt: at(240) });
+    expect(closed.body).toMatchObject({
+      state: 'closed',
+      closedCause: 'Conductor was late',
+      closedAt: at(240),
+    });
     expect((await post(alert, 'taking')).status).toBe(409);
   });
 

@@ -3,7 +3,16 @@ import { Reader } from '../src/database/reader';
 import { UnitOfWork } from '../src/database/unit-of-work';
 import { TurnOpener } from '../src/turns/turn-opener';
 import { TurnSweep } from '../src/turns/turn-sweep.service';
-import { type Railroad, aRailroad, addHarbor, alertsOf, anEntryRequest, passTo, record, startOfTest } from './support/railroad';
+import {
+  type Railroad,
+  aRailroad,
+  addHarbor,
+  alertsOf,
+  anEntryRequest,
+  passTo,
+  record,
+  startOfTest,
+} from './support/railroad';
 
 describe('turns of a timetable', () => {
   let railroad: Railroad;
@@ -14,7 +23,11 @@ describe('turns of a timetable', () => {
   });
   afterEach(() => railroad.close());
 
-  const opening = (pairKey: string, minutes: number, fields: Partial<PlannedOpening> = {}): PlannedOpening => ({
+  const opening = (
+    pairKey: string,
+    minutes: number,
+    fields: Partial<PlannedOpening> = {},
+  ): PlannedOpening => ({
     pairKey,
     terminal: 'HBR',
     serviceDate: '2026-03-03',
@@ -63,7 +76,12 @@ describe('turns of a timetable', () => {
   test('that do not reverse have no steps, and first-outs and tie-ups have theirs', async () => {
     await openAll([
       opening('1>2', 5, { reverses: false }),
-      opening('>4', 20, { kind: 'first-out', inboundTrain: null, outboundTrain: '4', scheduledArrivalAt: null }),
+      opening('>4', 20, {
+        kind: 'first-out',
+        inboundTrain: null,
+        outboundTrain: '4',
+        scheduledArrivalAt: null,
+      }),
       opening('5>', 30, { kind: 'tie-up', outboundTrain: null, scheduledDepartureAt: null }),
     ]);
     const steps = new Map((await board()).map((turn) => [turn.kind, turn.steps.map((step) => step.key)]));
@@ -79,7 +97,9 @@ describe('turns of a timetable', () => {
     const counts = await openAll([opening('1>2', 9), opening('3>4', 24), opening('5>6', 40)], 'second');
     expect(counts).toEqual({ opened: 1, replanned: 1, kept: 1 });
     const turns = await board();
-    const arrivals = turns.map((turn) => (Date.parse(turn.inbound?.scheduledArrivalAt ?? '') - startOfTest) / 60_000);
+    const arrivals = turns.map(
+      (turn) => (Date.parse(turn.inbound?.scheduledArrivalAt ?? '') - startOfTest) / 60_000,
+    );
     expect(arrivals).toEqual([5, 24, 40]);
   });
 
@@ -105,5 +125,18 @@ describe('turns of a timetable', () => {
     await railroad.app.get(TurnSweep).sweep(railroad.clock.now());
     expect(await alertsOf(railroad)).toEqual([]);
     expect(await railroad.app.get(Reader).query('SELECT * FROM alert_watch')).toEqual([]);
+  });
+
+  test('that are opened after their time raise nothing until somebody records something', async () => {
+    await openAll([opening('1>2', -60), opening('3>4', -10)]);
+    await passTo(railroad, 60);
+    const [gone, going] = await railroad.app
+      .get(Reader)
+      .query<{ id: string }>('SELECT id FROM turn ORDER BY span_from');
+    const causes = async () => (await alertsOf(railroad)).map((alert) => [alert.turnId, alert.cause]);
+    expect(new Set((await causes()).map(([id]) => id))).toEqual(new Set([going?.id]));
+    expect((await board()).map((turn) => turn.id)).toEqual([going?.id]);
+    await record(await railroad.as('conductor'), gone?.id ?? '', anEntryRequest('arrival', -3600));
+    expect(new Set((await causes()).map(([id]) => id))).toEqual(new Set([going?.id, gone?.id]));
   });
 });

@@ -11,8 +11,8 @@ import { entryFrom } from './entry-from-body';
 import { type TurnFile, turnFileFrom } from './turn-file';
 import { type RawTurn, type TurnRecord, turnRecordOf } from './turn-record';
 
-/** More files than this are not kept in memory; the ones not used for longest go first. Our choice, some 40 MB. */
-const filesKept = 5000;
+/** More files than this are not kept in memory; the ones not used for longest go first. Our choice, some 50 MB. */
+const filesKept = 2000;
 
 /** Which version of a turn is wanted. */
 export interface TurnVersion {

@@ -5,7 +5,7 @@ import { ChangeLog } from '../database/change-log';
 import type { Transaction } from '../database/unit-of-work';
 import { PlansService } from '../plans/plans.service';
 import type { TurnRecord } from './turn-record';
-import { spanOf } from './turn-span';
+import { type TurnTimes, spanOf } from './turn-span';
 import { TurnRepository } from './turn.repository';
 
 /** Turns that a timetable plans, to be opened. The terminals must exist. */
@@ -110,11 +110,10 @@ export class TurnOpener {
     const times = { ...turn, ...planned };
     await this.turns.replan(transaction, {
       ...times,
-      ...spanOf(times),
+      ...openedSpan(times, now),
       track: planned.plannedTrack,
       set: planned.plannedSet,
       withdrawnAt: null,
-      settledAt: null,
     });
     return 'replanned';
   }
@@ -189,9 +188,14 @@ function newTurn(
     crew: [],
     carriedCrew: [],
     ...times,
-    ...spanOf(times),
-    settledAt: null,
+    ...openedSpan(times, context.now),
     withdrawnAt: null,
     createdAt: context.now,
   };
+}
+
+/** A turn that is opened after its time is left alone until somebody records something: nobody can act on it any more. */
+function openedSpan(times: TurnTimes, now: Instant): Pick<TurnRecord, 'spanFrom' | 'spanTo' | 'settledAt'> {
+  const span = spanOf(times);
+  return { ...span, settledAt: span.spanTo < now ? now : null };
 }

@@ -77,33 +77,25 @@ export class TurnSweep {
     const memories = await this.watches.findAll();
     const failures: unknown[] = [];
     const due: string[] = [];
-    for (const chunk of chunksOf(open, looksAtOnce)) {
-      due.push(...(await this.look(chunk, { memories, now, failures })));
+    await inChunks(open, looksAtOnce, failures, async (turns) => {
+      due.push(...(await this.look(turns, memories, now)));
       await letOthersRun();
-    }
-    for (const chunk of chunksOf(due, writesAtOnce)) await this.write(chunk, now);
+    });
+    await inChunks(due, writesAtOnce, failures, (ids) => this.write(ids, now));
     const left = await this.sweepable.findLeftBehind();
-    for (const chunk of chunksOf(left, writesAtOnce)) await this.release(chunk, now);
+    await inChunks(left, writesAtOnce, failures, (ids) => this.release(ids, now));
     if (failures.length > 0)
       throw new AggregateError(failures, `${failures.length} turns could not be looked at`);
     return { looked: open.length, written: due.length + left.length };
   }
 
   /** Ids of the turns among some on which there is something to write. */
-  private async look(
-    turns: readonly TurnVersion[],
-    context: { memories: Memories; now: Instant; failures: unknown[] },
-  ): Promise<string[]> {
+  private async look(turns: readonly TurnVersion[], memories: Memories, now: Instant): Promise<string[]> {
     const files = await this.files.findAll(turns);
     const due: string[] = [];
     for (const file of files.values()) {
-      try {
-        const memories = context.memories.get(file.record.id) ?? new Map<AlertCause, AlertMemory>();
-        if (await this.isDue(file, memories, context.now)) due.push(file.record.id);
-      } catch (error) {
-        // The others are looked at all the same; the run as a whole then counts as failed.
-        context.failures.push(error);
-      }
+      const { id } = file.record;
+      if (await this.isDue(file, memories.get(id) ?? new Map<AlertCause, AlertMemory>(), now)) due.push(id);
     }
     return due;
   }
@@ -153,8 +145,23 @@ export class TurnSweep {
   }
 }
 
-function chunksOf<Item>(items: readonly Item[], size: number): Item[][] {
-  const chunks: Item[][] = [];
-  for (let start = 0; start < items.length; start += size) chunks.push(items.slice(start, start + size));
-  return chunks;
+/**
+ * Works through items in chunks. When a chunk fails its items are tried one by one, so that one that cannot be worked
+ * on does not keep the others from it; what failed is gathered, and the run as a whole then counts as failed.
+ */
+async function inChunks<Item>(
+  items: readonly Item[],
+  size: number,
+  failures: unknown[],
+  work: (chunk: readonly Item[]) => Promise<void>,
+): Promise<void> {
+  for (let start = 0; start < items.length; start += size) {
+    const chunk = items.slice(start, start + size);
+    try {
+      await work(chunk);
+    } catch (error) {
+      if (chunk.length === 1) failures.push(error);
+      else await inChunks(chunk, 1, failures, work);
+    }
+  }
 }

@@ -4,6 +4,7 @@ import { LatenessRules } from '../alerts/lateness-rules';
 import type { TurnFile } from './turn-file';
 import { lookOf, turnMomentOf } from './turn-moment';
 import { wireTurnOf } from './turn.mapper';
+import { isOver } from './watched-turn';
 
 /** Figures that change with the clock are made anew this often at most, for all who ask. */
 export const viewMilliseconds = 5000;
@@ -13,6 +14,8 @@ interface KeptView {
   stretch: number;
   look: string;
   json: string;
+  /** Whether the clock changes nothing about it any more. */
+  isFinal: boolean;
 }
 
 /**
@@ -29,13 +32,13 @@ export class TurnViews {
   async jsonOf(file: TurnFile, now: Instant): Promise<string> {
     const stretch = Math.floor(now / viewMilliseconds);
     const known = this.kept.get(file);
-    if (known !== undefined && (known.stretch === stretch || file.record.settledAt !== null))
-      return known.json;
+    if (known !== undefined && (known.stretch === stretch || known.isFinal)) return known.json;
     const { lateness } = await this.rules.of(file.record.terminalCode, file.record.zone);
     const moment = turnMomentOf(file, lateness, now);
     const look = lookOf(moment);
     const json = known?.look === look ? known.json : JSON.stringify(wireTurnOf(file, moment, lateness));
-    this.kept.set(file, { stretch, look, json });
+    const isFinal = file.record.settledAt !== null && isOver(file.facts, now);
+    this.kept.set(file, { stretch, look, json, isFinal });
     return json;
   }
 }
