@@ -72,6 +72,9 @@ export default defineConfig({
     globals: true,
     css: false,
     setupFiles: ['./src/testing/setup.ts'],
+    // Deadlines, not waits: whole pages are drawn, also on a busy machine.
+    testTimeout: 30_000,
+    hookTimeout: 30_000,
     include: ['src/**/*.test.{ts,tsx}'],
   },
 });

@@ -1,4 +1,4 @@
-import { useSession } from '../lib/session';
+import { SignedInAs, useSession } from '../lib/session';
 import { DeskShell } from './desk-shell';
 import { homeOf } from '../lib/home';
 import { PhoneShell } from './phone-shell';
@@ -8,5 +8,5 @@ import { PlainShell } from './plain-shell';
 export function AnyShell() {
   const { person, state } = useSession();
   if (state !== 'signed-in' || person === null) return <PlainShell />;
-  return homeOf(person) === '/my' ? <PhoneShell /> : <DeskShell />;
+  return <SignedInAs person={person}>{homeOf(person) === '/my' ? <PhoneShell /> : <DeskShell />}</SignedInAs>;
 }

@@ -4,7 +4,7 @@ import { Navigate, Outlet, useLocation } from 'react-router-dom';
 import { EmptyState, ErrorState, LoadingRows } from '../components/page-states';
 import { PageHeader } from '../components/page-header';
 import { setupQuery } from '../lib/service-facts';
-import { sessionQuery, useSession } from '../lib/session';
+import { sessionQuery, SignedInAs, useSession } from '../lib/session';
 import { useTerminalChoice } from '../lib/terminal-choice';
 import { homeOf } from '../lib/home';
 import { PlainShell } from './plain-shell';
@@ -35,8 +35,14 @@ function ToSignIn() {
 
 /** Lets on whoever is signed in; leads everybody else to the sign-in page and back again. */
 export function SignedInOnly() {
-  const { state } = useSession();
-  if (state === 'signed-in') return <Outlet />;
+  const { state, person } = useSession();
+  if (person !== null) {
+    return (
+      <SignedInAs person={person}>
+        <Outlet />
+      </SignedInAs>
+    );
+  }
   return state === 'signed-out' ? <ToSignIn /> : <Waiting />;
 }
 

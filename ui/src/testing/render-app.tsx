@@ -45,7 +45,7 @@ export function renderRoutes(routes: RouteObject[], options: RenderAppOptions = 
   client.setDefaultOptions({ queries: { ...queries, retry: false } });
   client.setQueryData(queryKeys.session.all, person);
   const router = createMemoryRouter(routes, { initialEntries: [path] });
-  const user = userEvent.setup();
+  const user = userEvent.setup({ delay: null });
   const result = render(
     <Providers client={client}>
       <RouterProvider router={router} />

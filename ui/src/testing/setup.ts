@@ -1,5 +1,5 @@
 import '@testing-library/jest-dom/vitest';
-import { cleanup } from '@testing-library/react';
+import { cleanup, configure } from '@testing-library/react';
 import { afterEach, beforeEach } from 'vitest';
 import { forgetPreferences } from '../lib/preferences';
 import { FakeEventSource } from './fake-event-source';
@@ -38,6 +38,9 @@ class StillObserver {
 window.matchMedia ??= neverMatches;
 globalThis.ResizeObserver ??= StillObserver;
 Element.prototype.scrollIntoView ??= () => undefined;
+
+// How long a page may take until a test calls it wrong; nothing waits that long when it is right.
+configure({ asyncUtilTimeout: 10_000 });
 
 beforeEach(() => {
   localStorage.clear();
