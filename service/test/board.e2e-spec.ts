@@ -1,6 +1,14 @@
 import { boardSchema, type FoundTurn, type WireBoard, type WireTurn } from '@stubpost/shared';
 import { SetsService } from '../src/sets/sets.service';
-import { type Railroad, aRailroad, addHarbor, anEntryRequest, at, openTurn, record } from './support/railroad';
+import {
+  type Railroad,
+  aRailroad,
+  addHarbor,
+  anEntryRequest,
+  at,
+  openTurn,
+  record,
+} from './support/railroad';
 
 describe('GET /api/board', () => {
   let railroad: Railroad;
@@ -11,7 +19,8 @@ describe('GET /api/board', () => {
   });
   afterEach(() => railroad.close());
 
-  const ask = async (query = '') => (await railroad.as('dispatcher')).agent.get(`/api/board?terminal=HBR${query}`);
+  const ask = async (query = '') =>
+    (await railroad.as('dispatcher')).agent.get(`/api/board?terminal=HBR${query}`);
   const turnsOf = (body: unknown): string[] =>
     (body as WireBoard).turns.map((turn) => turn.outbound?.train ?? turn.inbound?.train ?? '');
 
@@ -137,8 +146,16 @@ describe('GET /api/find', () => {
       request: { units: [{ number: '5512', kind: 'cab-car' }] },
       now: railroad.clock.now(),
     });
-    const turn: WireTurn = await openTurn(await railroad.as('dispatcher'), { set: 'A7', track: '11', train: '1742' });
-    await record(conductor, turn.id, anEntryRequest('crew', 0, { person: conductor.personId, as: 'conductor' }));
+    const turn: WireTurn = await openTurn(await railroad.as('dispatcher'), {
+      set: 'A7',
+      track: '11',
+      train: '1742',
+    });
+    await record(
+      conductor,
+      turn.id,
+      anEntryRequest('crew', 0, { person: conductor.personId, as: 'conductor' }),
+    );
     expect(await find('1742')).toEqual([
       {
         turnId: turn.id,
