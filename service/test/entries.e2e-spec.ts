@@ -5,7 +5,15 @@ import { UnitOfWork } from '../src/database/unit-of-work';
 import { PeopleService } from '../src/people/people.service';
 import { TerminalsService } from '../src/terminals/terminals.service';
 import { signInAs } from './support/sign-in';
-import { type Railroad, aRailroad, addHarbor, anEntryRequest, at, openTurn, record } from './support/railroad';
+import {
+  type Railroad,
+  aRailroad,
+  addHarbor,
+  anEntryRequest,
+  at,
+  openTurn,
+  record,
+} from './support/railroad';
 
 let railroad: Railroad;
 
@@ -164,16 +172,28 @@ describe('taking back', () => {
     const turn = await open();
     const done = anEntryRequest('step-done', 60, { step: 'handbrake-set', reading: { count: 1 } });
     await post('conductor', turn, done);
-    const back = await post('conductor', turn, anEntryRequest('withdrawn', 65, { target: done.id, reason: 'wrong step' }));
+    const back = await post(
+      'conductor',
+      turn,
+      anEntryRequest('withdrawn', 65, { target: done.id, reason: 'wrong step' }),
+    );
     const step = (back.body as EntryReceipt).turn.steps.find((each) => each.key === 'handbrake-set');
     expect(step?.state).toBe('withdrawn');
     const again = anEntryRequest('step-done', 70, { step: 'handbrake-set', reading: { count: 1 } });
     await post('conductor', turn, again);
     await post('conductor', turn, anEntryRequest('departure', 900));
-    const late = await post('conductor', turn, anEntryRequest('withdrawn', 905, { target: again.id, reason: 'other' }));
+    const late = await post(
+      'conductor',
+      turn,
+      anEntryRequest('withdrawn', 905, { target: again.id, reason: 'other' }),
+    );
     expect(late.status).toBe(403);
     expect(late.body).toMatchObject({ code: 'entry.after_departure' });
-    const before = await post('conductor', turn, anEntryRequest('withdrawn', 890, { target: again.id, reason: 'other' }));
+    const before = await post(
+      'conductor',
+      turn,
+      anEntryRequest('withdrawn', 890, { target: again.id, reason: 'other' }),
+    );
     expect(before.status).toBe(201);
   });
 
@@ -233,8 +253,12 @@ describe('the engineer of a turn', () => {
       expect(answer.status).toBe(403);
       expect(answer.body).toMatchObject({ code: 'entry.at_the_controls' });
     }
-    expect((await post('engineer', turn, anEntryRequest('step-done', 10, { step: 'cab-brake-check' }))).status).toBe(201);
-    expect((await post('conductor', turn, anEntryRequest('step-done', 20, { step: 'engineer-in-cab' }))).status).toBe(201);
+    expect(
+      (await post('engineer', turn, anEntryRequest('step-done', 10, { step: 'cab-brake-check' }))).status,
+    ).toBe(201);
+    expect(
+      (await post('conductor', turn, anEntryRequest('step-done', 20, { step: 'engineer-in-cab' }))).status,
+    ).toBe(201);
   });
 
   test('records nothing from the cab on until the set has come in somewhere, and later enters it later', async () => {
@@ -287,7 +311,11 @@ describe('the log', () => {
   test('is a chain that anybody can work out again', async () => {
     const turn = await open();
     for (const seconds of [0, 10, 20]) {
-      await post('conductor', turn, anEntryRequest('note', seconds, { note: `Zürich → ${seconds} "quoted" \u2028` }));
+      await post(
+        'conductor',
+        turn,
+        anEntryRequest('note', seconds, { note: `Zürich → ${seconds} "quoted" \u2028` }),
+      );
     }
     const rows = await railroad.app
       .get(Reader)

@@ -30,7 +30,7 @@ export async function listen(
   personId: string,
   options: { terminal?: string; lastEventId?: number; byQuery?: boolean } = {},
 ): Promise<Listening> {
-  const server = app.getHttpServer() as http.Server;
+  const server = app.getHttpServer();
   if (!server.listening) await app.listen(0, '127.0.0.1');
   const { port } = server.address() as AddressInfo;
   const { token } = await app.get(SignInService).openFor(personId, 'test');
@@ -53,7 +53,8 @@ export async function listen(
 
 function follow(request: http.ClientRequest, response: http.IncomingMessage): Listening {
   const events: ReceivedEvent[] = [];
-  const waiting: { matches: (event: ReceivedEvent) => boolean; resolve: (event: ReceivedEvent) => void }[] = [];
+  const waiting: { matches: (event: ReceivedEvent) => boolean; resolve: (event: ReceivedEvent) => void }[] =
+    [];
   let isClosed = false;
   let rest = '';
   response.setEncoding('utf8');

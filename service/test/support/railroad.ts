@@ -49,7 +49,7 @@ export async function addHarbor(app: NestExpressApplication): Promise<void> {
 /** Moves the clock to a second of the test, with a sweep every 5 s on the way, as the timer would have it. */
 export async function passTo(railroad: Railroad, seconds: number): Promise<void> {
   const end = startOfTest + seconds * 1000;
-  for (let now = railroad.clock.now(); now < end; ) {
+  for (let now = railroad.clock.now(); now < end;) {
     now = Math.min(end, now + 5000);
     railroad.clock.set(now);
     await railroad.app.get(TurnSweep).sweep(now);

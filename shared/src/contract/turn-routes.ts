@@ -23,7 +23,8 @@ const boardRoutes: RouteSpec[] = [
     permission: 'board.read',
     terminal: 'query',
     area: 'Turns',
-    summary: 'Turns of a terminal in a half-open range of instants (20 min back to 4 h ahead), or of a service day',
+    summary:
+      'Turns of a terminal in a half-open range of instants (20 min back to 4 h ahead), or of a service day',
     query: boardQuerySchema,
     response: boardSchema,
     refusals: [404],
