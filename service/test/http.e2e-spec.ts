@@ -5,6 +5,7 @@ import { pathForLog } from '../src/common/log.module';
 import { bootApp, type Booted } from './support/boot';
 import { signIn } from './support/sign-in';
 import { temporaryFolder } from './support/temporary-folder';
+import { testCertificate, testKey } from './support/tls';
 
 describe('answers of the service', () => {
   let booted: Booted;
@@ -103,6 +104,30 @@ describe('headers', () => {
     const headers = await headersWith({ PUBLIC_URL: 'https://turns.example.org' });
     expect(headers['strict-transport-security']).toContain('max-age=31536000');
     expect(headers['content-security-policy']).toContain('upgrade-insecure-requests');
+  });
+});
+
+describe('a service with a certificate', () => {
+  test('serves https itself, with a cookie bound to the host', async () => {
+    const temporary = temporaryFolder();
+    const [cert, key] = ['cert.pem', 'key.pem'].map((name) => path.join(temporary.folder, name));
+    writeFileSync(cert ?? '', testCertificate);
+    writeFileSync(key ?? '', testKey);
+    const environment = {
+      TLS_CERT: cert,
+      TLS_KEY: key,
+      ADMIN_EMAIL: 'boss@example.org',
+      ADMIN_PASSWORD: 'seven tall lanterns',
+    };
+    const booted = await bootApp({ environment });
+    const answer = await supertest(booted.app.getHttpServer())
+      .post('/api/session')
+      .ca(testCertificate)
+      .send({ email: 'boss@example.org', password: 'seven tall lanterns' })
+      .expect(200);
+    expect(String(answer.headers['set-cookie'])).toMatch(/^__Host-.*; Secure/);
+    await booted.close();
+    temporary.remove();
   });
 });
 

@@ -63,6 +63,30 @@ describe('the process', () => {
     socket.destroy();
   });
 
+  test('ends within five seconds of SIGTERM with a live stream open, and the stream ends', async () => {
+    const email = 'boss@example.org';
+    const password = 'seven tall lanterns';
+    const service = start({ PORT: String(await freePort()), ADMIN_EMAIL: email, ADMIN_PASSWORD: password });
+    await untilHealthy(service);
+    const post = (address: string, body: object, cookie = '') =>
+      fetch(`${service.url}${address}`, {
+        method: 'POST',
+        headers: { 'Content-Type': 'application/json', Cookie: cookie },
+        body: JSON.stringify(body),
+      });
+    const cookie =
+      (await post('/api/session', { email, password })).headers.get('set-cookie')?.split(';')[0] ?? '';
+    await post('/api/terminals', { code: 'HBR', name: 'Harbor', zone: 'UTC' }, cookie);
+    const stream = await fetch(`${service.url}/api/live?terminal=HBR`, { headers: { Cookie: cookie } });
+    expect(stream.headers.get('content-type')).toContain('text/event-stream');
+    const read = stream.text().catch(() => 'cut off');
+    const toldAt = performance.now();
+    service.child.kill('SIGTERM');
+    expect(await service.ended).toBe(0);
+    expect(performance.now() - toldAt).toBeLessThan(5000);
+    await read;
+  });
+
   test('runs twice side by side with other ports and folders', async () => {
     const first = start({ PORT: String(await freePort()), DATA_DIR: path.join(temporary.folder, 'a') });
     const second = start({ PORT: String(await freePort()), DATA_DIR: path.join(temporary.folder, 'b') });

@@ -1,7 +1,7 @@
 import type { IncomingMessage, ServerResponse } from 'node:http';
 import { type DynamicModule, Module } from '@nestjs/common';
 import { LoggerModule } from 'nestjs-pino';
-import { stdTimeFunctions } from 'pino';
+import { type LogFn, type Logger as PinoLogger, stdTimeFunctions } from 'pino';
 import { Config } from '../config/config';
 import { requestIdOf } from './request-id';
 
@@ -19,6 +19,7 @@ export class LogModule {
           level: config.logLevel,
           timestamp: stdTimeFunctions.isoTime,
           base: null,
+          hooks: { logMethod: dropWiring },
           genReqId: requestIdOf,
           serializers: {
             req: (request: { id: string; method: string; url: string }) => ({
@@ -36,6 +37,18 @@ export class LogModule {
       }),
     });
   }
+}
+
+/** Parts of the framework that tell at every start how it wires itself up. */
+const wiring = ['InstanceLoader', 'RouterExplorer', 'RoutesResolver', 'NestFactory'];
+const infoLevel = 30;
+
+function dropWiring(this: PinoLogger, args: Parameters<LogFn>, log: LogFn, level: number): void {
+  const [facts] = args as unknown[];
+  const context =
+    typeof facts === 'object' && facts !== null && 'context' in facts ? facts.context : undefined;
+  if (level <= infoLevel && wiring.includes(String(context))) return;
+  log.apply(this, args);
 }
 
 /** The path without its query, and with the token of a one-time link taken out. */

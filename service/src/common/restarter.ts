@@ -1,3 +1,4 @@
+import { AsyncResource } from 'node:async_hooks';
 import { Injectable } from '@nestjs/common';
 
 /** Lets a part of the service ask whoever runs it to start it anew in the same process. */
@@ -7,7 +8,8 @@ export class Restarter {
 
   /** What `main` does when a restart is asked for. */
   onRequest(handler: () => void): void {
-    this.handler = handler;
+    // Called in the context it comes from: what is started anew is no part of the request that asked for it.
+    this.handler = AsyncResource.bind(handler);
   }
 
   /** Asks for a restart; false when nobody runs the service that could do it. */
