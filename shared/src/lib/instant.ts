@@ -26,11 +26,18 @@ export function formatInstant(instant: Instant): string {
   return new Date(instant).toISOString();
 }
 
-const isoInstant = /^\d{4}-\d{2}-\d{2}T\d{2}:\d{2}(:\d{2}(\.\d{1,9})?)?(Z|[+-]\d{2}:\d{2})$/;
+const isoInstant = /^(\d{4}-\d{2}-\d{2})T\d{2}:\d{2}(:\d{2}(\.\d{1,9})?)?(Z|[+-]\d{2}:\d{2})$/;
 
 /** Reads ISO 8601 with a zone (`Z` or an offset); anything else, also a date that does not exist, is null. */
 export function parseInstant(text: string): Instant | null {
-  if (!isoInstant.test(text)) return null;
+  const date = isoInstant.exec(text)?.[1];
+  if (date === undefined || !isDay(date)) return null;
   const instant = Date.parse(text);
   return Number.isNaN(instant) ? null : instant;
+}
+
+/** Whether a day exists: the engine takes 30 February for 2 March. */
+function isDay(date: CalendarDate): boolean {
+  const midnight = Date.parse(`${date}T00:00:00Z`);
+  return !Number.isNaN(midnight) && formatInstant(midnight).startsWith(date);
 }
