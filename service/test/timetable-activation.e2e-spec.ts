@@ -288,6 +288,18 @@ describe('a timetable that takes over', () => {
     expect(await board()).toHaveLength(3);
   });
 
+  test('is taken back with all that was ordered for it since', async () => {
+    const second = await ready(spring);
+    await activate(second).expect(200);
+    const other = { ...harbor, name: 'Harbor' };
+    const again = await activate(second, { from: today, terminals: [other] }).expect(200);
+    expect((again.body as WireTimetable).rollBackTo?.id).toBe(first.id);
+    const back = await admin.agent.post(`/api/timetables/${second.id}/roll-back`).expect(200);
+    expect((back.body as WireTimetable).id).toBe(first.id);
+    expect((await stateOf(second)).state).toBe('ready');
+    expect(await board()).toHaveLength(2);
+  });
+
   test('is not taken back when another came after it, or when there is none before', async () => {
     const second = await ready(spring);
     await activate(second).expect(200);

@@ -53,15 +53,14 @@ export class TimetableActivations {
     });
   }
 
-  /** Takes the newest order back, which must be one for this timetable; gives the id of the one that runs again. */
+  /** Takes the newest orders back, which must be for this timetable; gives the id of the one that runs again. */
   async rollBack(id: string, person: Orderer): Promise<string> {
     await this.readModel.require(id);
     requireEverywhere(person);
     return this.unitOfWork.run(async (transaction) => {
       const orders = await this.timetables.findStanding(transaction);
-      const newest = orders.at(-1);
-      const before = orders.at(-2);
-      if (newest?.timetableId !== id) {
+      const before = orders.findLast((order) => order.timetableId !== id);
+      if (orders.at(-1)?.timetableId !== id) {
         throw new Refusal({
           code: 'timetable.not_newest',
           message: 'another timetable was made active after this one',
@@ -74,7 +73,9 @@ export class TimetableActivations {
         });
       }
       const now = this.clock.now();
-      await this.timetables.takeBack(transaction, { number: newest.number, by: person.name, now });
+      for (const { number } of orders.filter((order) => order.number > before.number)) {
+        await this.timetables.takeBack(transaction, { number, by: person.name, now });
+      }
       await this.days.rollIn(transaction, now);
       return before.timetableId;
     });

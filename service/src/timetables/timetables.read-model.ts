@@ -68,7 +68,8 @@ export class TimetablesReadModel {
     const orders = await this.standingOrders();
     const own = orders.filter((order) => order.timetableId === id).at(-1);
     const newest = orders.at(-1);
-    const before = newest?.timetableId === id ? orders.at(-2) : undefined;
+    const before =
+      newest?.timetableId === id ? orders.findLast((order) => order.timetableId !== id) : undefined;
     return {
       ...this.headOf(row, orders),
       problems: JSON.parse(row.problems) as ImportProblem[],

@@ -79,7 +79,8 @@ export const timetableRoutes: readonly RouteSpec[] = [
     path: '/api/timetables/:id/roll-back',
     permission: 'timetables.import',
     area,
-    summary: 'Take the newest activation back; the timetable before it runs again and is the answer',
+    summary:
+      'Take a timetable back that was made active last; the one before it runs again and is the answer',
     response: timetableSchema,
     refusals: [404, 409],
   },
