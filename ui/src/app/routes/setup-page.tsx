@@ -1,6 +1,6 @@
-import { PageHeader } from '../../components/page-header';
+import { SetupScreen } from '../../features/setup/components/setup-screen';
 
-/** Heading alone, until the parts of the page stand. */
+/** What terminals and trains are made of. */
 export function SetupPage() {
-  return <PageHeader title="Setup" />;
+  return <SetupScreen />;
 }
