@@ -6,7 +6,7 @@ import { childEnvironment } from './child-environment.mjs';
 import { ROOT, inRoot, packageCommand } from './paths.mjs';
 import { countReport, countTap, judgeRun } from './report.mjs';
 
-const LIMIT_MILLISECONDS = 9 * 60_000;
+const LIMIT_MILLISECONDS = 11 * 60_000;
 const SCRIPTS = 'service/scripts';
 const reports = mkdtempSync(join(tmpdir(), 'stubpost-reports-'));
 process.on('exit', () => rmSync(reports, { recursive: true, force: true }));
