@@ -57,7 +57,11 @@ export function madeUuid(): string {
 type Overrides<Kind extends EntryKind> = Parameters<typeof anEntry<Kind>>[1];
 
 /** An entry observed at a clock time of the fixed day, heard two seconds later. */
-export function entryAt<Kind extends EntryKind>(kind: Kind, clock: string, overrides?: Overrides<Kind>): Entry {
+export function entryAt<Kind extends EntryKind>(
+  kind: Kind,
+  clock: string,
+  overrides?: Overrides<Kind>,
+): Entry {
   return anEntry(kind, { id: madeUuid(), observedAt: clockAt(clock), ...overrides } as Overrides<Kind>);
 }
 
@@ -79,7 +83,11 @@ const engineer = { as: 'engineer', personId: 'p-engineer', name: 'P. Varga' } as
 export function aWireTurn(parts: WireTurnParts, now: Instant): WireTurn {
   const planned = aTurn(parts.planned);
   const entries = (parts.entries ?? []).filter((entry) => entry.receivedAt <= now);
-  const carried = (parts.crew ?? [conductor, engineer]).map((member) => ({ ...member, since: null, carriedOver: true }));
+  const carried = (parts.crew ?? [conductor, engineer]).map((member) => ({
+    ...member,
+    since: null,
+    carriedOver: true,
+  }));
   const facts = turnFrom(planned, stepsFor(wirePlan.steps, planned), entries, carried);
   const forecast = forecastTurn(forecastInputOf(facts), now);
   const assessed = assessedTurnOf(facts, forecast, now);
@@ -112,9 +120,13 @@ export function aWireTurn(parts: WireTurnParts, now: Instant): WireTurn {
     },
     alerts: [...(parts.alerts ?? [])],
     blueSignal:
-      facts.blueSignal === null ? null : { since: formatInstant(facts.blueSignal.since), by: facts.blueSignal.by },
+      facts.blueSignal === null
+        ? null
+        : { since: formatInstant(facts.blueSignal.since), by: facts.blueSignal.by },
     annulled:
-      facts.annulled === null ? null : { at: formatInstant(facts.annulled.at), reason: facts.annulled.reason },
+      facts.annulled === null
+        ? null
+        : { at: formatInstant(facts.annulled.at), reason: facts.annulled.reason },
     securement: wireSecurementOf(facts, now),
     shortByDesign: shortByDesignSeconds(assessed) > 0,
     lastHeardAt: textOf(facts.lastHeardAt),

@@ -18,7 +18,11 @@ export function AlertsPage() {
       <PageHeader hidden title={`Alerts, ${terminal.name}`} />
       <AlertsView
         terminal={terminal}
-        onOpen={(turnId) => void navigate(panelAddress(turnId, terminal.code, new URLSearchParams()), { state: { backTo: `${pathname}${search}` } })}
+        onOpen={(turnId) =>
+          void navigate(panelAddress(turnId, terminal.code, new URLSearchParams()), {
+            state: { backTo: `${pathname}${search}` },
+          })
+        }
       />
     </>
   );

@@ -29,7 +29,10 @@ export function BoardPage() {
   if (isPending) return <LoadingRows what="terminals" />;
   if (turnId !== undefined && query.get('terminal') === null) return <ToOwnTerminal turnId={turnId} />;
   if (terminal === null) {
-    const words = terminals.length === 0 ? 'There is no terminal yet.' : 'There is no such terminal, or you may not look at it.';
+    const words =
+      terminals.length === 0
+        ? 'There is no terminal yet.'
+        : 'There is no such terminal, or you may not look at it.';
     return <EmptyState words={words} />;
   }
   return <TerminalBoard key={terminal.code} terminal={terminal} />;
@@ -56,7 +59,8 @@ function TerminalBoard({ terminal }: { terminal: WireTerminal }) {
   const { state } = useLocation();
   const isNarrow = useMedia(narrow);
   const isFull = turnId !== undefined && (isNarrow || query.get('page') === 'full');
-  const open = (id: string): void => void navigate(panelAddress(id, terminal.code, query), { replace: turnId !== undefined, state });
+  const open = (id: string): void =>
+    void navigate(panelAddress(id, terminal.code, query), { replace: turnId !== undefined, state });
   const desk = useDeskActs(terminal, open);
   const close = (): void => {
     const back = (state as { backTo?: unknown } | null)?.backTo;

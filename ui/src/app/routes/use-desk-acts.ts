@@ -7,7 +7,13 @@ import { useMay, usePerson } from '../../lib/session';
 import type { TurnNow } from '../../lib/turn/turn-now';
 import { foremostAlert } from '../../lib/turn/turn-times';
 
-const formOf: Record<string, EntryAct> = { tick: 'step', relay: 'step', note: 'note', track: 'track', set: 'set' };
+const formOf: Record<string, EntryAct> = {
+  tick: 'step',
+  relay: 'step',
+  note: 'note',
+  track: 'track',
+  set: 'set',
+};
 
 /** What the desk is doing: the form that is open, the answer to the last entry, the alert being set aside. */
 export function useDeskActs(terminal: WireTerminal, open: (turnId: string) => void) {

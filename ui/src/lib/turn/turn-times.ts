@@ -77,6 +77,15 @@ export function isFarOffPlan(turn: TurnNow): boolean {
   return turn.state === 'scheduled' || turn.annulled !== null;
 }
 
+/**
+ * Slack as a screen may show it: none for a turn that is over or of which nothing is heard, and none once a train that
+ * is ready stands past its departure, because then no work is left that could wait.
+ */
+export function shownSlack(turn: TurnNow): number | null {
+  if (isOver(turn) || turn.health === 'no-word') return null;
+  return turn.health === 'late' && (turn.slackSeconds ?? 0) >= 0 ? null : turn.slackSeconds;
+}
+
 /** Gone or struck from the plan: nothing on the board waits for it. */
 export function isOver(turn: TurnNow): boolean {
   return turn.departedAt !== null || turn.annulled !== null || turn.state === 'closed';

@@ -49,9 +49,7 @@ export function AlertList(props: AlertListProps) {
       Home: () => move(alerts[0]),
       End: () => move(alerts.at(-1)),
       Enter: () => props.onOpen(alert),
-      ...(letterKeys && props.mayAct
-        ? { t: () => props.onTake(alert), s: () => props.onForm(alert) }
-        : {}),
+      ...(letterKeys && props.mayAct ? { t: () => props.onTake(alert), s: () => props.onForm(alert) } : {}),
     };
     const act = acts[event.key] ?? acts[event.key.toLowerCase()];
     if (act === undefined) return;
@@ -64,7 +62,7 @@ export function AlertList(props: AlertListProps) {
       <table className={styles.alerts} role="grid" ref={table} onKeyDown={onKeyDown}>
         <caption className="unseen">Standing alerts and alerts that wait for a cause</caption>
         <colgroup>
-          {[96, 54, 160, 0, 224, 110, 132].map((width, index) => (
+          {[98, 58, 162, 0, 224, 110, 132].map((width, index) => (
             <col key={index} {...(width === 0 ? {} : { style: { width } })} />
           ))}
         </colgroup>

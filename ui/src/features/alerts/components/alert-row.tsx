@@ -26,7 +26,11 @@ export function AlertRow(props: AlertRowProps) {
   const { alert, zone, isPicked } = props;
   const isOver = alert.state === 'cleared' || alert.state === 'closed';
   const { who, small } = holderWords(alert, zone, props.me);
-  const looks = [alert.state === 'raised' && styles.untaken, isOver && styles.over, isPicked && styles.picked];
+  const looks = [
+    alert.state === 'raised' && styles.untaken,
+    isOver && styles.over,
+    isPicked && styles.picked,
+  ];
   return (
     <tr
       className={looks.filter(Boolean).join(' ')}
@@ -89,7 +93,13 @@ function overWords(alert: WireAlert, zone: string): string {
 
 function rowWords(alert: WireAlert, zone: string, who: string): string {
   const priority = { 'act-now': 'Act now', 'act-soon': 'Act soon', watch: 'Watch' }[alert.priority];
-  const holder = { raised: 'nobody has it', taken: `taken by ${who}`, 'set-aside': `set aside ${who}`, cleared: 'cleared, waits for a cause', closed: 'closed' };
+  const holder = {
+    raised: 'nobody has it',
+    taken: `taken by ${who}`,
+    'set-aside': `set aside ${who}`,
+    cleared: 'cleared, waits for a cause',
+    closed: 'closed',
+  };
   return `${priority}, ${formatTime(alert.raisedAt, zone)}, ${alert.subject}. ${alert.text}. ${alert.action} ${alert.actor}. ${holder[alert.state]}.`;
 }
 

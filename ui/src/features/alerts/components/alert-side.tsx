@@ -75,7 +75,8 @@ function TurnSentence({ turnId }: { turnId: string }) {
   const { turn } = useTurnAt(turnId);
   const now = useNow();
   if (turn === undefined) return null;
-  const isOpen = turn.departedAt === null && turn.annulled === null && turn.readyAt !== null && turn.health !== 'no-word';
+  const isOpen =
+    turn.departedAt === null && turn.annulled === null && turn.readyAt !== null && turn.health !== 'no-word';
   const ready = isOpen && turn.readyAt !== null ? `Ready about ${formatTime(turn.readyAt, turn.zone)}, ` : '';
   const words = leavesWords(turn, now);
   return <p>{ready === '' ? `${words.charAt(0).toUpperCase()}${words.slice(1)}.` : `${ready}${words}.`}</p>;

@@ -90,20 +90,29 @@ function Foremost({ alert, terminal, isHalf, onOpen }: AlertStripProps & { alert
   );
 }
 
-function OtherAlert({ alert, zone, onOpen }: { alert: WireAlert; zone: string; onOpen: (turnId: string) => void }) {
+function OtherAlert({
+  alert,
+  zone,
+  onOpen,
+}: {
+  alert: WireAlert;
+  zone: string;
+  onOpen: (turnId: string) => void;
+}) {
   const me = usePerson().name;
   const { turnId } = alert;
   const isUntaken = alert.state === 'raised';
+  const words = `${alert.subject.replace(', train ', ', ')}. ${alert.text}`;
   return (
     <li className={isUntaken ? styles.untaken : undefined}>
       <PriorityMark priority={alert.priority} />
       <span>{formatTime(alert.raisedAt, zone)}</span>
       <span className={styles.words}>
         {turnId === null ? (
-          `${alert.subject}. ${alert.text}`
+          words
         ) : (
-          <button type="button" onClick={() => onOpen(turnId)} title={`${alert.subject}. ${alert.text}`}>
-            {alert.subject}. {alert.text}
+          <button type="button" onClick={() => onOpen(turnId)} title={words}>
+            {words}
           </button>
         )}
       </span>

@@ -142,7 +142,9 @@ function useAlerts({ code, zone }: WireTerminal) {
     alerts: [
       ...(standing.data ?? []),
       ...(cleared.data ?? []),
-      ...(closed.data ?? []).filter((alert) => alert.closedAt !== null && dateAt(alert.closedAt, zone) === today),
+      ...(closed.data ?? []).filter(
+        (alert) => alert.closedAt !== null && dateAt(alert.closedAt, zone) === today,
+      ),
     ],
     isPending: standing.isPending,
     error: standing.data === undefined ? standing.error : null,

@@ -47,7 +47,12 @@ export function SetAsideForm({ alert, zone, firstId, onDone }: SetAsideFormProps
     <form onSubmit={submit} noValidate>
       <div className={styles.fields}>
         <FormGroup label="Until" labelFor={untilId}>
-          <HTMLSelect id={untilId} value={place} onChange={(event) => setPlace(Number(event.target.value))} fill>
+          <HTMLSelect
+            id={untilId}
+            value={place}
+            onChange={(event) => setPlace(Number(event.target.value))}
+            fill
+          >
             {choices.map((choice, index) => (
               <option key={choice.at} value={index}>
                 {choice.words}
@@ -61,7 +66,13 @@ export function SetAsideForm({ alert, zone, firstId, onDone }: SetAsideFormProps
           intent={isMissing ? 'danger' : 'none'}
           helperText={isMissing ? 'Give the reason' : undefined}
         >
-          <InputGroup id={`${id}-reason`} value={reason} onValueChange={setReason} maxLength={300} aria-invalid={isMissing} />
+          <InputGroup
+            id={`${id}-reason`}
+            value={reason}
+            onValueChange={setReason}
+            maxLength={300}
+            aria-invalid={isMissing}
+          />
         </FormGroup>
         <Button type="submit" loading={setAside.isPending}>
           Set aside

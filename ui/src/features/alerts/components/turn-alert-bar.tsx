@@ -48,7 +48,11 @@ function AlertLine({ alert, turn, onSetAside }: TurnAlertBarProps & { alert: Wir
         <span className={styles.acts}>
           {alert.state !== 'set-aside' && <Button onClick={() => onSetAside(alert)}>Set aside</Button>}
           {alert.state !== 'taken' && (
-            <Button intent={isUntaken ? 'primary' : 'none'} loading={take.isPending} onClick={() => take.mutate(alert)}>
+            <Button
+              intent={isUntaken ? 'primary' : 'none'}
+              loading={take.isPending}
+              onClick={() => take.mutate(alert)}
+            >
               {isUntaken ? 'Take' : 'Bring back'}
             </Button>
           )}

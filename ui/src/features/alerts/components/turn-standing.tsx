@@ -25,7 +25,8 @@ export function leavesWords(turn: TurnNow, now: number): string {
 /** The same with the forecast where it lies later: "leaves 17:34, ready about 17:37". */
 export function leavesAndReady(turn: TurnNow, now: number): string {
   const leaves = departureOf(turn);
-  const isShort = leaves !== null && turn.readyAt !== null && turn.readyAt > leaves && turn.health !== 'no-word';
+  const isShort =
+    leaves !== null && turn.readyAt !== null && turn.readyAt > leaves && turn.health !== 'no-word';
   if (isOver(turn) || !isShort || turn.readyAt === null) return leavesWords(turn, now);
   return `leaves ${formatTime(leaves, turn.zone)}, ready about ${formatTime(turn.readyAt, turn.zone)}`;
 }

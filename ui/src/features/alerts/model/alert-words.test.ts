@@ -9,7 +9,11 @@ describe('who has an alert', () => {
   it.each([
     [{}, 'nobody', 'not taken'],
     [{ state: 'taken', takenBy: 'R. Hallam', takenAt: iso('17:24') }, 'you', 'taken by you 17:24'],
-    [{ state: 'taken', takenBy: 'N. Brandt', takenAt: iso('17:24') }, 'N. Brandt', 'taken by N. Brandt 17:24'],
+    [
+      { state: 'taken', takenBy: 'N. Brandt', takenAt: iso('17:24') },
+      'N. Brandt',
+      'taken by N. Brandt 17:24',
+    ],
     [
       { state: 'set-aside', takenBy: 'R. Hallam', takenAt: iso('17:14'), setAsideUntil: iso('17:35') },
       'till 17:35',
@@ -52,6 +56,8 @@ describe('times for setting aside', () => {
       '17:46, 20 min',
       '17:56, 30 min',
     ]);
-    expect(Math.max(...choices.map((choice) => choice.at)) - now).toBeLessThanOrEqual(longestSetAsideMinutes * 60_000);
+    expect(Math.max(...choices.map((choice) => choice.at)) - now).toBeLessThanOrEqual(
+      longestSetAsideMinutes * 60_000,
+    );
   });
 });

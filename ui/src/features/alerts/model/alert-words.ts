@@ -1,4 +1,10 @@
-import { longestSetAsideMinutes, millisecondsInMinute, parseInstant, type Instant, type WireAlert } from '@stubpost/shared';
+import {
+  longestSetAsideMinutes,
+  millisecondsInMinute,
+  parseInstant,
+  type Instant,
+  type WireAlert,
+} from '@stubpost/shared';
 import { formatClock, formatTime } from '../../../lib/time-display';
 
 const instant = (text: string | null): Instant | null => (text === null ? null : parseInstant(text));
@@ -11,7 +17,10 @@ export function holderWords(alert: WireAlert, zone: string, me: string): { who: 
   if (alert.state === 'set-aside' && until !== null) {
     return { who: `till ${formatTime(until, zone)}`, small: alert.takenBy === null ? '' : who };
   }
-  return { who: alert.state === 'raised' ? 'nobody' : who, small: taken === null ? '' : formatTime(taken, zone) };
+  return {
+    who: alert.state === 'raised' ? 'nobody' : who,
+    small: taken === null ? '' : formatTime(taken, zone),
+  };
 }
 
 /** One line of the strip about who has it: "taken by you 17:24", "not taken". */
@@ -33,7 +42,10 @@ export function alertStory(alert: WireAlert, zone: string, me: string): AlertMom
   const who = (name: string | null): string => (name === me ? 'you' : (name ?? 'the system'));
   const moments: [string | null, string][] = [
     [alert.raisedAt, alert.previousId === null ? 'raised' : 'raised again, it had been cleared'],
-    [alert.takenAt, alert.state === 'set-aside' ? `set aside by ${who(alert.takenBy)}` : `taken by ${who(alert.takenBy)}`],
+    [
+      alert.takenAt,
+      alert.state === 'set-aside' ? `set aside by ${who(alert.takenBy)}` : `taken by ${who(alert.takenBy)}`,
+    ],
     [alert.clearedAt, 'cleared'],
     [alert.closedAt, `closed${alert.closedCause === null ? '' : `: ${alert.closedCause}`}`],
   ];
@@ -41,7 +53,9 @@ export function alertStory(alert: WireAlert, zone: string, me: string): AlertMom
     const when = instant(at);
     return when === null ? [] : [{ when, words }];
   });
-  return past.sort((a, b) => a.when - b.when).map(({ when, words }) => ({ clock: formatClock(when, zone), words }));
+  return past
+    .sort((a, b) => a.when - b.when)
+    .map(({ when, words }) => ({ clock: formatClock(when, zone), words }));
 }
 
 /** A time until which an alert may be set aside. */

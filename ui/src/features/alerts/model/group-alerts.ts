@@ -34,7 +34,9 @@ export function groupOf(alert: WireAlert): AlertGroupKey {
 
 /** Most urgent first, then the one that has stood longest. */
 export function byUrgency(a: WireAlert, b: WireAlert): number {
-  return PRIORITIES.indexOf(a.priority) - PRIORITIES.indexOf(b.priority) || a.raisedAt.localeCompare(b.raisedAt);
+  return (
+    PRIORITIES.indexOf(a.priority) - PRIORITIES.indexOf(b.priority) || a.raisedAt.localeCompare(b.raisedAt)
+  );
 }
 
 const latestFirst = (a: WireAlert, b: WireAlert): number => b.raisedAt.localeCompare(a.raisedAt);

@@ -1,5 +1,11 @@
 import { Button, ButtonGroup, Popover, SegmentedControl } from '@blueprintjs/core';
-import { groupingsOf, type BoardView, type Grouping, type TurnFilter, type View } from '../model/board-search';
+import {
+  groupingsOf,
+  type BoardView,
+  type Grouping,
+  type TurnFilter,
+  type View,
+} from '../model/board-search';
 import { filterSaid, isFiltering } from '../model/filter-turns';
 import { SPANS, type Span } from '../model/time-window';
 import styles from './board-tools.module.css';
@@ -8,12 +14,17 @@ import { PaceMenu, type Pace } from './pace-menu';
 
 export interface BoardToolsProps {
   view: BoardView;
-  /** "17:06 to 19:06, 15 of 143 turns". */
-  shownWords: string;
+  /** "17:06 to 19:06, ". */
+  windowWords: string;
+  /** "15 of 143 turns". */
+  countWords: string;
+  /** Narrow screens have the table only. */
+  hasPicture: boolean;
   hasLegend: boolean;
   pace: Pace;
   pausedAt: string | null;
   mayAdd: boolean;
+  isHalf: boolean;
   onView: (view: View) => void;
   onGrouping: (by: Grouping) => void;
   onSpan: (span: Span) => void;
@@ -26,7 +37,11 @@ export interface BoardToolsProps {
   onAdd: () => void;
 }
 
-const groupingWords: Record<Grouping, string> = { departure: 'By departure', track: 'By track', set: 'By set' };
+const groupingWords: Record<Grouping, string> = {
+  departure: 'By departure',
+  track: 'By track',
+  set: 'By set',
+};
 
 const spanWords = (span: Span): string => (span === 'day' ? 'Day' : `${span / 60} h`);
 
@@ -34,16 +49,22 @@ const spanWords = (span: Span): string => (span === 'day' ? 'Day' : `${span / 60
 export function BoardTools(props: BoardToolsProps) {
   const { view } = props;
   return (
-    <div className={styles.tools} role="group" aria-label="View of the board">
-      <SegmentedControl
-        aria-label="Show as"
-        value={view.view}
-        onValueChange={(value) => props.onView(value as View)}
-        options={[
-          { label: 'Timeline', value: 'timeline' },
-          { label: 'Table', value: 'table' },
-        ]}
-      />
+    <div
+      className={`${styles.tools} ${props.isHalf ? styles.half : ''}`}
+      role="group"
+      aria-label="View of the board"
+    >
+      {props.hasPicture && (
+        <SegmentedControl
+          aria-label="Show as"
+          value={view.view}
+          onValueChange={(value) => props.onView(value as View)}
+          options={[
+            { label: 'Timeline', value: 'timeline' },
+            { label: 'Table', value: 'table' },
+          ]}
+        />
+      )}
       <SegmentedControl
         aria-label="Rows"
         value={view.by}
@@ -63,7 +84,10 @@ export function BoardTools(props: BoardToolsProps) {
         onValueChange={(value) => props.onSpan(value === 'day' ? 'day' : Number(value))}
         options={SPANS.map((span) => ({ label: spanWords(span), value: String(span) }))}
       />
-      <span className={styles.shown}>{props.shownWords}</span>
+      <span className={styles.shown}>
+        <span className={styles.window}>{props.windowWords}</span>
+        {props.countWords}
+      </span>
       <div className={styles.right}>
         {props.mayAdd && <Button onClick={props.onAdd}>Extra turn</Button>}
         {view.view === 'timeline' && (

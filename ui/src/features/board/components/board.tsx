@@ -55,7 +55,8 @@ export function Board({ terminal, openId, hasPicture, onAct }: BoardProps) {
 
   const setWindow = (to: 'earlier' | 'later' | 'shorter' | 'longer' | 'now'): void => {
     if (to === 'now') change({ startAt: null });
-    else if (to === 'earlier' || to === 'later') change(movedChoice(view, shownWindow, to === 'earlier' ? -1 : 1));
+    else if (to === 'earlier' || to === 'later')
+      change(movedChoice(view, shownWindow, to === 'earlier' ? -1 : 1));
     else change(resizedChoice(view, shownWindow, neighbourSpan(view.span, to === 'shorter' ? -1 : 1)));
   };
   const act = useStableCallback((what: TurnAct, turnId: string, step: string | null) => {
@@ -75,10 +76,13 @@ export function Board({ terminal, openId, hasPicture, onAct }: BoardProps) {
     <div className={`${styles.board} ${isStale ? `stale ${styles.stale}` : ''}`}>
       <BoardTools
         view={view}
-        shownWords={`${windowWords(shownWindow, terminal.zone)}, ${shown.length} of ${found.total} turns`}
+        windowWords={`${windowWords(shownWindow, terminal.zone)}, `}
+        countWords={`${shown.length} of ${found.total} turns`}
+        hasPicture={hasPicture}
         hasLegend={hasLegend}
         pace={pace}
         pausedAt={pausedAt === null ? null : clockText(pausedAt, terminal.zone)}
+        isHalf={openId !== null}
         mayAdd={useMay('turns.create', terminal.code)}
         onView={(next) => change({ view: next, by: next === 'table' ? 'departure' : 'track' })}
         onGrouping={(by) => change({ by })}
@@ -110,7 +114,7 @@ export function Board({ terminal, openId, hasPicture, onAct }: BoardProps) {
           )}
         </PartBoundary>
       </BoardState>
-      {view.view === 'timeline' && hasLegend && <Legend />}
+      {view.view === 'timeline' && hasLegend && <Legend isHalf={openId !== null} />}
       <ExtraTurnDialog
         terminal={terminal}
         isOpen={isAdding}
@@ -146,7 +150,9 @@ function useFocusBack(openId: string | null, focusTurn: (turnId: string) => void
 }
 
 /** A callback that stays the same object, so that rows need not be drawn again, and always does the latest. */
-function useStableCallback<Args extends unknown[]>(callback: (...args: Args) => void): (...args: Args) => void {
+function useStableCallback<Args extends unknown[]>(
+  callback: (...args: Args) => void,
+): (...args: Args) => void {
   const latest = useRef(callback);
   useEffect(() => {
     latest.current = callback;
@@ -172,7 +178,14 @@ function BoardState(props: BoardPartProps & { onClear: () => void; children: JSX
   const day = formatServiceDate(found.date);
   if (found.error !== null) return <ErrorState error={found.error} onRetry={found.retry} />;
   if (found.isPending) {
-    return <LoadingRows what={`turns for ${day}`} rows={8} rowHeight={view.view === 'table' ? 41 : 72} onRetry={found.retry} />;
+    return (
+      <LoadingRows
+        what={`turns for ${day}`}
+        rows={8}
+        rowHeight={view.view === 'table' ? 41 : 72}
+        onRetry={found.retry}
+      />
+    );
   }
   if (found.total === 0 && found.inWindow === 0) {
     return (

@@ -39,7 +39,11 @@ function ExtraTurnForm({ terminal, onClose, onDone }: ExtraTurnDialogProps) {
     if (result.ok) create.mutate(result.request, { onSuccess: onDone });
   };
 
-  const entry = (field: keyof ExtraTurnFields, label: string, extra: { hint?: string; list?: string; first?: boolean }) => {
+  const entry = (
+    field: keyof ExtraTurnFields,
+    label: string,
+    extra: { hint?: string; list?: string; first?: boolean },
+  ) => {
     const fault = faults.find((one) => one.field === field);
     return (
       <FormGroup
@@ -67,12 +71,14 @@ function ExtraTurnForm({ terminal, onClose, onDone }: ExtraTurnDialogProps) {
         <FieldSummary
           problems={[
             ...faults.map(({ field, words }) => ({ fieldId: fieldId(field), words })),
-            ...(create.error === null ? [] : [{ fieldId: fieldId('inboundTrain'), words: errorText(create.error) }]),
+            ...(create.error === null
+              ? []
+              : [{ fieldId: fieldId('inboundTrain'), words: errorText(create.error) }]),
           ]}
         />
         <p className="muted small">
-          Times on the terminal’s clock, {formatZoneLetters(readNow(), terminal.zone)}. Without an inbound train it is a
-          first-out, without an outbound one a tie-up.
+          Times on the terminal’s clock, {formatZoneLetters(readNow(), terminal.zone)}. Without an inbound
+          train it is a first-out, without an outbound one a tie-up.
         </p>
         <div className={styles.fields}>
           {entry('inboundTrain', 'Inbound train', { first: true })}

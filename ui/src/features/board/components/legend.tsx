@@ -22,19 +22,21 @@ const states: [StepState, string][] = [
 ];
 
 /** What the shapes of the picture mean, in words beside each. */
-export function Legend() {
+export function Legend({ isHalf }: { isHalf: boolean }) {
   return (
-    <aside className={styles.legend} aria-label="Legend">
+    <aside className={`${styles.legend} ${isHalf ? styles.half : ''}`} aria-label="Legend">
       <dl className={styles.lanes}>
         <dt>Plan</dt>
         <dd>scheduled times, a tick where each step is due</dd>
         <dt>Work</dt>
         <dd>
-          from the post, where it stopped, to now; dashed until it leaves. Hollow post: still inbound. Upper marks: in a
-          cab, lower: on the ground. Four cells from 8 h on: set, tested, ends, ready
+          from the post, where it stopped, to now; dashed until it leaves. Hollow post: still inbound. Upper
+          marks: in a cab, lower: on the ground. Four cells from 8 h on: set, tested, ends, ready
         </dd>
         <dt>Next</dt>
-        <dd>hatch is work to do, line is time to spare, upright is forecast ready, bracket is minutes short</dd>
+        <dd>
+          hatch is work to do, line is time to spare, upright is forecast ready, bracket is minutes short
+        </dd>
       </dl>
       <ul className={styles.signs}>
         {kinds.map(([kind, words]) => (

@@ -42,7 +42,12 @@ export function PaceMenu({ pace, pausedAt, onPace, onPause }: PaceMenuProps) {
           </Menu>
         }
         renderTarget={({ isOpen, ref, ...target }) => (
-          <Button {...target} ref={ref} aria-expanded={isOpen} aria-label={`How often the picture moves: ${pace} s`}>
+          <Button
+            {...target}
+            ref={ref}
+            aria-expanded={isOpen}
+            aria-label={`How often the picture moves: ${pace} s`}
+          >
             {pace} s
           </Button>
         )}

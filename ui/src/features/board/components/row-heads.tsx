@@ -22,12 +22,7 @@ export function RowHeads(props: RowHeadsProps) {
   const { subject, list } = props;
   return (
     <div className={styles.heads}>
-      <table
-        role="grid"
-        ref={list.container}
-        onKeyDown={list.onKeyDown}
-        onFocus={list.onFocus}
-      >
+      <table role="grid" ref={list.container} onKeyDown={list.onKeyDown} onFocus={list.onFocus}>
         <caption className="unseen">{props.caption}</caption>
         <colgroup>
           {[44, 58, 38, 96, 46, 54].map((width, index) => (
@@ -106,7 +101,13 @@ const RowHeadBody = memo(function RowHeadBody(props: BodyProps) {
       )}
       {isOnStep ? (
         <tr className={styles.about}>
-          <td colSpan={5} className={styles.stepLine} data-turn={activeId} data-step={activeStep} tabIndex={0}>
+          <td
+            colSpan={5}
+            className={styles.stepLine}
+            data-turn={activeId}
+            data-step={activeStep}
+            tabIndex={0}
+          >
             {stepWords}
           </td>
         </tr>

@@ -8,7 +8,9 @@ export function TwoLines({ cell }: { cell: Cell }) {
     <>
       <span className={cell.estimate === true ? 'estimate' : undefined}>{cell.text}</span>
       {cell.small !== undefined && (
-        <small className={cell.smallEstimate === true ? `${styles.ink} estimate` : undefined}>{cell.small}</small>
+        <small className={cell.smallEstimate === true ? `${styles.ink} estimate` : undefined}>
+          {cell.small}
+        </small>
       )}
     </>
   );
@@ -18,7 +20,11 @@ export function TwoLines({ cell }: { cell: Cell }) {
 export function FlagCell({ cell }: { cell: PlanCell }) {
   return (
     <>
-      {cell.flag === null ? <span>{cell.text}</span> : <span className={`flag ${cell.flag}`}>{cell.text}</span>}
+      {cell.flag === null ? (
+        <span>{cell.text}</span>
+      ) : (
+        <span className={`flag ${cell.flag}`}>{cell.text}</span>
+      )}
       {(cell.small !== '' || cell.owed !== '') && (
         <small className={cell.owed === '' ? undefined : styles.ink}>
           {cell.small}

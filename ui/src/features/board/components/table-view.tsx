@@ -30,10 +30,12 @@ export function TableView({ terminal, view, now, found, wordsOf, list, openId, o
   const groups: TableGroup[] =
     view.by === 'departure'
       ? [{ id: 'all', label: null, rows: found.shown.map(rowOf) }]
-      : mergedGroups(view.by === 'track' ? trackRows : groupRows(found.shown, 'set', [], now)).map((group) => ({
-          ...group,
-          rows: group.turns.map(rowOf),
-        }));
+      : mergedGroups(view.by === 'track' ? trackRows : groupRows(found.shown, 'set', [], now)).map(
+          (group) => ({
+            ...group,
+            rows: group.turns.map(rowOf),
+          }),
+        );
   const { zone } = terminal;
   const caption =
     `${found.shown.length} turns, ${terminal.name}, ${formatServiceDate(found.date)}, ` +
@@ -51,9 +53,9 @@ export function TableView({ terminal, view, now, found, wordsOf, list, openId, o
         byDeparture={view.by === 'departure'}
       />
       <p className={styles.foot}>
-        Terminal time, {formatZoneLetters(now, zone)}. ~ forecast at typical pace. Filled mark: recorded; half: by radio
-        or entered later. Stubpost shows what is recorded and what the rule asks for; the railroad’s rules, the law and
-        qualified people decide.
+        Terminal time, {formatZoneLetters(now, zone)}. ~ forecast at typical pace. Filled mark: recorded;
+        half: by radio or entered later. Stubpost shows what is recorded and what the rule asks for; the
+        railroad’s rules, the law and qualified people decide.
       </p>
     </div>
   );
@@ -61,7 +63,10 @@ export function TableView({ terminal, view, now, found, wordsOf, list, openId, o
 
 /** Groups of the table: all turns of a track or set together, also where the picture needs several rows for them. */
 function mergedGroups(rows: ReturnType<typeof groupRows>) {
-  const groups = new Map<string | null, { id: string; label: string; turns: (typeof rows)[number]['turns'] }>();
+  const groups = new Map<
+    string | null,
+    { id: string; label: string; turns: (typeof rows)[number]['turns'] }
+  >();
   for (const row of rows) {
     const noun = row.subject === 'track' ? 'Track' : 'Set';
     const label = row.label === null ? `No ${noun.toLowerCase()} yet` : `${noun} ${row.label}`;

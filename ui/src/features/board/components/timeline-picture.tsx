@@ -103,18 +103,24 @@ function useTimeline(host: React.RefObject<HTMLDivElement>, props: TimelinePictu
 }
 
 /** Tells the timeline what is new and what is gone; the rest is not touched. */
-function useItems(drawing: Drawing | null, { rowIds, items, window: shown, now }: TimelinePictureProps): void {
+function useItems(
+  drawing: Drawing | null,
+  { rowIds, items, window: shown, now }: TimelinePictureProps,
+): void {
   const rows = rowIds.join('\n');
   useEffect(() => {
     if (drawing === null) return;
-    const wanted = rows === '' ? [] : rows.split('\n').flatMap((rowId, row) =>
-      LANES.map((lane, index) => ({
-        id: laneGroup(rowId, lane),
-        content: '',
-        className: `${lane}-lane`,
-        order: row * LANES.length + index,
-      })),
-    );
+    const wanted =
+      rows === ''
+        ? []
+        : rows.split('\n').flatMap((rowId, row) =>
+            LANES.map((lane, index) => ({
+              id: laneGroup(rowId, lane),
+              content: '',
+              className: `${lane}-lane`,
+              order: row * LANES.length + index,
+            })),
+          );
     const gone = drawing.groups.getIds().filter((id) => !wanted.some((group) => group.id === id));
     drawing.groups.update(wanted);
     if (gone.length > 0) drawing.groups.remove(gone);
@@ -126,7 +132,16 @@ function useItems(drawing: Drawing | null, { rowIds, items, window: shown, now }
     if (removed.length > 0) drawing.items.remove(removed);
     const past: DataItem[] =
       now > shown.from
-        ? [{ id: pastId, type: 'background', start: shown.from - 6 * 3_600_000, end: now, className: 'past', content: '' }]
+        ? [
+            {
+              id: pastId,
+              type: 'background',
+              start: shown.from - 6 * 3_600_000,
+              end: now,
+              className: 'past',
+              content: '',
+            },
+          ]
         : [];
     drawing.items.update([...past, ...changed.map((item) => ({ ...item }) as DataItem)]);
     for (const item of changed) drawing.drawn.set(item.id, item);

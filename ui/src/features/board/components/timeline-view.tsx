@@ -28,7 +28,13 @@ export function TimelineView(props: BoardPartProps & { onDrag: (choice: WindowCh
   const rows = groupRows(found.shown, subject, terminal.tracks, now);
   const minutes = (found.window.to - found.window.from) / millisecondsInMinute;
   const pixelsPerMinute = Math.max(width, 1) / minutes;
-  const scene = { rows, window: found.window, now, pixelsPerMinute, clock: (instant: number) => timeText(instant, zone) };
+  const scene = {
+    rows,
+    window: found.window,
+    now,
+    pixelsPerMinute,
+    clock: (instant: number) => timeText(instant, zone),
+  };
   const items = detailedItems(scene, minutes >= summaryFromMinutes);
   const caption =
     `Turns by ${subject}, ${terminal.name}, ${formatServiceDate(found.date)}, ` +
@@ -88,7 +94,10 @@ function useHeads(rows: readonly BoardRow[], { found, now, terminal }: BoardPart
 function useStepWords({ found, list, terminal }: BoardPartProps): string | null {
   const turn = list.activeId === null ? undefined : found.all.get(list.activeId);
   const step = turn?.steps.find((one) => one.key === list.activeStep);
-  return useMemo(() => (step === undefined ? null : capitalised(stepWords(step, terminal.zone))), [step, terminal.zone]);
+  return useMemo(
+    () => (step === undefined ? null : capitalised(stepWords(step, terminal.zone))),
+    [step, terminal.zone],
+  );
 }
 
 const capitalised = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

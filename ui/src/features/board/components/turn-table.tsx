@@ -26,9 +26,9 @@ export interface TurnTableProps {
   byDeparture: boolean;
 }
 
-const fixedColumns = [44, 64, 84, 126, 46, 92, 54, 50, 88];
-const stepWidth = 83;
-const endColumns = [84, 104];
+const fixedColumns = [44, 58, 82, 128, 46, 98, 50, 50, 86];
+const stepWidth = 86;
+const endColumns = [82, 98];
 
 /** Every fact of the picture as a table: one row a turn, two lines a row, one stop of the Tab key, arrows inside. */
 export function TurnTable(props: TurnTableProps) {
@@ -129,7 +129,11 @@ function TableHead({ columns, byDeparture }: { columns: readonly StepColumn[]; b
           Arrived
         </th>
         {columns.map((column, index) => (
-          <th key={column.key} scope="col" className={index === 0 || index === arrival ? styles.edge : undefined}>
+          <th
+            key={column.key}
+            scope="col"
+            className={index === 0 || index === arrival ? styles.edge : undefined}
+          >
             {column.shortLabel}
           </th>
         ))}
@@ -154,8 +158,21 @@ interface TurnRowProps {
   onAct: TurnTableProps['onAct'];
 }
 
-const TurnRow = memo(function TurnRow({ row, columns, words, isActive, activeStep, isOpen, onAct }: TurnRowProps) {
-  const looks = [styles[row.look], row.untaken && styles.untaken, row.blueSignal && styles.blue, isOpen && styles.picked];
+const TurnRow = memo(function TurnRow({
+  row,
+  columns,
+  words,
+  isActive,
+  activeStep,
+  isOpen,
+  onAct,
+}: TurnRowProps) {
+  const looks = [
+    styles[row.look],
+    row.untaken && styles.untaken,
+    row.blueSignal && styles.blue,
+    isOpen && styles.picked,
+  ];
   const arrival = columns.filter((column) => column.anchor === 'arrival').length;
   return (
     <tr
@@ -211,4 +228,3 @@ const TurnRow = memo(function TurnRow({ row, columns, words, isActive, activeSte
     </tr>
   );
 });
-

@@ -44,7 +44,13 @@ export function useBoardTurns({ terminal, dates, now, holdKey }: BoardTurnsQuest
     () => wires.map((wire) => turnAt(wire, { plan: plans.get(wire.planId), settings }, now)),
     [wires, plans, settings, now],
   );
-  return { turns, isPending: boards.isPending, error: boards.error, retry: boards.retry, answeredAt: boards.answeredAt };
+  return {
+    turns,
+    isPending: boards.isPending,
+    error: boards.error,
+    retry: boards.retry,
+    answeredAt: boards.answeredAt,
+  };
 }
 
 type BoardResult = {

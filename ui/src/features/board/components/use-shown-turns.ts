@@ -48,7 +48,10 @@ export function useShownTurns({ terminal, view, now, holdKey }: ShownQuestion): 
   const inWindow = turns.filter((turn) => overlaps(shownStretch(turn, now), window));
   const wanted = filterTurns(inWindow, view.filter).sort(bySchedule);
   const key = JSON.stringify([terminal.code, view.span, view.startAt, view.filter]);
-  const steady = useSteadyIds(wanted.map((turn) => turn.id), key);
+  const steady = useSteadyIds(
+    wanted.map((turn) => turn.id),
+    key,
+  );
   const shown = steady.ids.flatMap((id) => all.get(id) ?? []);
   return {
     window,

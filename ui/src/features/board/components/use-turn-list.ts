@@ -33,7 +33,10 @@ const find = (root: HTMLElement | null, turnId: string, step: string | null): HT
 /** Roving focus over rows marked with `data-turn` and step cells marked with `data-turn` and `data-step`. */
 export function useTurnList({ ids, stepsOf, onAct, onWindow }: TurnListOptions): TurnList {
   const container = useRef<HTMLTableElement>(null);
-  const [chosen, setChosen] = useState<{ turn: string | null; step: string | null }>({ turn: null, step: null });
+  const [chosen, setChosen] = useState<{ turn: string | null; step: string | null }>({
+    turn: null,
+    step: null,
+  });
   const { letterKeys } = usePreferences();
   const activeId = chosen.turn !== null && ids.includes(chosen.turn) ? chosen.turn : (ids[0] ?? null);
   const activeStep = activeId === chosen.turn ? chosen.step : null;
@@ -51,7 +54,8 @@ export function useTurnList({ ids, stepsOf, onAct, onWindow }: TurnListOptions):
     switch (command.do) {
       case 'move': {
         const next = ids[movedIndex(ids.indexOf(turn), command.by, ids.length)];
-        if (next !== undefined) focusPlace(next, stepsOf(next).includes(activeStep ?? '') ? activeStep : null);
+        if (next !== undefined)
+          focusPlace(next, stepsOf(next).includes(activeStep ?? '') ? activeStep : null);
         break;
       }
       case 'step': {

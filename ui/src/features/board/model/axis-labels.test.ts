@@ -11,12 +11,16 @@ describe('labels of the axis', () => {
   });
 
   it('tell the two passes of the hour apart in the night when clocks go back', () => {
-    const hours = ['04:00', '05:00', '06:00', '07:00'].map((hour) => axisLabel(at(`2026-11-01T${hour}:00Z`), zone));
+    const hours = ['04:00', '05:00', '06:00', '07:00'].map((hour) =>
+      axisLabel(at(`2026-11-01T${hour}:00Z`), zone),
+    );
     expect(hours).toEqual(['00:00 EDT', '01:00 EDT', '01:00 EST', '02:00 EST']);
   });
 
   it('skip the hour that is not there in the night when clocks go forward', () => {
-    const hours = ['05:00', '06:00', '07:00', '08:00'].map((hour) => axisLabel(at(`2026-03-08T${hour}:00Z`), zone));
+    const hours = ['05:00', '06:00', '07:00', '08:00'].map((hour) =>
+      axisLabel(at(`2026-03-08T${hour}:00Z`), zone),
+    );
     expect(hours).toEqual(['00:00 EST', '01:00 EST', '03:00 EDT', '04:00 EDT']);
   });
 

@@ -15,7 +15,10 @@ const drawn = (...items: PictureItem[]) => new Map(items.map((one) => [one.id, o
 
 describe('what changes from one drawing to the next', () => {
   it('is nothing when nothing changed', () => {
-    expect(diffItems(drawn(item('a'), item('b')), [item('a'), item('b')])).toEqual({ changed: [], removed: [] });
+    expect(diffItems(drawn(item('a'), item('b')), [item('a'), item('b')])).toEqual({
+      changed: [],
+      removed: [],
+    });
   });
 
   it('is only what is new, moved, renamed or gone', () => {

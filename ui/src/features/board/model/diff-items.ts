@@ -7,7 +7,10 @@ export interface ItemChanges {
 }
 
 /** The least that turns one drawing into the next. Unchanged items are left alone, so their elements stay the same. */
-export function diffItems(before: ReadonlyMap<string, PictureItem>, after: readonly PictureItem[]): ItemChanges {
+export function diffItems(
+  before: ReadonlyMap<string, PictureItem>,
+  after: readonly PictureItem[],
+): ItemChanges {
   const kept = new Set<string>();
   const changed: PictureItem[] = [];
   for (const item of after) {

@@ -2,11 +2,14 @@ import { emptyFields, readExtraTurn } from './extra-turn';
 
 const terminal = { code: 'VAR', zone: 'America/New_York' };
 const now = Date.parse('2026-03-03T22:26:40Z');
-const read = (fields: Partial<typeof emptyFields>) => readExtraTurn({ ...emptyFields, ...fields }, terminal, now);
+const read = (fields: Partial<typeof emptyFields>) =>
+  readExtraTurn({ ...emptyFields, ...fields }, terminal, now);
 
 describe('an extra turn as typed', () => {
   it('is read on the terminal’s clock', () => {
-    expect(read({ inboundTrain: ' 9731 ', arrives: '1735', outboundTrain: '9742', leaves: '17:50', track: '3' })).toEqual({
+    expect(
+      read({ inboundTrain: ' 9731 ', arrives: '1735', outboundTrain: '9742', leaves: '17:50', track: '3' }),
+    ).toEqual({
       ok: true,
       request: {
         terminal: 'VAR',

@@ -41,12 +41,16 @@ export function readExtraTurn(
   const arrival = readEnd(fields.inboundTrain, fields.arrives, ['inboundTrain', 'arrives'], faults);
   const departure = readEnd(fields.outboundTrain, fields.leaves, ['outboundTrain', 'leaves'], faults);
   if (faults.length === 0 && arrival === null && departure === null) {
-    faults.push({ field: 'outboundTrain', words: 'Give the train that comes in, the train that leaves, or both' });
+    faults.push({
+      field: 'outboundTrain',
+      words: 'Give the train that comes in, the train that leaves, or both',
+    });
   }
   if (faults.length > 0) return { ok: false, faults };
   const { zone } = terminal;
   const arrivesAt = arrival === null ? null : nearestInstantOfTime(arrival.seconds, zone, now);
-  const leavesAt = departure === null ? null : nearestInstantOfTime(departure.seconds, zone, arrivesAt ?? now);
+  const leavesAt =
+    departure === null ? null : nearestInstantOfTime(departure.seconds, zone, arrivesAt ?? now);
   if (arrivesAt !== null && leavesAt !== null && leavesAt < arrivesAt) {
     return { ok: false, faults: [{ field: 'leaves', words: 'The departure lies before the arrival' }] };
   }

@@ -45,7 +45,9 @@ function matches(turn: TurnNow, words: readonly string[]): boolean {
 export function filterSaid(filter: TurnFilter): string {
   const parts = [
     filter.needsAction ? 'needs action' : '',
-    filter.states.length > 0 ? `${filter.states.length} ${filter.states.length === 1 ? 'state' : 'states'}` : '',
+    filter.states.length > 0
+      ? `${filter.states.length} ${filter.states.length === 1 ? 'state' : 'states'}`
+      : '',
     filter.text.trim() === '' ? '' : `“${filter.text.trim()}”`,
   ].filter(Boolean);
   return `Filter: ${parts.length === 0 ? 'none' : parts.join(', ')}`;

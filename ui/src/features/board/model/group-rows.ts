@@ -50,12 +50,7 @@ function rowLabels(
   return [...known, ...others, ...(used.includes(null) ? [null] : [])];
 }
 
-function rowsOf(
-  label: string | null,
-  members: TurnNow[],
-  subject: RowSubject,
-  now: Instant,
-): BoardRow[] {
+function rowsOf(label: string | null, members: TurnNow[], subject: RowSubject, now: Instant): BoardRow[] {
   const base = `${subject}-${label ?? 'none'}`;
   if (members.length === 0) return [{ id: base, subject, label, part: 0, turns: [], clashes: [] }];
   const occupants = members.map((turn) => ({ id: turn.id, turn, ...plannedStretch(turn) }));
@@ -73,7 +68,9 @@ function rowsOf(
 /** Overlaps on one track or set as things stand now; a turn that was annulled takes up nothing. */
 function clashesOf(members: readonly TurnNow[], now: Instant): Clash[] {
   return findClashes(
-    members.filter((turn) => turn.annulled === null).map((turn) => ({ id: turn.id, ...trackStretch(turn, now) })),
+    members
+      .filter((turn) => turn.annulled === null)
+      .map((turn) => ({ id: turn.id, ...trackStretch(turn, now) })),
   );
 }
 

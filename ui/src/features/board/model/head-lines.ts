@@ -5,7 +5,7 @@ import type { BoardRow } from './group-rows';
 import type { TurnNow } from '../../../lib/turn/turn-now';
 import { markerFor, surname, type FlagKind } from './table-cells';
 import { clockText, timeText } from '../../../lib/turn/time-text';
-import { departureOf, isOver, isUntaken } from '../../../lib/turn/turn-times';
+import { departureOf, isOver, isUntaken, shownSlack } from '../../../lib/turn/turn-times';
 
 /** One line of a row's head. */
 export interface HeadLine {
@@ -72,6 +72,7 @@ function linesFor(turns: readonly TurnNow[]): TurnNow[] {
 function headLine(turn: TurnNow, row: BoardRow, isCurrent: boolean): HeadLine {
   const flagged = !isOver(turn) && turn.state !== 'scheduled' && turn.health !== 'on-plan';
   const leaves = turn.departedAt ?? turn.scheduledDepartureAt;
+  const slack = shownSlack(turn);
   return {
     id: turn.id,
     look: turn.annulled !== null ? 'annulled' : isOver(turn) ? 'gone' : isCurrent ? 'now' : 'later',
@@ -81,7 +82,7 @@ function headLine(turn: TurnNow, row: BoardRow, isCurrent: boolean): HeadLine {
     flag: flagged && turn.health !== 'on-plan' ? turn.health : null,
     state: flagged ? HEALTH_WORDS[turn.health] : TURN_STATE_WORDS[turn.state],
     leaves: leaves === null ? 'ties up' : timeText(leaves, turn.zone),
-    spare: isOver(turn) || turn.health === 'no-word' || turn.slackSeconds === null ? '' : formatSlack(turn.slackSeconds),
+    spare: slack === null ? '' : formatSlack(slack),
   };
 }
 
@@ -91,7 +92,8 @@ function about(
   hidden: number,
   context: HeadContext,
 ): RowHead['about'] {
-  if (turn === undefined) return { text: `no turns until ${timeText(context.windowTo, context.zone)}`, flag: null };
+  if (turn === undefined)
+    return { text: `no turns until ${timeText(context.windowTo, context.zone)}`, flag: null };
   const { zone } = turn;
   if (turn.blueSignal !== null) {
     const since = turn.blueSignal.since === null ? '' : ` since ${timeText(turn.blueSignal.since, zone)}`;
@@ -100,7 +102,10 @@ function about(
   const clash = row.clashes[0];
   if (clash !== undefined) {
     const trains = `${context.trainOf(clash.first)} and ${context.trainOf(clash.second)}`;
-    return { text: `${trains} both here ${timeText(clash.from, zone)} to ${timeText(clash.to, zone)}`, flag: null };
+    return {
+      text: `${trains} both here ${timeText(clash.from, zone)} to ${timeText(clash.to, zone)}`,
+      flag: null,
+    };
   }
   if (turn.health === 'no-word' && turn.lastHeardAt !== null && !isOver(turn)) {
     const minutes = Math.floor((context.now - turn.lastHeardAt) / millisecondsInMinute);
@@ -108,7 +113,10 @@ function about(
   }
   const leaves = departureOf(turn);
   if (turn.heldUntil !== null && leaves === turn.heldUntil && !isOver(turn)) {
-    return { text: `Held to ${timeText(leaves, zone)}${turn.holdReason === null ? '' : `: ${turn.holdReason}`}`, flag: null };
+    return {
+      text: `Held to ${timeText(leaves, zone)}${turn.holdReason === null ? '' : `: ${turn.holdReason}`}`,
+      flag: null,
+    };
   }
   if (hidden > 0) return { text: `and ${hidden} more until ${timeText(context.windowTo, zone)}`, flag: null };
   return { text: standsAt(turn, context.tracks), flag: null };

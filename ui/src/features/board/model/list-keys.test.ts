@@ -38,8 +38,11 @@ describe('keys of the list', () => {
   });
 
   it('stay inside the list', () => {
-    expect([movedIndex(0, -1, 5), movedIndex(3, 10, 5), movedIndex(3, 'first', 5), movedIndex(0, 'last', 5)]).toEqual([
-      0, 4, 0, 4,
-    ]);
+    expect([
+      movedIndex(0, -1, 5),
+      movedIndex(3, 10, 5),
+      movedIndex(3, 'first', 5),
+      movedIndex(0, 'last', 5),
+    ]).toEqual([0, 4, 0, 4]);
   });
 });

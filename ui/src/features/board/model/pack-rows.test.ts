@@ -28,9 +28,9 @@ describe('packing into rows', () => {
 
 describe('clashes', () => {
   it('names both and the time they share', () => {
-    expect(findClashes([occupant('late', 0, 12), occupant('next', 10, 30), occupant('clear', 30, 40)])).toEqual([
-      { first: 'late', second: 'next', from: 10, to: 12 },
-    ]);
+    expect(
+      findClashes([occupant('late', 0, 12), occupant('next', 10, 30), occupant('clear', 30, 40)]),
+    ).toEqual([{ first: 'late', second: 'next', from: 10, to: 12 }]);
   });
 
   it('finds every pair when three meet', () => {

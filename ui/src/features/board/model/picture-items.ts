@@ -6,7 +6,15 @@ import { planText } from './mark-pitch';
 import { markItems } from './picture-marks';
 import { overlaps, type TimeWindow } from './time-window';
 import { nextLane, workLane, type NextLane, type WorkLane } from './turn-picture';
-import { arrivalOf, isFarOffPlan, isOver, isUntaken, plannedStretch, shownStretch } from '../../../lib/turn/turn-times';
+import {
+  arrivalOf,
+  isFarOffPlan,
+  isOver,
+  isUntaken,
+  plannedStretch,
+  shownSlack,
+  shownStretch,
+} from '../../../lib/turn/turn-times';
 import { wordItems } from './picture-words';
 
 /** One thing drawn on a lane. Looks hang on class names alone; content is plain text. */
@@ -38,6 +46,7 @@ export interface Scene {
 export interface TurnScene {
   turn: TurnNow;
   now: Instant;
+  window: TimeWindow;
   clock: (instant: Instant) => string;
   /** Pixels from one instant to another. */
   pixels: (from: Instant, to: Instant) => number;
@@ -68,6 +77,7 @@ function turnScene(scene: Scene, rowId: string, turn: TurnNow): TurnScene {
   return {
     turn,
     now: scene.now,
+    window: scene.window,
     clock: scene.clock,
     pixels: (from, to) => (to - from) * perMillisecond,
     after: (instant, pixels) => instant + pixels / perMillisecond,
@@ -79,7 +89,12 @@ function turnItems(scene: TurnScene, detail: Detail): PictureItem[] {
   const work = workLane(scene.turn, scene.now);
   const next = nextLane(scene.turn, scene.now);
   if (detail === 'summary') {
-    return [...planItems(scene), ...workItems(scene, work), ...summaryItems(scene), ...figureItems(scene, next)];
+    return [
+      ...planItems(scene),
+      ...workItems(scene, work),
+      ...summaryItems(scene),
+      ...figureItems(scene, next),
+    ];
   }
   const marks = markItems(scene);
   return [
@@ -95,10 +110,11 @@ function turnItems(scene: TurnScene, detail: Detail): PictureItem[] {
 
 const classes = (...names: (string | false | null)[]): string => names.filter(Boolean).join(' ');
 
-function planItems({ turn, item, pixels, clock }: TurnScene): PictureItem[] {
+function planItems({ turn, item, pixels, clock, window }: TurnScene): PictureItem[] {
   const { from, to } = plannedStretch(turn);
   const state = classes(turn.departedAt !== null && 'gone', turn.annulled !== null && 'annulled');
-  const fits = planText(pixels(from, to));
+  // A bar that began before the window has only its visible part for its text.
+  const fits = planText(pixels(Math.max(from, window.from), to));
   const leaves = turn.scheduledDepartureAt;
   const outbound = leaves === null ? '' : turn.outboundTrain;
   const right = [fits.outbound && outbound, fits.time && leaves !== null && clock(leaves)].filter(Boolean);
@@ -127,7 +143,11 @@ function workItems({ turn, item }: TurnScene, lane: WorkLane): PictureItem[] {
     ['work', lane.work, classes('work', turn.arrivedAt === null && 'unposted', left && 'gone', health, blue)],
     ['over', lane.over, 'over'],
     ['unheard', lane.unheard, 'unheard'],
-    ['open', lane.open, classes('open', turn.arrivedAt === null && turn.kind !== 'first-out' && 'coming', blue)],
+    [
+      'open',
+      lane.open,
+      classes('open', turn.arrivedAt === null && turn.kind !== 'first-out' && 'coming', blue),
+    ],
   ];
   return pieces.flatMap(([name, piece, className]) =>
     piece === null
@@ -151,8 +171,9 @@ function nextItems({ turn, item, now }: TurnScene, lane: NextLane | null): Pictu
 }
 
 function figureItems({ turn, item }: TurnScene, lane: NextLane | null): PictureItem[] {
-  if (lane === null || turn.slackSeconds === null) return [];
-  const content = formatSlack(turn.slackSeconds);
+  const slack = shownSlack(turn);
+  if (lane === null || slack === null) return [];
+  const content = formatSlack(slack);
   return [item('next', 'figure', { type: 'point', start: lane.figureAt, className: 'figure', content })];
 }
 
@@ -168,7 +189,12 @@ function summaryItems({ turn, item }: TurnScene): PictureItem[] {
 }
 
 /** Which of the four cells of the summary are filled. */
-export function summaryCells(turn: TurnNow): { set: boolean; tested: boolean; ends: boolean; ready: boolean } {
+export function summaryCells(turn: TurnNow): {
+  set: boolean;
+  tested: boolean;
+  ends: boolean;
+  ready: boolean;
+} {
   const inward = turn.steps.filter((step) => step.anchor === 'arrival');
   const all = (steps: TurnNow['steps']): boolean => steps.every((step) => step.doneAt !== null);
   const some = (steps: TurnNow['steps']): boolean => steps.length > 0 && all(steps);

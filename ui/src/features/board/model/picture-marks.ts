@@ -23,7 +23,10 @@ export function markItems(scene: TurnScene): Marks {
     return at === null ? [] : [{ step, at }];
   });
   const halves = (['cab', 'ground'] as const).map((place) =>
-    half(scene, placed.filter((mark) => mark.step.place === place)),
+    half(
+      scene,
+      placed.filter((mark) => mark.step.place === place),
+    ),
   );
   const edges = halves.flatMap((one) => one.map((mark) => scene.after(mark.at, markPitch / 2)));
   const standing = turn.departedAt === null;
@@ -38,10 +41,14 @@ interface PlacedMark {
   at: Instant;
 }
 
-/** Where a step's mark belongs; null where it has no place: after the departure only what is recorded or still asked for. */
+/**
+ * Where a step's mark belongs; null where it has no place: an open step has none while nothing is heard, and after the
+ * departure only what is recorded or still asked for has one.
+ */
 function markAt(step: StepNow, turn: TurnNow): Instant | null {
   if (step.doneAt !== null) return step.doneAt;
-  if (step.holdsDeparture) return turn.departedAt === null ? step.finishAt : null;
+  if (step.holdsDeparture)
+    return turn.departedAt === null && turn.health !== 'no-word' ? step.finishAt : null;
   return turn.departedAt !== null && step.state !== 'not-needed' ? step.dueAt : null;
 }
 
@@ -53,7 +60,8 @@ function half(scene: TurnScene, marks: PlacedMark[]): PlacedMark[] {
 }
 
 function markItem(scene: TurnScene, { step, at }: PlacedMark): PictureItem {
-  const className = `${stepMarkClass(step.kind, step.state, step.source)} ${step.place} ${ground(scene.turn, step)}`.trim();
+  const className =
+    `${stepMarkClass(step.kind, step.state, step.source)} ${step.place} ${ground(scene.turn, step)}`.trim();
   return scene.item('work', `mark ${step.key}`, { type: 'point', start: at, className, content: '' });
 }
 

@@ -37,4 +37,3 @@ function runningTestWords(
     return [point(`said ${step.key}`, after(step.dueAt, 7), 'said', words)];
   });
 }
-

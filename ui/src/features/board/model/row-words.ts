@@ -4,7 +4,14 @@ import { formatSlackWords, formatTime } from '../../../lib/time-display';
 import { lowerFirst, nextStep, stepWords } from '../../../lib/turn/step-words';
 import type { TurnNow } from '../../../lib/turn/turn-now';
 import { healthFlag } from '../../../lib/turn/health-flag';
-import { arrivalOf, departureOf, isFarOffPlan, isOver, isStanding } from '../../../lib/turn/turn-times';
+import {
+  arrivalOf,
+  departureOf,
+  isFarOffPlan,
+  isOver,
+  isStanding,
+  shownSlack,
+} from '../../../lib/turn/turn-times';
 
 function placeWords(turn: TurnNow): string {
   return turn.track === null ? 'no track yet' : `track ${turn.track}`;
@@ -27,8 +34,9 @@ function departureWords(turn: TurnNow, zone: string): string {
 }
 
 function standingWords(turn: TurnNow, now: Instant): string {
-  if (turn.health === 'no-word' || turn.health === 'late') return lowerFirst(healthFlag(turn, now) ?? '').replace(/min$/, 'minutes');
-  return formatSlackWords(turn.slackSeconds);
+  if (turn.health === 'no-word' || turn.health === 'late')
+    return lowerFirst(healthFlag(turn, now) ?? '').replace(/min$/, 'minutes');
+  return formatSlackWords(shownSlack(turn));
 }
 
 function alertWords(turn: TurnNow): string {
@@ -44,7 +52,12 @@ export function rowWords(turn: TurnNow, now: Instant): string {
   const { zone } = turn;
   const start = `${placeWords(turn)}, train ${turn.train}`;
   if (turn.annulled !== null) return sentence(`${start}, annulled: ${turn.annulled.reason}`);
-  const parts = [start, lowerFirst(TURN_STATE_WORDS[turn.state]), arrivalWords(turn, zone), departureWords(turn, zone)];
+  const parts = [
+    start,
+    lowerFirst(TURN_STATE_WORDS[turn.state]),
+    arrivalWords(turn, zone),
+    departureWords(turn, zone),
+  ];
   if (!isOver(turn)) parts.push(standingWords(turn, now), ...markedWords(turn));
   const next = isFarOffPlan(turn) ? null : nextStep(turn);
   if (next !== null) parts.push(stepWords(next, zone));

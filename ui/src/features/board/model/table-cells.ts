@@ -5,7 +5,15 @@ import type { TurnNow } from '../../../lib/turn/turn-now';
 import { healthFlag } from '../../../lib/turn/health-flag';
 import { stepCell, type StepCell } from './step-cell';
 import { clockText, timeText } from '../../../lib/turn/time-text';
-import { arrivalOf, departureOf, foremostAlert, isFarOffPlan, isOver, isUntaken } from '../../../lib/turn/turn-times';
+import {
+  arrivalOf,
+  departureOf,
+  foremostAlert,
+  isFarOffPlan,
+  isOver,
+  isUntaken,
+  shownSlack,
+} from '../../../lib/turn/turn-times';
 
 /** A cell of two lines. `estimate` marks a forecast time (written ~17:37, read out "about 17:37"). */
 export interface Cell {
@@ -73,7 +81,7 @@ export function tableRow(turn: TurnNow, context: RowContext): TableRow {
     train: trainCell(turn),
     leaves: leavesCell(turn),
     plan: planCell(turn, context),
-    spare: isOver(turn) || turn.health === 'no-word' ? dash : formatSlack(turn.slackSeconds),
+    spare: formatSlack(shownSlack(turn)),
     state: stateCell(turn),
     set: { text: turn.set ?? dash, ...(turn.cars.length > 0 && { small: carsSaid(turn.cars.length) }) },
     marker: markerCell(turn, tracks),
@@ -101,7 +109,8 @@ function trainCell(turn: TurnNow): Cell {
 function leavesCell(turn: TurnNow): Cell {
   const { zone, scheduledDepartureAt: scheduled, departedAt } = turn;
   if (scheduled === null) return nothing;
-  if (departedAt !== null) return { text: clockText(departedAt, zone), small: `sched ${timeText(scheduled, zone)}` };
+  if (departedAt !== null)
+    return { text: clockText(departedAt, zone), small: `sched ${timeText(scheduled, zone)}` };
   const leaves = departureOf(turn) ?? scheduled;
   const text = timeText(scheduled, zone);
   const expected = turn.expectedDepartureAt;
@@ -123,14 +132,19 @@ function planCell(turn: TurnNow, { now, me, clashesWith }: RowContext): PlanCell
   if (health !== null && turn.health !== 'on-plan') return { ...base, flag: turn.health, text: health };
   if (turn.blueSignal === null) return { ...base, flag: null, text: 'On plan' };
   const since = turn.blueSignal.since === null ? '' : `since ${timeText(turn.blueSignal.since, turn.zone)}, `;
-  return { ...base, flag: 'blue-signal', text: 'Blue signal', small: has || `${since}${surname(turn.blueSignal.by)}` };
+  return {
+    ...base,
+    flag: 'blue-signal',
+    text: 'Blue signal',
+    small: has || `${since}${surname(turn.blueSignal.by)}`,
+  };
 }
 
 function alertSaid(alert: TurnNow['alerts'][number], zone: string, me: string): string {
   const priority = PRIORITY_WORDS[alert.priority];
   if (alert.state === 'raised') return `${priority}, `;
   if (alert.state === 'set-aside' && alert.setAsideUntil !== null) {
-    return `${priority}, set aside to ${timeText(Date.parse(alert.setAsideUntil), zone)}`;
+    return `${priority}, aside to ${timeText(Date.parse(alert.setAsideUntil), zone)}`;
   }
   const who = alert.takenBy === me ? 'you' : surname(alert.takenBy ?? '');
   const at = alert.takenAt === null ? '' : ` ${timeText(Date.parse(alert.takenAt), zone)}`;

@@ -23,7 +23,11 @@ describe('the window of the board', () => {
   });
 
   it('moves from one day to the next when it shows a day', () => {
-    const later = movedChoice({ span: 'day', startAt: null }, { from: at('10:00:00'), to: at('20:00:00') }, 1);
+    const later = movedChoice(
+      { span: 'day', startAt: null },
+      { from: at('10:00:00'), to: at('20:00:00') },
+      1,
+    );
     expect(later).toEqual({ span: 'day', startAt: at('15:00:00') + 24 * 3_600_000 });
   });
 

@@ -44,7 +44,11 @@ function LoadedForm(props: FormProps) {
   if (turn !== undefined) return <EntryForm key={props.target.act} turn={turn} {...props} />;
   return (
     <DialogBody>
-      {error === null ? <LoadingRows what="the turn" rows={4} /> : <ErrorState error={error} onRetry={refetch} />}
+      {error === null ? (
+        <LoadingRows what="the turn" rows={4} />
+      ) : (
+        <ErrorState error={error} onRetry={refetch} />
+      )}
     </DialogBody>
   );
 }
@@ -89,18 +93,17 @@ function EntryForm({ target, turn, onClose, onRecorded }: FormProps & { turn: Tu
           fieldId={fieldId}
           onChange={form.change}
         />
-        {target.act === 'step' && <div className={styles.caution}><SafetyCaution /></div>}
+        {target.act === 'step' && (
+          <div className={styles.caution}>
+            <SafetyCaution />
+          </div>
+        )}
       </DialogBody>
       <DialogFooter
         actions={
           <>
             <Button onClick={onClose}>Cancel</Button>
-            <Button
-              type="submit"
-              intent="primary"
-              loading={form.isSending}
-              disabled={form.waiting !== null}
-            >
+            <Button type="submit" intent="primary" loading={form.isSending} disabled={form.waiting !== null}>
               {form.problem === null ? 'Record' : 'Try again'}
             </Button>
           </>

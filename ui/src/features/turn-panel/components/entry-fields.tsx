@@ -31,7 +31,13 @@ export function EntryFields(props: EntryFieldsProps) {
     <div className={styles.fields}>
       {act === 'step' && <StepFields {...props} />}
       {(act === 'expected-arrival' || act === 'hold') && (
-        <TextField {...props} field="ahead" label={act === 'hold' ? 'Held until' : 'Expected at'} hint="17:44, or +5 for in five minutes" isFirst />
+        <TextField
+          {...props}
+          field="ahead"
+          label={act === 'hold' ? 'Held until' : 'Expected at'}
+          hint="17:44, or +5 for in five minutes"
+          isFirst
+        />
       )}
       {act === 'track' && <TrackFields {...props} />}
       {act === 'set' && <SetFields {...props} />}
@@ -69,7 +75,11 @@ function Field({ field, label, hint, faults, fieldId, children }: FieldProps & {
 }
 
 type TextFieldName = {
-  [Name in DraftField]: EntryDraft[Name] extends string ? (string extends EntryDraft[Name] ? Name : never) : never;
+  [Name in DraftField]: EntryDraft[Name] extends string
+    ? string extends EntryDraft[Name]
+      ? Name
+      : never
+    : never;
 }[DraftField];
 
 function TextField(props: FieldProps & { field: TextFieldName; list?: string; isNumber?: boolean }) {
@@ -95,11 +105,17 @@ function StepFields(props: EntryFieldsProps) {
   const plan = steps.find((step) => step.key === draft.step);
   const reads = draft.cannot ? [] : (plan?.reads ?? []);
   const isCounted = reads.includes('count') || reads.includes('cars');
-  const choose = (key: string): void => onChange({ step: key, cars: [], count: '', saidBy: speakerOf(turn, props.target, key) });
+  const choose = (key: string): void =>
+    onChange({ step: key, cars: [], count: '', saidBy: speakerOf(turn, props.target, key) });
   return (
     <>
       <Field {...props} field="step" label="Step">
-        <HTMLSelect id={fieldId('step')} fill value={draft.step} onChange={(event) => choose(event.target.value)}>
+        <HTMLSelect
+          id={fieldId('step')}
+          fill
+          value={draft.step}
+          onChange={(event) => choose(event.target.value)}
+        >
           <option value="">Choose</option>
           {turn.steps.map((step) => (
             <option key={step.key} value={step.key}>
@@ -120,10 +136,18 @@ function StepFields(props: EntryFieldsProps) {
       />
       {draft.cannot && <TextField {...props} field="reason" label="Why not" isFirst />}
       {isCounted && (
-        <TextField {...props} field="count" label="Handbrakes, how many" isFirst={asksForCount(plan)} isNumber />
+        <TextField
+          {...props}
+          field="count"
+          label="Handbrakes, how many"
+          isFirst={asksForCount(plan)}
+          isNumber
+        />
       )}
       {isCounted && turn.cars.length > 0 && <CarBoxes {...props} />}
-      {reads.includes('brakePipePsi') && <TextField {...props} field="brakePipePsi" label="Brake pipe, psi, if read off" isNumber />}
+      {reads.includes('brakePipePsi') && (
+        <TextField {...props} field="brakePipePsi" label="Brake pipe, psi, if read off" isNumber />
+      )}
       {reads.includes('leakage') && <LeakageFields {...props} />}
     </>
   );
@@ -138,7 +162,13 @@ function CarBoxes({ turn, draft, onChange }: EntryFieldsProps) {
     <fieldset className={styles.cars}>
       <legend>On which cars, from the bumping post</legend>
       {turn.cars.map((car) => (
-        <Checkbox key={car} inline checked={draft.cars.includes(car)} label={car} onChange={() => toggle(car)} />
+        <Checkbox
+          key={car}
+          inline
+          checked={draft.cars.includes(car)}
+          label={car}
+          onChange={() => toggle(car)}
+        />
       ))}
     </fieldset>
   );
@@ -191,7 +221,13 @@ function WhenField(props: EntryFieldsProps) {
   const isFirst = !isOrder && !draft.cannot && !(target.act === 'step' && asksForCount(plan));
   const label = isOrder ? 'Said when' : 'When it happened';
   return (
-    <TextField {...props} field="when" label={label} hint={`Empty: now. 2: two minutes ago. 17:24: then, ${zone}`} isFirst={isFirst} />
+    <TextField
+      {...props}
+      field="when"
+      label={label}
+      hint={`Empty: now. 2: two minutes ago. 17:24: then, ${zone}`}
+      isFirst={isFirst}
+    />
   );
 }
 
@@ -218,7 +254,14 @@ function TrackFields(props: EntryFieldsProps) {
   const tracks = data?.find((terminal) => terminal.code === turn.terminal)?.tracks ?? [];
   return (
     <>
-      <TextField {...props} field="track" label="To track" list={`${fieldId('track')}-list`} isFirst hint={turn.track === null ? 'No track yet' : `Now track ${turn.track}`} />
+      <TextField
+        {...props}
+        field="track"
+        label="To track"
+        list={`${fieldId('track')}-list`}
+        isFirst
+        hint={turn.track === null ? 'No track yet' : `Now track ${turn.track}`}
+      />
       <datalist id={`${fieldId('track')}-list`}>
         {tracks.map((track) => (
           <option key={track.label} value={track.label} />
@@ -234,7 +277,14 @@ function SetFields(props: EntryFieldsProps) {
   const { data } = useQuery(setsQuery);
   return (
     <>
-      <TextField {...props} field="set" label="Set" list={`${fieldId('set')}-list`} isFirst hint={turn.set === null ? 'No set yet' : `Now set ${turn.set}`} />
+      <TextField
+        {...props}
+        field="set"
+        label="Set"
+        list={`${fieldId('set')}-list`}
+        isFirst
+        hint={turn.set === null ? 'No set yet' : `Now set ${turn.set}`}
+      />
       <datalist id={`${fieldId('set')}-list`}>
         {(data ?? []).map((set) => (
           <option key={set.id} value={set.label} />
@@ -268,7 +318,12 @@ function PersonField(props: EntryFieldsProps & { label: string; none?: string; i
   const { data, isError } = useQuery(crewQuery(turn.terminal));
   const people = (data ?? []).filter((member) => member.as.includes(draft.as));
   return (
-    <Field {...props} field="person" label={label} hint={isError ? 'The list of names cannot be read now' : ''}>
+    <Field
+      {...props}
+      field="person"
+      label={label}
+      hint={isError ? 'The list of names cannot be read now' : ''}
+    >
       <HTMLSelect
         id={fieldId('person')}
         fill
@@ -303,7 +358,12 @@ function ReliefFields(props: EntryFieldsProps) {
     <>
       <JobField {...props} />
       <Field {...props} field="out" label="Goes">
-        <HTMLSelect id={fieldId('out')} fill value={draft.out} onChange={(event) => onChange({ out: event.target.value })}>
+        <HTMLSelect
+          id={fieldId('out')}
+          fill
+          value={draft.out}
+          onChange={(event) => onChange({ out: event.target.value })}
+        >
           <option value="">{holders.length === 0 ? 'Nobody is recorded for this job' : 'Choose'}</option>
           {holders.map((member) => (
             <option key={member.personId} value={member.personId}>

@@ -39,7 +39,12 @@ export function EntryLog({ turn, onWithdraw }: EntryLogProps) {
       <h3 className={styles.heading}>
         Log <span className={styles.plain}>{countWords(shown.length, entries.length)}</span>
         {entries.length > fewest && (
-          <Button size="small" className={styles.push ?? ''} aria-expanded={isWhole} onClick={() => setWhole(!isWhole)}>
+          <Button
+            size="small"
+            className={styles.push ?? ''}
+            aria-expanded={isWhole}
+            onClick={() => setWhole(!isWhole)}
+          >
             {isWhole ? 'Fewer' : 'All entries'}
           </Button>
         )}
@@ -49,12 +54,19 @@ export function EntryLog({ turn, onWithdraw }: EntryLogProps) {
       {entries.length > 0 && (
         <table className={styles.log}>
           <caption className="unseen">Entries of this turn, the latest first</caption>
-          <thead className="unseen">
+          <colgroup>
+            {[66, 0, 124, 54, 62].map((width, index) => (
+              <col key={index} {...(width === 0 ? {} : { style: { width } })} />
+            ))}
+          </colgroup>
+          <thead>
             <tr>
               <th scope="col">Time</th>
               <th scope="col">Entry</th>
               <th scope="col">How known</th>
-              <th scope="col">Number</th>
+              <th scope="col" className={styles.number}>
+                Number
+              </th>
               <td />
             </tr>
           </thead>

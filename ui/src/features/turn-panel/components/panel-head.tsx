@@ -41,7 +41,8 @@ export function PanelHead({ turn, now, titleId, onFullPage, onClose }: PanelHead
         {TURN_STATE_WORDS[turn.state]}.{' '}
         {turn.crew.map((member) => (
           <span key={member.as}>
-            <span className="muted">{member.as === 'conductor' ? 'Conductor' : 'Engineer'}</span> {member.name}.{' '}
+            <span className="muted">{member.as === 'conductor' ? 'Conductor' : 'Engineer'}</span>{' '}
+            {member.name}.{' '}
           </span>
         ))}
         {turn.crew.length === 0 && <span className="muted">No crew recorded. </span>}
@@ -61,7 +62,9 @@ function leavesWords(turn: TurnNow, now: number): string {
   const leaves = departureOf(turn);
   if (leaves === null) {
     const arrives = arrivalOf(turn);
-    return turn.arrivedAt !== null || arrives === null ? 'ties up here' : `arrives ${timeText(arrives, zone)}, ties up`;
+    return turn.arrivedAt !== null || arrives === null
+      ? 'ties up here'
+      : `arrives ${timeText(arrives, zone)}, ties up`;
   }
   if (leaves <= now) return `was to leave ${timeText(leaves, zone)}`;
   const held = turn.heldUntil !== null && turn.heldUntil === leaves ? 'held to' : 'leaves';

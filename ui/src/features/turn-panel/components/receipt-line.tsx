@@ -37,7 +37,11 @@ export function ReceiptLine({ recorded, onClose }: { recorded: Recorded; onClose
   };
   return (
     <div className={styles.line} role="status">
-      <span>{record.isSuccess ? 'Taken back.' : `${wordsOf(recorded)} recorded, no. ${numbers.format(recorded.sequence)}.`}</span>
+      <span>
+        {record.isSuccess
+          ? 'Taken back.'
+          : `${wordsOf(recorded)} recorded, no. ${numbers.format(recorded.sequence)}.`}
+      </span>
       {record.error !== null && <b>{errorText(record.error)}</b>}
       {hasUndo && !record.isSuccess && (
         <Button loading={record.isPending} onClick={undo}>

@@ -3,7 +3,7 @@ import { timeText } from '../../../lib/turn/time-text';
 import { formatSlack } from '../../../lib/time-display';
 import type { Stretch } from '../../../lib/turn/turn-times';
 import { squeezeWords, type Squeeze, type SqueezeStep } from '../model/squeeze';
-import { labelPlaces } from '../model/squeeze-labels';
+import { labelPlaces, labelPlacesBackward } from '../model/squeeze-labels';
 import styles from './squeeze-picture.module.css';
 
 const size = { width: 430, height: 120 };
@@ -24,46 +24,92 @@ export function SqueezePicture({ squeeze, now, zone }: SqueezePictureProps) {
   const to = Math.max(squeeze.leavesAt, overlap?.to ?? 0, squeeze.after.at(-1)?.stretch.to ?? 0);
   const x = (instant: number): number => left + ((instant - from) / Math.max(1, to - from)) * (right - left);
   const box = (stretch: Stretch, y: number, className: string, key: string) => (
-    <rect key={key} x={x(stretch.from)} y={y} width={Math.max(0, x(stretch.to) - x(stretch.from))} height={20} className={className} />
+    <rect
+      key={key}
+      x={x(stretch.from)}
+      y={y}
+      width={Math.max(0, x(stretch.to) - x(stretch.from))}
+      height={20}
+      className={className}
+    />
   );
   const late = Math.floor((squeeze.arrivesAt - scheduled.after.from) / 60_000);
   const isNowShown = now >= from && now <= to;
   const scheduledSpare = Math.floor((scheduled.before.from - scheduled.after.to) / 1000);
   return (
-    <svg viewBox={`0 0 ${size.width} ${size.height}`} className={styles.squeeze} role="img" aria-label={spoken(squeeze, scheduledSpare)}>
+    <svg
+      viewBox={`0 0 ${size.width} ${size.height}`}
+      className={styles.squeeze}
+      role="img"
+      aria-label={spoken(squeeze, scheduledSpare)}
+    >
       <Hatch />
       {overlap !== null && (
-        <rect x={x(overlap.from)} y={32} width={x(overlap.to) - x(overlap.from)} height={70} className={styles.overlap} />
+        <rect
+          x={x(overlap.from)}
+          y={32}
+          width={x(overlap.to) - x(overlap.from)}
+          height={70}
+          className={styles.overlap}
+        />
       )}
-      <text x={0} y={16}>Scheduled</text>
+      <text x={0} y={16}>
+        Scheduled
+      </text>
       {box(scheduled.after, rows.scheduled, styles.outline ?? '', 'a')}
       <rect x={x(scheduled.after.from)} y={0} width={4} height={25} className={styles.planPost} />
       {box(scheduled.before, rows.scheduled, styles.outline ?? '', 'b')}
       <path d={`M${x(scheduled.after.to)} 12.5H${x(scheduled.before.from)}`} className={styles.line} />
-      <text x={(x(scheduled.after.to) + x(scheduled.before.from)) / 2} y={9} textAnchor="middle" className={styles.bold}>
+      <text
+        x={(x(scheduled.after.to) + x(scheduled.before.from)) / 2}
+        y={9}
+        textAnchor="middle"
+        className={styles.bold}
+      >
         {formatSlack(scheduledSpare)}
       </text>
 
-      <text x={0} y={45} className={styles.ink}>After arrival,</text>
-      <text x={0} y={59}>{late >= 1 ? `${late} min late` : late <= -1 ? `${-late} min early` : 'on time'}</text>
+      <text x={0} y={45} className={styles.ink}>
+        After arrival,
+      </text>
+      <text x={0} y={59}>
+        {late >= 1 ? `${late} min late` : late <= -1 ? `${-late} min early` : 'on time'}
+      </text>
       {squeeze.done !== null && box(squeeze.done, rows.after, styles.work ?? '', 'done')}
       {squeeze.unrecorded !== null && box(squeeze.unrecorded, rows.after, styles.dashed ?? '', 'open')}
       {squeeze.unrecorded !== null && x(squeeze.unrecorded.to) - x(squeeze.unrecorded.from) > 62 && (
-        <text x={(x(squeeze.unrecorded.from) + x(squeeze.unrecorded.to)) / 2} y={52} textAnchor="middle" className={styles.ink}>
+        <text
+          x={(x(squeeze.unrecorded.from) + x(squeeze.unrecorded.to)) / 2}
+          y={52}
+          textAnchor="middle"
+          className={styles.ink}
+        >
           no record
         </text>
       )}
-      <rect x={x(squeeze.arrivesAt)} y={33} width={4} height={29} className={squeeze.done === null ? styles.planPost : styles.post} />
+      <rect
+        x={x(squeeze.arrivesAt)}
+        y={33}
+        width={4}
+        height={29}
+        className={squeeze.done === null ? styles.planPost : styles.post}
+      />
       {squeeze.after.map((one) => box(one.stretch, rows.after, styles.hatch ?? '', one.step.key))}
       {squeeze.before.map((one) => box(one.stretch, rows.before, styles.hatch ?? '', one.step.key))}
 
-      <text x={0} y={86} className={styles.ink}>Before</text>
-      <text x={0} y={100} className={styles.ink}>departure</text>
-      {overlap !== null && <OverlapEdges from={x(overlap.from)} to={x(overlap.to)} spare={squeeze.spareSeconds} />}
+      <text x={0} y={86} className={styles.ink}>
+        Before
+      </text>
+      <text x={0} y={100} className={styles.ink}>
+        departure
+      </text>
+      {overlap !== null && (
+        <OverlapEdges from={x(overlap.from)} to={x(overlap.to)} spare={squeeze.spareSeconds} />
+      )}
       <path d={`M${x(squeeze.leavesAt)} 0V106`} className={styles.departure} />
       {isNowShown && <path d={`M${x(now)} 28V106`} className={styles.now} />}
       <Marks steps={squeeze.after} x={x} y={41} />
-      <Marks steps={squeeze.before} x={x} y={81} />
+      <Marks steps={squeeze.before} x={x} y={81} isBackward />
       {timeLabels(squeeze, isNowShown ? now : null, x, zone).map(({ place, words, strong }) => (
         <text key={words} x={place} y={118} textAnchor="middle" className={strong ? styles.bold : styles.ink}>
           {words}
@@ -81,7 +127,13 @@ function spoken(squeeze: Squeeze, scheduledSpare: number): string {
 function Hatch() {
   return (
     <defs>
-      <pattern id="squeeze-hatch" width="5" height="5" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
+      <pattern
+        id="squeeze-hatch"
+        width="5"
+        height="5"
+        patternUnits="userSpaceOnUse"
+        patternTransform="rotate(45)"
+      >
         <rect width="5" height="5" className={styles.hatchGround} />
         <path d="M0 0v5" className={styles.hatchLine} />
       </pattern>
@@ -100,9 +152,18 @@ function OverlapEdges({ from, to, spare }: { from: number; to: number; spare: nu
   );
 }
 
-/** Marks of the steps still to do, over their part of the bar; where they would touch they queue to the right. */
-function Marks({ steps, x, y }: { steps: readonly SqueezeStep[]; x: (instant: number) => number; y: number }) {
-  const places = labelPlaces(steps.map((one) => (x(one.stretch.from) + x(one.stretch.to)) / 2 - 7), 15);
+interface MarksProps {
+  steps: readonly SqueezeStep[];
+  x: (instant: number) => number;
+  y: number;
+  /** They queue to the left, away from the departure. */
+  isBackward?: boolean;
+}
+
+/** Marks of the steps still to do, over their part of the bar; where they would touch they queue. */
+function Marks({ steps, x, y, isBackward = false }: MarksProps) {
+  const middles = steps.map((one) => (x(one.stretch.from) + x(one.stretch.to)) / 2 - 7);
+  const places = isBackward ? labelPlacesBackward(middles, 15) : labelPlaces(middles, 15);
   return (
     <>
       {steps.map((one, index) => (

@@ -29,10 +29,10 @@ export function StepsTable({ turn, onRelay, onWithdraw }: StepsTableProps) {
       <caption className="unseen">Steps of the turn</caption>
       <colgroup>
         <col />
-        <col style={{ width: 46 }} />
         <col style={{ width: 50 }} />
+        <col className={styles.latest} style={{ width: 52 }} />
         <col style={{ width: 70 }} />
-        <col style={{ width: 118 }} />
+        <col className={styles.known} />
       </colgroup>
       <thead>
         <tr>
@@ -40,7 +40,7 @@ export function StepsTable({ turn, onRelay, onWithdraw }: StepsTableProps) {
           <th scope="col" className={styles.number}>
             Due
           </th>
-          <th scope="col" className={styles.number}>
+          <th scope="col" className={`${styles.number} ${styles.latest}`}>
             Latest
           </th>
           <th scope="col" className={styles.number}>
@@ -89,7 +89,7 @@ function StepTableRow({ row, onAct }: { row: StepRow; onAct: (() => void) | unde
         )}
       </th>
       <td className={styles.number}>{row.due}</td>
-      <td className={styles.number}>{row.latest}</td>
+      <td className={`${styles.number} ${styles.latest}`}>{row.latest}</td>
       <td className={styles.number}>
         <span className={row.isEstimate ? 'estimate' : undefined}>{row.done}</span>
       </td>

@@ -7,7 +7,15 @@ import { trackWords } from '../model/track-words';
 import styles from './entry-dialog.module.css';
 
 /** What a move would mean, before it is made: length, stopping marker, trains that are there. */
-export function TrackNotice({ turn, to, tracks }: { turn: TurnNow; to: string; tracks: readonly WireTrack[] }) {
+export function TrackNotice({
+  turn,
+  to,
+  tracks,
+}: {
+  turn: TurnNow;
+  to: string;
+  tracks: readonly WireTrack[];
+}) {
   const client = useQueryClient();
   if (to === '' || to === turn.track) return null;
   const boards = client.getQueriesData<WireBoard>({ queryKey: queryKeys.turns.boards });

@@ -1,9 +1,9 @@
 import { Button } from '@blueprintjs/core';
 import type { ReactNode } from 'react';
-import { formatSlack, formatTime } from '../../../lib/time-display';
+import { formatSlackWords, formatTime } from '../../../lib/time-display';
 import { clockText, timeText } from '../../../lib/turn/time-text';
 import type { TurnNow } from '../../../lib/turn/turn-now';
-import { isOver } from '../../../lib/turn/turn-times';
+import { isOver, shownSlack } from '../../../lib/turn/turn-times';
 import type { ActTarget, EntryAct } from '../model/entry-acts';
 import styles from './turn-panel.module.css';
 
@@ -17,24 +17,32 @@ export interface TurnFactsProps {
 /** Forecast in words. */
 export function ForecastWords({ turn, now }: Pick<TurnFactsProps, 'turn' | 'now'>) {
   if (isOver(turn) || turn.outboundTrain === null) return null;
-  const { readyAt, slackSeconds, zone } = turn;
+  const { readyAt, zone } = turn;
+  const slackSeconds = shownSlack(turn);
   if (turn.health === 'no-word' || readyAt === null) {
     return (
       <section aria-label="Forecast">
         <h3 className={styles.heading}>Forecast</h3>
-        <p>No forecast: nothing heard{turn.lastHeardAt === null ? ' yet' : ` since ${clockText(turn.lastHeardAt, zone)}`}.</p>
+        <p>
+          No forecast: nothing heard
+          {turn.lastHeardAt === null ? ' yet' : ` since ${clockText(turn.lastHeardAt, zone)}`}.
+        </p>
       </section>
     );
   }
-  const isReady = turn.steps.every((step) => !step.holdsDeparture || step.doneAt !== null || step.state === 'not-needed');
+  const isReady = turn.steps.every(
+    (step) => !step.holdsDeparture || step.doneAt !== null || step.state === 'not-needed',
+  );
   return (
     <section aria-label="Forecast">
       <h3 className={styles.heading}>Forecast</h3>
       <p>
         <strong className={styles.large}>
-          {isReady ? `Ready since ${clockText(readyAt, zone)}` : `Ready by ${formatTime(Math.max(readyAt, now), zone)}`}
+          {isReady
+            ? `Ready since ${clockText(readyAt, zone)}`
+            : `Ready by ${formatTime(Math.max(readyAt, now), zone)}`}
         </strong>
-        {slackSeconds !== null && `, ${formatSlack(slackSeconds)} min ${slackSeconds < 0 ? 'short' : 'to spare'}`}
+        {slackSeconds !== null && `, ${formatSlackWords(slackSeconds)}`}
       </p>
       <p className={styles.fine}>From the plan’s times, at typical pace.</p>
     </section>
@@ -76,7 +84,11 @@ export function TurnFacts(props: TurnFactsProps) {
         {(['conductor', 'engineer'] as const).map((as) => {
           const holder = turn.crew.find((member) => member.as === as);
           return (
-            <Fact key={as} term={as === 'conductor' ? 'Conductor' : 'Engineer'} fact={holder?.name ?? 'nobody recorded'}>
+            <Fact
+              key={as}
+              term={as === 'conductor' ? 'Conductor' : 'Engineer'}
+              fact={holder?.name ?? 'nobody recorded'}
+            >
               {isOpen && button('crew', holder === undefined ? 'Name' : 'Change', { as })}
               {isOpen && holder !== undefined && button('relief', 'Relief', { as })}
             </Fact>
@@ -118,7 +130,8 @@ function arrivalWords({ arrivedAt, expectedArrivalAt, scheduledArrivalAt, zone }
 
 function departureWords({ departedAt, heldUntil, holdReason, scheduledDepartureAt, zone }: TurnNow): string {
   if (departedAt !== null) return clockText(departedAt, zone);
-  if (heldUntil !== null) return `held to ${timeText(heldUntil, zone)}${holdReason === null ? '' : `: ${holdReason}`}`;
+  if (heldUntil !== null)
+    return `held to ${timeText(heldUntil, zone)}${holdReason === null ? '' : `: ${holdReason}`}`;
   return scheduledDepartureAt === null ? '–' : `due ${timeText(scheduledDepartureAt, zone)}`;
 }
 

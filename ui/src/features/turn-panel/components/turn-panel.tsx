@@ -55,7 +55,11 @@ export function TurnPanel(props: TurnPanelProps) {
     >
       {turn === undefined && (
         <div className={styles.head}>
-          {error === null ? <LoadingRows what="the turn" rows={8} /> : <ErrorState error={error} onRetry={refetch} />}
+          {error === null ? (
+            <LoadingRows what="the turn" rows={8} />
+          ) : (
+            <ErrorState error={error} onRetry={refetch} />
+          )}
           <Button onClick={onClose}>Close</Button>
         </div>
       )}
@@ -78,7 +82,8 @@ function usePanelKeys({ turnId, terminal, onAct, onClose }: TurnPanelProps, turn
       return;
     }
     const act = letterActs[event.key.toLowerCase()];
-    if (act === undefined || !letterKeys || turn === undefined || !acts.has(act) || isTyping(event.target)) return;
+    if (act === undefined || !letterKeys || turn === undefined || !acts.has(act) || isTyping(event.target))
+      return;
     event.preventDefault();
     onAct({ act, turnId });
   };
@@ -90,9 +95,11 @@ function PanelBody(props: TurnPanelProps & { turn: TurnNow; titleId: string }) {
   const person = usePerson();
   const acts = actsOf(person, terminal.code);
   const { data: plan } = useQuery(planQuery(turn.planId));
-  const typicalOf = (key: string): number => plan?.steps.find((step) => step.key === key)?.typicalSeconds ?? 0;
+  const typicalOf = (key: string): number =>
+    plan?.steps.find((step) => step.key === key)?.typicalSeconds ?? 0;
   const squeeze = plan === undefined ? null : squeezeOf(turn, typicalOf, now);
-  const open = (act: EntryAct, rest: Partial<ActTarget> = {}): void => props.onAct({ act, turnId: turn.id, ...rest });
+  const open = (act: EntryAct, rest: Partial<ActTarget> = {}): void =>
+    props.onAct({ act, turnId: turn.id, ...rest });
   const withdraw = acts.has('withdrawn')
     ? (entryId: string, entryWords: string) => open('withdrawn', { entryId, entryWords })
     : undefined;

@@ -7,7 +7,13 @@ import type { TurnNow } from '../../../lib/turn/turn-now';
 import { readNow } from '../../../lib/use-now';
 import { useRecordEntry } from '../api/record-entry';
 import { isWitnessed, usualSource, type ActTarget } from '../model/entry-acts';
-import { emptyDraft, readDraft, type DraftFault, type EntryBody, type EntryDraft } from '../model/entry-draft';
+import {
+  emptyDraft,
+  readDraft,
+  type DraftFault,
+  type EntryBody,
+  type EntryDraft,
+} from '../model/entry-draft';
 import { secondBarWords } from '../model/second-bar';
 
 /** What was recorded, for the line that answers the act. */
@@ -80,13 +86,19 @@ function firstDraft(target: ActTarget, turn: TurnNow, person: ReturnType<typeof 
   const as = target.as ?? 'conductor';
   const source = usualSource(person, turn.terminal, target.act);
   const holder = turn.crew.find((member) => member.as === as);
-  const draft = emptyDraft({ ...target, step }, source, isWitnessed(target.act) ? speakerOf(turn, target, step) : '');
+  const draft = emptyDraft(
+    { ...target, step },
+    source,
+    isWitnessed(target.act) ? speakerOf(turn, target, step) : '',
+  );
   return { ...draft, as, out: target.act === 'relief' ? (holder?.personId ?? '') : '' };
 }
 
 /** Who most likely speaks on the radio: the one who does the step, else the conductor. It can be changed. */
 export function speakerOf(turn: TurnNow, target: Pick<ActTarget, 'act'>, stepKey: string | null): string {
   const step = target.act === 'step' ? turn.steps.find((one) => one.key === stepKey) : undefined;
-  const speaker = turn.crew.find((member) => member.as === step?.doer) ?? turn.crew.find((member) => member.as === 'conductor');
+  const speaker =
+    turn.crew.find((member) => member.as === step?.doer) ??
+    turn.crew.find((member) => member.as === 'conductor');
   return speaker?.name ?? turn.crew[0]?.name ?? '';
 }

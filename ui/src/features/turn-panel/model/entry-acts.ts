@@ -1,4 +1,10 @@
-import { recordableKinds, rolesAt, type EntryKind, type EntrySource, type PersonAccess } from '@stubpost/shared';
+import {
+  recordableKinds,
+  rolesAt,
+  type EntryKind,
+  type EntrySource,
+  type PersonAccess,
+} from '@stubpost/shared';
 
 /** What can be entered about a turn; each has a form. */
 export const ENTRY_ACTS = [

@@ -12,11 +12,23 @@ const read = (act: ActTarget['act'], change: Partial<EntryDraft> = {}, rest: Par
 const iso = (clock: string): string => new Date(clockAt(clock)).toISOString();
 
 const good: [ActTarget['act'], Partial<EntryDraft>, object][] = [
-  ['step', { step: 'cab-brake-check', when: '2' }, { kind: 'step-done', step: 'cab-brake-check', observedAt: iso('17:24:40') }],
+  [
+    'step',
+    { step: 'cab-brake-check', when: '2' },
+    { kind: 'step-done', step: 'cab-brake-check', observedAt: iso('17:24:40') },
+  ],
   ['step', { step: 'handbrake-set', count: '2' }, { reading: { count: 2 } }],
-  ['step', { step: 'handbrake-released', cars: ['2235', '4107'] }, { reading: { count: 2, cars: ['2235', '4107'] } }],
+  [
+    'step',
+    { step: 'handbrake-released', cars: ['2235', '4107'] },
+    { reading: { count: 2, cars: ['2235', '4107'] } },
+  ],
   ['step', { step: 'brakes-released', brakePipePsi: '110' }, { reading: { brakePipePsi: 110 } }],
-  ['step', { step: 'ends-changed', cannot: true, reason: 'cab locked' }, { kind: 'cannot-do', reason: 'cab locked' }],
+  [
+    'step',
+    { step: 'ends-changed', cannot: true, reason: 'cab locked' },
+    { kind: 'cannot-do', reason: 'cab locked' },
+  ],
   ['arrival', { when: '17:19:10' }, { kind: 'arrival', observedAt: iso('17:19:10'), saidBy: 'P. Varga' }],
   ['departure', {}, { kind: 'departure', observedAt: iso('17:26:40') }],
   ['expected-arrival', { ahead: '17:44' }, { expectedAt: iso('17:44') }],

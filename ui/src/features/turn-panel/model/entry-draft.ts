@@ -197,7 +197,8 @@ function numberIn(
   if (text === '') return null;
   const value = Number(text);
   const largest = field === 'seconds' ? 3600 : 200;
-  const isGood = Number.isFinite(value) && value >= 0 && value <= largest && (!isWhole || Number.isInteger(value));
+  const isGood =
+    Number.isFinite(value) && value >= 0 && value <= largest && (!isWhole || Number.isInteger(value));
   if (!isGood) faults.push({ field, words: `Give a ${isWhole ? 'whole ' : ''}number up to ${largest}` });
   return isGood ? value : null;
 }

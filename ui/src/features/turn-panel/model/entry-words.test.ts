@@ -20,10 +20,16 @@ const words = (fields: Parameters<typeof entry>[0]) => entryWords(entry(fields),
 
 describe('an entry in words', () => {
   it.each([
-    [{ kind: 'step-done', step: 'handbrake-set', reading: { count: 2, cars: ['2235', '4107'] } }, 'Handbrake set, 2: 2235, 4107'],
+    [
+      { kind: 'step-done', step: 'handbrake-set', reading: { count: 2, cars: ['2235', '4107'] } },
+      'Handbrake set, 2: 2235, 4107',
+    ],
     [{ kind: 'step-done', step: 'brakes-released', reading: { brakePipePsi: 110 } }, 'Air charged, 110 psi'],
     [{ kind: 'step-done', step: 'lost' }, 'lost'],
-    [{ kind: 'cannot-do', step: 'handbrake-set', reason: 'wheel frozen' }, 'Handbrake set cannot be done: wheel frozen'],
+    [
+      { kind: 'cannot-do', step: 'handbrake-set', reason: 'wheel frozen' },
+      'Handbrake set cannot be done: wheel frozen',
+    ],
     [{ kind: 'expected-arrival', expectedAt: '2026-03-03T22:44:00.000Z' }, 'Expected 17:44'],
     [{ kind: 'hold', until: '2026-03-03T22:40:00.000Z', reason: 'connection' }, 'Held to 17:40: connection'],
     [{ kind: 'crew', person: { id: 'p', name: 'Q. Quist' }, as: 'engineer' }, 'Q. Quist as engineer'],
@@ -31,7 +37,10 @@ describe('an entry in words', () => {
       { kind: 'relief', out: { name: 'A' }, in: { name: 'B' }, as: 'engineer', faceToFace: true },
       'A relieved as engineer by B, face to face',
     ],
-    [{ kind: 'relief', out: { name: 'A' }, in: null, as: 'conductor' }, 'A relieved as conductor, nobody took over'],
+    [
+      { kind: 'relief', out: { name: 'A' }, in: null, as: 'conductor' },
+      'A relieved as conductor, nobody took over',
+    ],
     [{ kind: 'annulled', reason: 'no crew' }, 'Annulled: no crew'],
     [{ kind: 'note', note: 'door 3 slow' }, 'Note: door 3 slow'],
   ])('%j', (fields, expected) => {
@@ -39,14 +48,16 @@ describe('an entry in words', () => {
   });
 
   it('says how it is known, who said it and who wrote it', () => {
-    expect(knownWords(entry({ source: 'by-radio', saidBy: 'P. Varga', by: { id: 'd', name: 'R. Hallam' } }))).toBe(
-      'by radio, P. Varga (R. Hallam)',
-    );
+    expect(
+      knownWords(entry({ source: 'by-radio', saidBy: 'P. Varga', by: { id: 'd', name: 'R. Hallam' } })),
+    ).toBe('by radio, P. Varga (R. Hallam)');
     expect(knownWords(entry({ source: 'by-feed', by: null }))).toBe('by feed');
     expect(knownWords(entry({}))).toBe('by hand, M. Tolland');
   });
 
   it('knows which entries were taken back', () => {
-    expect([...withdrawnIds([entry({}), entry({ id: 'e-2', kind: 'withdrawn', target: 'e-1' })])]).toEqual(['e-1']);
+    expect([...withdrawnIds([entry({}), entry({ id: 'e-2', kind: 'withdrawn', target: 'e-1' })])]).toEqual([
+      'e-1',
+    ]);
   });
 });

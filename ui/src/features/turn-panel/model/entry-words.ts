@@ -86,11 +86,16 @@ function readingWords({ reading }: WireEntry): string {
 export function knownWords(entry: Pick<WireEntry, 'source' | 'saidBy' | 'by'>): string {
   const writer = entry.by?.name;
   const how = SOURCE_WORDS[entry.source];
-  if (entry.saidBy !== undefined) return `${how}, ${entry.saidBy}${writer === undefined ? '' : ` (${writer})`}`;
+  if (entry.saidBy !== undefined)
+    return `${how}, ${entry.saidBy}${writer === undefined ? '' : ` (${writer})`}`;
   return writer === undefined ? how : `${how}, ${writer}`;
 }
 
 /** Ids of the entries that a later entry takes back. */
 export function withdrawnIds(entries: readonly WireEntry[]): ReadonlySet<string> {
-  return new Set(entries.flatMap((entry) => (entry.kind === 'withdrawn' && entry.target !== undefined ? [entry.target] : [])));
+  return new Set(
+    entries.flatMap((entry) =>
+      entry.kind === 'withdrawn' && entry.target !== undefined ? [entry.target] : [],
+    ),
+  );
 }

@@ -7,3 +7,11 @@ export function labelPlaces(wanted: readonly number[], width: number): number[] 
     return set;
   });
 }
+
+/** The same from the right: each where it is wanted, or left of the one after it. */
+export function labelPlacesBackward(wanted: readonly number[], width: number): number[] {
+  const mirrored = [...wanted].reverse().map((place) => -place);
+  return labelPlaces(mirrored, width)
+    .map((place) => -place)
+    .reverse();
+}

@@ -3,7 +3,8 @@ import { turnAt } from '../../../lib/turn/turn-at';
 import { squeezeOf, squeezeWords } from './squeeze';
 import type { Entry } from '@stubpost/shared';
 
-const typicalOf = (key: string): number => wirePlan.steps.find((step) => step.key === key)?.typicalSeconds ?? 0;
+const typicalOf = (key: string): number =>
+  wirePlan.steps.find((step) => step.key === key)?.typicalSeconds ?? 0;
 const planned = { scheduledArrivalAt: clockAt('17:14'), scheduledDepartureAt: clockAt('17:34') };
 const at = (clock: string, entries: Entry[]) => {
   const now = clockAt(clock);

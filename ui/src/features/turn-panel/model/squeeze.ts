@@ -44,7 +44,10 @@ export function squeezeOf(turn: TurnNow, typicalOf: (key: string) => number, now
   const total = (steps: readonly StepNow[]): number => steps.reduce((sum, step) => sum + length(step), 0);
 
   const after = inward.flatMap((step) => openStretch(step, now));
-  const before = pinned(outward.filter((step) => step.doneAt === null), length);
+  const before = pinned(
+    outward.filter((step) => step.doneAt === null),
+    length,
+  );
   const recorded = inward.flatMap((step) => (step.doneAt === null ? [] : [step.doneAt]));
   const lastRecord = recorded.length === 0 ? turn.arrivedAt : Math.max(...recorded);
   const workEnds = after.at(-1)?.stretch.to ?? lastRecord ?? now;

@@ -31,7 +31,9 @@ export function stepGroups(turn: TurnNow): StepGroup[] {
     .map((anchor) => ({
       anchor,
       heading: anchor === 'arrival' ? arrivalHeading(turn) : departureHeading(turn),
-      rows: turn.steps.filter((step) => step.anchor === anchor).map((step) => stepRow(step, turn, step === next)),
+      rows: turn.steps
+        .filter((step) => step.anchor === anchor)
+        .map((step) => stepRow(step, turn, step === next)),
     }))
     .filter((group) => group.rows.length > 0);
 }
@@ -46,7 +48,8 @@ function arrivalHeading({ arrivedAt, scheduledArrivalAt, expectedArrivalAt, zone
 function departureHeading({ departedAt, scheduledDepartureAt, heldUntil, zone }: TurnNow): string {
   if (scheduledDepartureAt === null) return 'From the departure';
   const scheduled = timeText(scheduledDepartureAt, zone);
-  if (departedAt !== null) return `From the departure, ${clockText(departedAt, zone)} (scheduled ${scheduled})`;
+  if (departedAt !== null)
+    return `From the departure, ${clockText(departedAt, zone)} (scheduled ${scheduled})`;
   if (heldUntil !== null && heldUntil > scheduledDepartureAt) {
     return `From the departure, held to ${timeText(heldUntil, zone)} (scheduled ${scheduled})`;
   }

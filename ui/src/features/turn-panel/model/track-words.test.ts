@@ -11,13 +11,24 @@ const tracks = [
 ];
 const other = (track: string, from: string, to: string) =>
   aWireTurn(
-    { planned: { id: 'o', outboundTrain: '1644', track, scheduledArrivalAt: clockAt(from), scheduledDepartureAt: clockAt(to) } },
+    {
+      planned: {
+        id: 'o',
+        outboundTrain: '1644',
+        track,
+        scheduledArrivalAt: clockAt(from),
+        scheduledDepartureAt: clockAt(to),
+      },
+    },
     now,
   );
 
 describe('a move to another track, before it is made', () => {
   it('says from where to where, and the stopping marker', () => {
-    expect(trackWords(turn, '5', tracks, [])).toEqual(['Train 1742: track 3 to track 5.', 'Stops at marker C.']);
+    expect(trackWords(turn, '5', tracks, [])).toEqual([
+      'Train 1742: track 3 to track 5.',
+      'Stops at marker C.',
+    ]);
   });
 
   it('says when the train is too long', () => {
@@ -25,10 +36,15 @@ describe('a move to another track, before it is made', () => {
   });
 
   it('names the trains that are there meanwhile, and only those', () => {
-    expect(trackWords(turn, '5', tracks, [other('5', '17:10', '17:30')])).toContain('Train 1644 is there 17:10 to 17:30.');
+    expect(trackWords(turn, '5', tracks, [other('5', '17:10', '17:30')])).toContain(
+      'Train 1644 is there 17:10 to 17:30.',
+    );
     expect(trackWords(turn, '5', tracks, [other('5', '17:20', '17:30')])).toHaveLength(2);
     expect(trackWords(turn, '5', tracks, [other('4', '17:10', '17:30')])).toHaveLength(2);
-    const annulled = { ...other('5', '17:10', '17:30'), annulled: { at: entryAt('annulled', '16:40').id, reason: 'x' } };
+    const annulled = {
+      ...other('5', '17:10', '17:30'),
+      annulled: { at: entryAt('annulled', '16:40').id, reason: 'x' },
+    };
     expect(trackWords(turn, '5', tracks, [annulled])).toHaveLength(2);
   });
 });

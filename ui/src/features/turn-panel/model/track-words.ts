@@ -13,9 +13,12 @@ export function trackWords(
   const track = tracks.find((one) => one.label === to);
   const cars = turn.cars.length;
   const marker = track?.markers?.find((one) => one.cars === cars)?.label;
-  const words = [`Train ${turn.train}: ${turn.track === null ? 'no track' : `track ${turn.track}`} to track ${to}.`];
+  const words = [
+    `Train ${turn.train}: ${turn.track === null ? 'no track' : `track ${turn.track}`} to track ${to}.`,
+  ];
   if (track === undefined) words.push(`Track ${to} is not known at this terminal; it will be added.`);
-  if (track?.cars !== undefined && cars > track.cars) words.push(`Too long: ${cars} cars, track ${to} fits ${track.cars}.`);
+  if (track?.cars !== undefined && cars > track.cars)
+    words.push(`Too long: ${cars} cars, track ${to} fits ${track.cars}.`);
   if (marker !== undefined) words.push(`Stops at marker ${marker}.`);
   return [...words, ...clashWords(turn, to, others)];
 }

@@ -24,7 +24,11 @@ describe('when something happened, as typed', () => {
 
   it('means the evening before when it is typed after midnight', () => {
     const night = at('2026-03-04T05:10:00Z');
-    expect(readWhen('23:55', zone, night)).toEqual({ ok: true, at: at('2026-03-04T04:55:00Z'), said: 'typed' });
+    expect(readWhen('23:55', zone, night)).toEqual({
+      ok: true,
+      at: at('2026-03-04T04:55:00Z'),
+      said: 'typed',
+    });
   });
 
   it('is read on the terminal’s clock on both sides of a clock change', () => {
