@@ -49,6 +49,8 @@ export function PlanEditor({ terminal, from, onDone }: PlanEditorProps) {
   const { steps, problems } = useMemo(() => readPlan(rows), [rows]);
   const figures = useMemo(() => planFigures(steps, problems.length > 0), [steps, problems]);
   const chosen = rows.find(({ id }) => id === chosenId);
+  // A time that cannot be read yet, or steps that wait for one another, leave nothing to add up.
+  const isReckoned = !problems.some(({ field }) => field === 'typical' || field === 'after');
   const heads = headProblems(name, effectiveFrom);
 
   const submit = (event: FormEvent): void => {
@@ -103,7 +105,7 @@ export function PlanEditor({ terminal, from, onDone }: PlanEditorProps) {
           <div className={styles.figures} aria-live="polite">
             <Figure
               label="Shortest turn"
-              value={formatDuration(figures.shortestSeconds)}
+              value={isReckoned ? formatDuration(figures.shortestSeconds) : '–'}
               remark="arrival to departure, at typical durations"
             />
             <Figure label="To mend" value={problems.length === 0 ? 'nothing' : problems.length} />

@@ -175,8 +175,8 @@ function AfterChoice({ draft, others, problem, onChange }: AfterProps) {
   ];
   return (
     <fieldset id={stepFieldId(draft.id, 'after')} tabIndex={-1}>
+      <legend className={styles.legend}>After</legend>
       <div className={styles.choices}>
-        <legend>After</legend>
         {choices.map(({ key, label }) => (
           <Checkbox
             key={key}
@@ -194,8 +194,8 @@ function AfterChoice({ draft, others, problem, onChange }: AfterProps) {
 function ReadingChoice({ draft, onChange }: { draft: StepDraft; onChange: (reads: ReadingKey[]) => void }) {
   return (
     <fieldset>
+      <legend className={styles.legend}>Reads off or counts</legend>
       <div className={styles.choices}>
-        <legend>Reads off or counts</legend>
         {optionsOf(READING_WORDS).map(({ value, label }) => (
           <Checkbox
             key={value}

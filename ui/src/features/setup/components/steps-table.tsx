@@ -77,7 +77,7 @@ function Row({ row, names, latest, isChosen, onChoose }: RowProps) {
         >
           {step.shortLabel === '' ? 'New step' : step.shortLabel}
         </button>
-        {row.isWrong && <span className={styles.wrong}> to mend</span>}
+        {row.isWrong && <span className={`${styles.wrong} ${styles.mend}`}>to mend</span>}
       </th>
       <td>{DOER_WORDS[step.doer]}</td>
       <td className={styles.nowrap}>{formatAnchored(step.anchor, step.offsetSeconds)}</td>

@@ -92,7 +92,9 @@ function Row({
         >
           {markerSummary(track.markers)}
         </button>
-        {own.some(({ field }) => field === 'markers') && <span className={styles.wrong}> to mend</span>}
+        {own.some(({ field }) => field === 'markers') && (
+          <span className={`${styles.wrong} ${styles.mend}`}>to mend</span>
+        )}
       </td>
       <td className={styles.nowrap}>
         <Button size="small" aria-label={`Move ${name} up`} onClick={() => onMove(track.id, -1)}>
