@@ -66,7 +66,7 @@ describe.skipIf(browserIsMissing())('an extra turn, from the desk to the last st
   async function enterExtraTurn(page: Page): Promise<void> {
     const now = Date.now();
     await page.getByRole('button', { name: 'Extra turn' }).click();
-    const dialog = page.getByRole('dialog');
+    const dialog = page.getByRole('dialog', { name: 'Extra turn' });
     await dialog.getByLabel('Inbound train').fill('9731');
     await dialog.getByLabel('Arrives').fill(clock(now));
     await dialog.getByLabel('Outbound train').fill('9742');

@@ -14,7 +14,7 @@ export async function takeTurn(page: Page, train: string): Promise<void> {
   await take.waitFor();
   await page.waitForTimeout(deafMilliseconds);
   await take.click();
-  await page.getByText(/^Done \d/).waitFor();
+  await page.getByRole('region', { name: /^(Next step|After this)$/ }).waitFor();
 }
 
 /** Waits until the next step stands under the bar, going on at once where the page offers it. */
@@ -43,7 +43,7 @@ export async function recordNext(page: Page): Promise<string> {
   if (await lift.isVisible()) await lift.click();
   await putIn(page);
   await page.waitForTimeout(deafMilliseconds);
-  await bar(page).click();
+  await page.getByRole('button', { name: /Record now|Record for earlier/ }).click();
   const second = page.getByRole('region', { name: 'Second touch' }).getByRole('button');
   await page
     .getByText(/^Done \d/)
