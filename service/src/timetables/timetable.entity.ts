@@ -2,10 +2,6 @@ import type { ImportProblem, TimetableSummary } from '@stubpost/shared';
 import { Column, Entity, PrimaryColumn } from 'typeorm';
 import { instantColumn, jsonColumn, nullableInstantColumn } from '../database/columns';
 
-/** How far the reading of an upload has come; whether a timetable is the running one follows from its activations. */
-export const READING_STATES = ['reading', 'ready', 'refused'] as const;
-export type ReadingState = (typeof READING_STATES)[number];
-
 /** One uploaded timetable and what was found in it. */
 @Entity('timetable')
 export class TimetableRow {
@@ -15,6 +11,7 @@ export class TimetableRow {
   @Column({ type: 'integer' })
   version: number;
 
+  /** `reading`, `ready` or `refused`; whether it is the running one follows from its activations. */
   @Column({ type: 'text' })
   state: string;
 
