@@ -1,7 +1,11 @@
+import { SchedulerRegistry } from '@nestjs/schedule';
 import { sweepSilenceSeconds } from '@stubpost/shared';
 import supertest from 'supertest';
+import type { DataSource } from 'typeorm';
 import { FixedClock } from '../src/common/clock';
+import { READER } from '../src/database/tokens';
 import { SweepHeartbeat } from '../src/health/sweep-heartbeat';
+import { turnSweepTimer } from '../src/turns/turn-sweep.job';
 import { bootApp, type Booted } from './support/boot';
 
 describe('GET /api/health', () => {
@@ -12,6 +16,8 @@ describe('GET /api/health', () => {
   beforeEach(async () => {
     clock = new FixedClock(startedAt);
     booted = await bootApp({ clock });
+    // The sweeps of these tests are made by hand.
+    booted.app.get(SchedulerRegistry).deleteInterval(turnSweepTimer);
   });
   afterEach(() => booted.close());
 
@@ -32,6 +38,12 @@ describe('GET /api/health', () => {
     clock.advance(sweepSilenceSeconds + 1);
     const answer = await ask().expect(503);
     expect(answer.body).toMatchObject({ status: 'unwell', problems: ['the alert sweep is silent'] });
+  });
+
+  test('a database that does not answer makes the service unwell', async () => {
+    await booted.app.get<DataSource>(READER).destroy();
+    const answer = await ask().expect(503);
+    expect(answer.body).toMatchObject({ status: 'unwell', problems: ['the database does not answer'] });
   });
 
   test('a sweep that fell silent makes the service unwell, and well again when it is back', async () => {

@@ -1,7 +1,7 @@
 import { mkdirSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import supertest from 'supertest';
-import { pathForLog } from '../src/common/log.module';
+import { pathForLog } from '../src/common/path-for-log';
 import { bootApp, type Booted } from './support/boot';
 import { signIn } from './support/sign-in';
 import { temporaryFolder } from './support/temporary-folder';

@@ -1,4 +1,4 @@
-import { Injectable } from '@nestjs/common';
+import { Injectable, Logger } from '@nestjs/common';
 import type { Role, SignedInPerson } from '@stubpost/shared';
 import { Refusal } from '../common/refusal';
 import type { Visitor } from '../common/visitor';
@@ -24,6 +24,9 @@ interface AccountRow {
 /** Lets people in by address and password, and lets them change it. */
 @Injectable()
 export class SignInService {
+  /** Who came in is told by id, never by name or address. */
+  private readonly logger = new Logger('sign-in');
+
   constructor(
     private readonly unitOfWork: UnitOfWork,
     private readonly reader: Reader,
@@ -41,6 +44,7 @@ export class SignInService {
     if (account === undefined || !matches || !account.active) {
       throw new Refusal({ code: 'session.wrong_credentials', message: 'address or password is wrong' });
     }
+    this.logger.log(`person ${account.id} signed in`);
     return this.unitOfWork.run(async (transaction) => {
       await this.throttle.forget(transaction, attempt);
       const opened = await this.sessions.open(transaction, account.id, visitor.device);
@@ -77,6 +81,7 @@ export class SignInService {
       ]);
       await this.sessions.endAllOf(transaction, who.personId, who.sessionId);
     });
+    this.logger.log(`person ${who.personId} changed their password`);
   }
 
   private accountsWhere(column: 'id' | 'email', value: string): Promise<AccountRow[]> {

@@ -3,6 +3,7 @@ import { type DynamicModule, Module } from '@nestjs/common';
 import { LoggerModule } from 'nestjs-pino';
 import { type LogFn, type Logger as PinoLogger, stdTimeFunctions } from 'pino';
 import { Config } from '../config/config';
+import { pathForLog } from './path-for-log';
 import { requestIdOf } from './request-id';
 
 /**
@@ -49,10 +50,4 @@ function dropWiring(this: PinoLogger, args: Parameters<LogFn>, log: LogFn, level
     typeof facts === 'object' && facts !== null && 'context' in facts ? facts.context : undefined;
   if (level <= infoLevel && wiring.includes(String(context))) return;
   log.apply(this, args);
-}
-
-/** The path without its query, and with the token of a one-time link taken out. */
-export function pathForLog(url: string): string {
-  const [path = ''] = url.split('?');
-  return path.replace(/^(\/api\/links\/|\/link\/).+/, '$1…');
 }

@@ -2,6 +2,7 @@ import { type ArgumentsHost, Catch, type ExceptionFilter, HttpException, Logger 
 import type { ErrorBody, ErrorCode } from '@stubpost/shared';
 import type { Request, Response } from 'express';
 import { Refusal } from './refusal';
+import { pathForLog } from './path-for-log';
 import { requestIdOf } from './request-id';
 
 /** Codes for refusals that come from the framework and its body parsers, by their status. */
@@ -15,6 +16,9 @@ const codeOfStatus: Record<number, ErrorCode> = {
   429: 'request.too_many',
   503: 'server.busy',
 };
+
+/** Refusals that somebody who looks after security wants to see; never with names, bodies or addresses. */
+const securityStatuses: readonly number[] = [403, 429];
 
 const messageOfCode: Partial<Record<ErrorCode, string>> = {
   'request.malformed': 'the request cannot be read',
@@ -38,7 +42,14 @@ export class RefusalFilter implements ExceptionFilter {
     const refusal = this.refusalFrom(thrown);
     if (refusal.status >= 500) {
       const stack = thrown instanceof Error ? thrown.stack : String(thrown);
-      this.logger.error(`${request.method} ${request.path} failed (${requestId}): ${stack}`);
+      this.logger.error(
+        `${request.method} ${pathForLog(request.originalUrl)} failed (${requestId}): ${stack}`,
+      );
+    }
+    if (securityStatuses.includes(refusal.status)) {
+      this.logger.warn(
+        `${request.method} ${pathForLog(request.originalUrl)} refused: ${refusal.body.code} (${requestId})`,
+      );
     }
     if (response.headersSent) {
       response.end();

@@ -1,5 +1,5 @@
 import { randomUUID } from 'node:crypto';
-import { Injectable } from '@nestjs/common';
+import { Injectable, Logger } from '@nestjs/common';
 import {
   ALL_TERMINALS,
   type CreatePersonRequest,
@@ -26,6 +26,8 @@ export interface AddedPerson {
 /** Adds people, changes what they may do, and gives or takes away their ways in. */
 @Injectable()
 export class PeopleService {
+  private readonly logger = new Logger('people');
+
   constructor(
     private readonly unitOfWork: UnitOfWork,
     private readonly people: PeopleRepository,
@@ -102,6 +104,7 @@ export class PeopleService {
   private async requireWithin(transaction: Transaction, id: string, actor: PersonAccess): Promise<PersonRow> {
     const person = await this.people.require(transaction, id);
     this.requireReach(actor, await this.people.rolesOf(transaction, id));
+    transaction.afterCommit(() => this.logger.log(`person ${id} was changed by ${actor.id}`));
     return person;
   }
 
