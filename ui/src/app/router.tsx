@@ -1,12 +1,12 @@
 import type { RouteObject } from 'react-router-dom';
 import { AnyShell } from './any-shell';
-import { DeskShell } from './desk-shell';
 import { Permitted, SignedInOnly, ToBoard, ToHome } from './guards';
 import { PhoneShell } from './phone-shell';
 import { PlainShell } from './plain-shell';
 import { NotFoundPage } from './routes/not-found-page';
 import { PageOnItsWay, RouteFault } from './route-fault';
 
+const deskShell = () => import('./desk-shell').then(({ DeskShell }) => ({ Component: DeskShell }));
 const boardPage = () => import('./routes/board-page').then(({ BoardPage }) => ({ Component: BoardPage }));
 const alertsPage = () => import('./routes/alerts-page').then(({ AlertsPage }) => ({ Component: AlertsPage }));
 const historyPage = () =>
@@ -68,7 +68,7 @@ export const routes: RouteObject[] = [
         element: <SignedInOnly />,
         children: [
           { path: '/', element: <ToHome /> },
-          { element: <DeskShell />, children: deskPages },
+          { lazy: deskShell, children: deskPages },
           { element: <PhoneShell />, children: phonePages },
           { element: <AnyShell />, children: [{ path: '/me', lazy: mePage }] },
         ],
