@@ -1,5 +1,5 @@
 import { existsSync } from 'node:fs';
-import { mkdir, open, readdir, rename, rm } from 'node:fs/promises';
+import { copyFile, mkdir, open, readdir, rename, rm } from 'node:fs/promises';
 import path from 'node:path';
 import { Injectable } from '@nestjs/common';
 import { Config } from '../config/config';
@@ -31,8 +31,9 @@ export class UploadStore {
 
   /** Takes an upload over: once this resolves its bytes and its name are on disk. */
   async keep(timetableId: string, incomingPath: string): Promise<void> {
+    await mkdir(this.folder, { recursive: true });
     await syncToDisk(incomingPath);
-    await rename(incomingPath, this.pathOf(timetableId));
+    await moveFile(incomingPath, this.pathOf(timetableId));
     await syncToDisk(this.folder);
   }
 
@@ -44,6 +45,19 @@ export class UploadStore {
   async tidy(): Promise<void> {
     await mkdir(this.incoming, { recursive: true });
     for (const name of await readdir(this.incoming)) await this.discard(path.join(this.incoming, name));
+  }
+}
+
+/** Moves a file, also from another disk; its name stands only once all its bytes do. */
+async function moveFile(from: string, to: string): Promise<void> {
+  try {
+    await rename(from, to);
+  } catch (error) {
+    if ((error as NodeJS.ErrnoException).code !== 'EXDEV') throw error;
+    await copyFile(from, `${to}.part`);
+    await syncToDisk(`${to}.part`);
+    await rename(`${to}.part`, to);
+    await rm(from, { force: true });
   }
 }
 
