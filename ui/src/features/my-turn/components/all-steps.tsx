@@ -1,7 +1,7 @@
 import type { WireStep } from '@stubpost/shared';
 import { StepMark } from '../../../components/step-mark';
 import { STEP_STATE_WORDS } from '../../../components/words';
-import { formatTime } from '../../../lib/time-display';
+import { formatClock, formatTime } from '../../../lib/time-display';
 import { isSettled } from '../model/next-act';
 import { recordWords } from './last-entry';
 import { OnwardSign } from './phone-icons';
@@ -9,8 +9,14 @@ import styles from './phone-parts.module.css';
 import { useTurnScene } from './turn-context';
 import { useHeadingFocus } from './use-heading-focus';
 
+export interface AllStepsProps {
+  onPick: (key: string) => void;
+  onBriefing: () => void;
+  onBack: () => void;
+}
+
 /** Every step of the turn with how it stands. Touching one brings it under the bar, also out of order. */
-export function AllSteps({ onPick, onBack }: { onPick: (key: string) => void; onBack: () => void }) {
+export function AllSteps({ onPick, onBriefing, onBack }: AllStepsProps) {
   const { turn } = useTurnScene();
   const heading = useHeadingFocus();
   const said = turn.steps.flatMap((step) => step.remarks);
@@ -20,6 +26,7 @@ export function AllSteps({ onPick, onBack }: { onPick: (key: string) => void; on
       <h1 tabIndex={-1} ref={heading}>
         All steps
       </h1>
+      <Briefing onRecord={onBriefing} />
       <ol className={styles.lines}>
         {turn.steps.map((step) => (
           <li key={step.key}>
@@ -70,5 +77,26 @@ function StepWords({ step, zone }: { step: WireStep; zone: string }) {
         {step.dueAt !== null && `, by ${formatTime(step.dueAt, zone)}`}
       </span>
     </span>
+  );
+}
+
+/** The safety briefing with everybody's agreement, which comes before a device is used in the controlling cab. */
+function Briefing({ onRecord }: { onRecord: () => void }) {
+  const { entries, turn } = useTurnScene();
+  const briefing = entries.findLast(({ kind }) => kind === 'briefing');
+  return (
+    <div className={styles.lines}>
+      {briefing === undefined ? (
+        <button type="button" className={styles.line} onClick={onRecord}>
+          Safety briefing, all agreed
+          <span className={`${styles.push} ${styles.underlined}`}>Record now</span>
+        </button>
+      ) : (
+        <p className={styles.line}>
+          Safety briefing {formatClock(briefing.observedAt, turn.zone)}
+          <span className={styles.push}>{briefing.by?.name}</span>
+        </p>
+      )}
+    </div>
   );
 }

@@ -8,7 +8,8 @@ import { planQuery } from '../api/turn-queries';
 import type { QueueState } from '../model/entry-queue';
 import { actLabel, nextAct } from '../model/next-act';
 import styles from './phone-foot.module.css';
-import { SentStrip, sentState } from './sent-strip';
+import { sentState } from '../model/sent-state';
+import { SentStrip } from './sent-strip';
 
 /** The foot of `/my`: opens the turn at hand and names its next step, and under it where the entries are. */
 export function MyTurnsFoot({

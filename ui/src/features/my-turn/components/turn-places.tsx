@@ -112,7 +112,7 @@ function SubPlace({ places }: { places: Places }): ReactNode {
     case 'second':
       return null;
     case 'steps':
-      return <AllSteps onPick={places.pick} onBack={toAct} />;
+      return <AllSteps onPick={places.pick} onBriefing={places.briefing} onBack={toAct} />;
     case 'cannot-do':
       return (
         <ReasonPlace

@@ -30,6 +30,7 @@ export interface Places {
   pick: (key: string) => void;
   cannotDo: (step: string, label: string, reason: string) => void;
   withdraw: (entry: EntryToWithdraw, reason: string) => void;
+  briefing: () => void;
   undo: () => void;
   endUndo: () => void;
 }
@@ -94,6 +95,7 @@ export function usePlaces(): Places {
       record({ kind: 'withdrawn', target: entryId, reason }, { label: `Withdrawn: ${words}` });
       toAct();
     },
+    briefing: () => keep(record({ kind: 'briefing' }, { label: 'Safety briefing' })),
     undo: () => {
       if (done !== null)
         record(
