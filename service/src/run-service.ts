@@ -2,7 +2,7 @@ import type { NestExpressApplication } from '@nestjs/platform-express';
 import { Restarter } from './common/restarter';
 import { type Config, ConfigProblem, readConfig } from './config/config';
 import { createApp } from './create-app';
-import { playDemo, type RunningDemo } from './demo/start-demo';
+import { readyDemo, type RunningDemo } from './demo/start-demo';
 
 /** However many streams are open, a stopping service is gone within this time. */
 const longestStopMilliseconds = 4500;
@@ -36,8 +36,9 @@ class ServiceRun {
     const app = await createApp({ config });
     this.app = app;
     app.get(Restarter).onRequest(() => void this.restart());
+    const playDemo = await readyDemo(app);
     await app.listen(config.port, config.host);
-    this.demo = await playDemo(app);
+    this.demo = playDemo?.() ?? null;
     process.stdout.write(`Stubpost ${config.version} serves ${config.publicUrl}\n`);
   }
 

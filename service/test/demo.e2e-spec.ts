@@ -3,7 +3,7 @@ import path from 'node:path';
 import type { WireDemo } from '@stubpost/shared';
 import supertest from 'supertest';
 import { DemoService } from '../src/demo/demo.service';
-import { playDemo } from '../src/demo/start-demo';
+import { readyDemo } from '../src/demo/start-demo';
 import { Restarter } from '../src/common/restarter';
 import { Installation } from '../src/database/installation';
 import { bootApp, type Booted } from './support/boot';
@@ -87,7 +87,7 @@ describe('a database that is no demo', () => {
   });
 
   test('is not filled', async () => {
-    expect(await playDemo(booted.app)).toBeNull();
+    expect(await readyDemo(booted.app)).toBeNull();
   });
 
   test('with people in it is not made a demo by a later start', async () => {

@@ -12,21 +12,29 @@ export type StartDemo = (app: INestApplicationContext, signal: AbortSignal) => P
 /** A package beside this one, loaded only for a demo; it imports this one, so this one cannot import it. */
 const storiesPackage = '@stubpost/seed';
 
+const logger = new Logger('demo');
+
 /** A demo that is being filled or played. */
 export interface RunningDemo {
   stop(): Promise<void>;
 }
 
-/** Plays the demo when this installation wants one; null when not. Returns at once, the work goes on behind. */
-export async function playDemo(app: INestApplicationContext): Promise<RunningDemo | null> {
+/**
+ * Makes a demo ready where this installation wants one: from here on the database says that it is a demo. Gives what
+ * starts the playing, which then goes on behind; null where there is nothing to play.
+ */
+export async function readyDemo(app: INestApplicationContext): Promise<(() => RunningDemo) | null> {
   if (!(await app.get(Installation).isDemoWanted())) return null;
-  const logger = new Logger('demo');
   const startDemo = findStories();
   if (startDemo === null) {
-    logger.warn(`there is no demo to play: ${storiesPackage} is not built`);
+    logger.warn(`there is no demo to play: ${storiesPackage} is not built. DEMO=off starts without one`);
     return null;
   }
   await app.get(DemoService).begin();
+  return () => play(app, startDemo);
+}
+
+function play(app: INestApplicationContext, startDemo: StartDemo): RunningDemo {
   const stopping = new AbortController();
   const ended = startDemo(app, stopping.signal).catch((error: unknown) => {
     if (stopping.signal.aborted) return;

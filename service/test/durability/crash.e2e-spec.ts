@@ -5,7 +5,7 @@ import { buildPowerCutLibrary, crashOnce } from './crash-rounds';
 const rounds = Number(process.env.CRASH_ROUNDS ?? 5);
 const acknowledgementsOf = (round: number) => 60 + ((round * 7919) % 240);
 
-jest.setTimeout(30_000 + rounds * 10_000);
+jest.setTimeout(30_000 + rounds * 20_000);
 
 let temporary: ReturnType<typeof temporaryFolder>;
 beforeEach(() => {
