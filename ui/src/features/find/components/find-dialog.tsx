@@ -46,7 +46,7 @@ function FindBody({ terminal, onClose }: Omit<FindDialogProps, 'isOpen'>) {
   const open = (turn: FoundTurn | undefined): void => {
     if (turn === undefined) return;
     onClose();
-    void navigate(`/turns/${turn.turnId}`);
+    void navigate(`/turns/${turn.turnId}?terminal=${encodeURIComponent(turn.terminal)}`);
   };
   const onKeyDown = (event: KeyboardEvent): void => {
     if (event.key === 'Enter') open(found[chosen]);

@@ -1,7 +1,10 @@
+import { FormGroup, InputGroup } from '@blueprintjs/core';
 import type { WirePerson } from '@stubpost/shared';
+import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { formatSince } from '../../../lib/time-display';
 import { useNow } from '../../../lib/use-now';
+import { findPeople } from '../model/find-people';
 import { rolesInWords } from '../model/role-words';
 import styles from './people.module.css';
 
@@ -11,7 +14,7 @@ function standing(person: WirePerson): string {
   return person.sessions === 1 ? '1 session' : `${person.sessions} sessions`;
 }
 
-/** Everybody with a sign-in, by name. The name opens the person. */
+/** Everybody with a sign-in, by name; a text narrows the list. The name opens the person. */
 export function PeopleTable({
   people,
   chosenId,
@@ -20,37 +23,53 @@ export function PeopleTable({
   chosenId: string | null;
 }) {
   const now = useNow(10);
-  const sorted = [...people].sort((one, other) => one.name.localeCompare(other.name));
+  const [text, setText] = useState('');
+  const found = findPeople(people, text);
   return (
-    <div className="sp-table-scroll" role="region" aria-label="People" tabIndex={0}>
-      <table className="sp-table">
-        <thead>
-          <tr>
-            <th scope="col">Name</th>
-            <th scope="col">E-mail</th>
-            <th scope="col">Roles</th>
-            <th scope="col">Sign-in</th>
-            <th scope="col">Last seen</th>
-          </tr>
-        </thead>
-        <tbody>
-          {sorted.map((person) => (
-            <tr key={person.id} className={person.id === chosenId ? styles.chosen : undefined}>
-              <th scope="row">
-                <Link to={`?person=${person.id}`} aria-current={person.id === chosenId ? 'true' : undefined}>
-                  {person.name}
-                </Link>
-              </th>
-              <td>{person.email}</td>
-              <td>{rolesInWords(person.roles)}</td>
-              <td className="nowrap">{standing(person)}</td>
-              <td className="nowrap">
-                {person.lastSeenAt === null ? 'never' : formatSince(person.lastSeenAt, now)}
-              </td>
+    <>
+      <div className="sp-fields">
+        <FormGroup label="Name, e-mail or role" labelFor="find-people">
+          <InputGroup id="find-people" type="search" value={text} onValueChange={setText} />
+        </FormGroup>
+        <span role="status" className={styles.count}>
+          {found.length === people.length
+            ? `${people.length} people`
+            : `${found.length} of ${people.length} people`}
+        </span>
+      </div>
+      <div className="sp-table-scroll" role="region" aria-label="People" tabIndex={0}>
+        <table className="sp-table">
+          <thead>
+            <tr>
+              <th scope="col">Name</th>
+              <th scope="col">E-mail</th>
+              <th scope="col">Roles</th>
+              <th scope="col">Sign-in</th>
+              <th scope="col">Last seen</th>
             </tr>
-          ))}
-        </tbody>
-      </table>
-    </div>
+          </thead>
+          <tbody>
+            {found.map((person) => (
+              <tr key={person.id} className={person.id === chosenId ? styles.chosen : undefined}>
+                <th scope="row">
+                  <Link
+                    to={`?person=${person.id}`}
+                    aria-current={person.id === chosenId ? 'true' : undefined}
+                  >
+                    {person.name}
+                  </Link>
+                </th>
+                <td>{person.email}</td>
+                <td>{rolesInWords(person.roles)}</td>
+                <td className="nowrap">{standing(person)}</td>
+                <td className="nowrap">
+                  {person.lastSeenAt === null ? 'never' : formatSince(person.lastSeenAt, now)}
+                </td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </div>
+    </>
   );
 }
