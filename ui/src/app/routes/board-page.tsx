@@ -61,7 +61,7 @@ function TerminalBoard({ terminal }: { terminal: WireTerminal }) {
   const isFull = turnId !== undefined && (isNarrow || query.get('page') === 'full');
   const open = (id: string): void =>
     void navigate(panelAddress(id, terminal.code, query), { replace: turnId !== undefined, state });
-  const desk = useDeskActs(terminal, open);
+  const desk = useDeskActs(terminal);
   const close = (): void => {
     const back = (state as { backTo?: unknown } | null)?.backTo;
     void navigate(typeof back === 'string' ? back : boardAddress(terminal.code, query));
@@ -75,7 +75,13 @@ function TerminalBoard({ terminal }: { terminal: WireTerminal }) {
           <PartBoundary part="This strip" rest="The board is fine.">
             <AlertStrip terminal={terminal} isHalf={turnId !== undefined} onOpen={open} />
           </PartBoundary>
-          <Board terminal={terminal} openId={turnId ?? null} hasPicture={!isNarrow} onAct={desk.onBoard} />
+          <Board
+            terminal={terminal}
+            openId={turnId ?? null}
+            hasPicture={!isNarrow}
+            onOpen={open}
+            onAct={desk.onBoard}
+          />
         </>
       )}
       {isFull && <PageHeader hidden title="Turn" />}

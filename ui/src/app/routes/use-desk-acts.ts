@@ -16,7 +16,7 @@ const formOf: Record<string, EntryAct> = {
 };
 
 /** What the desk is doing: the form that is open, the answer to the last entry, the alert being set aside. */
-export function useDeskActs(terminal: WireTerminal, open: (turnId: string) => void) {
+export function useDeskActs(terminal: WireTerminal) {
   const [target, setTarget] = useState<ActTarget | null>(null);
   const [recorded, setRecorded] = useState<Recorded | null>(null);
   const [aside, setAside] = useState<WireAlert | null>(null);
@@ -28,8 +28,7 @@ export function useDeskActs(terminal: WireTerminal, open: (turnId: string) => vo
   const onBoard = (what: string, turn: TurnNow, step: string | null): void => {
     const form = formOf[what];
     const alert = foremostAlert(turn.alerts);
-    if (what === 'open') open(turn.id);
-    else if (what === 'take' && mayAct && alert !== null && alert.state !== 'taken') take.mutate(alert);
+    if (what === 'take' && mayAct && alert !== null && alert.state !== 'taken') take.mutate(alert);
     else if (what === 'set-aside' && mayAct && alert !== null) setAside(alert);
     else if (form !== undefined && acts.has(form)) setTarget({ act: form, turnId: turn.id, step });
   };

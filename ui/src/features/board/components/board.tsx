@@ -32,13 +32,15 @@ export interface BoardProps {
   openId: string | null;
   /** Narrow screens have the table only. */
   hasPicture: boolean;
-  onAct: (act: TurnAct, turn: TurnNow, step: string | null) => void;
+  onOpen: (turnId: string) => void;
+  /** Everything else that a key asks for. */
+  onAct: (act: Exclude<TurnAct, 'open'>, turn: TurnNow, step: string | null) => void;
 }
 
 const staleAfter = 60_000;
 
 /** The live board of a terminal: one view model, shown as a picture with row heads or as a table. */
-export function Board({ terminal, openId, hasPicture, onAct }: BoardProps) {
+export function Board({ terminal, openId, hasPicture, onOpen, onAct }: BoardProps) {
   const [asked, change] = useBoardView();
   const view = hasPicture ? asked : { ...asked, view: 'table' as const, by: 'departure' as const };
   const [pace, setPace] = useState<Pace>(1);
@@ -61,7 +63,8 @@ export function Board({ terminal, openId, hasPicture, onAct }: BoardProps) {
   };
   const act = useStableCallback((what: TurnAct, turnId: string, step: string | null) => {
     const turn = found.all.get(turnId);
-    if (turn !== undefined) onAct(what, turn, step);
+    if (what === 'open') onOpen(turnId);
+    else if (turn !== undefined) onAct(what, turn, step);
   });
   const list = useTurnList({
     ids: shown.map((turn) => turn.id),
@@ -121,7 +124,7 @@ export function Board({ terminal, openId, hasPicture, onAct }: BoardProps) {
         onClose={() => setAdding(false)}
         onDone={(turn) => {
           setAdding(false);
-          act('open', turn.id, null);
+          onOpen(turn.id);
         }}
       />
     </div>

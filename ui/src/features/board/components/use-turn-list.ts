@@ -43,10 +43,14 @@ export function useTurnList({ ids, stepsOf, onAct, onWindow }: TurnListOptions):
 
   const focusPlace = useCallback((turn: string, step: string | null): void => {
     setChosen({ turn, step });
+    const drawn = find(container.current, turn, step);
+    if (drawn !== null) {
+      drawn.focus();
+      return;
+    }
     // A step of the row heads is drawn only once it is chosen, so the focus follows in the next frame.
     requestAnimationFrame(() => {
-      const element = find(container.current, turn, step) ?? find(container.current, turn, null);
-      element?.focus({ preventScroll: false });
+      (find(container.current, turn, step) ?? find(container.current, turn, null))?.focus();
     });
   }, []);
 

@@ -11,7 +11,7 @@ export interface EntryToRecord {
   request: RecordEntryRequest;
 }
 
-const mostTries = 3;
+const mostTries = 2;
 
 /** A server that did not answer, or could not, is asked again: the same id twice is one entry. */
 function worthSendingAgain(failures: number, problem: Error): boolean {

@@ -121,14 +121,17 @@ interface SecondBarProps {
   onBack: () => void;
 }
 
-/** The second word for what cannot be taken lightly: at the other end of the dialog, with the fact repeated. */
+/**
+ * The second word for what cannot be taken lightly: at the other end of the dialog, with the fact repeated. The focus
+ * goes to the group and not to its button, so that the key which asked for it cannot answer it as well.
+ */
 function SecondBar({ words, beside, isSending, onConfirm, onBack }: SecondBarProps) {
-  const bar = useRef<HTMLButtonElement>(null);
-  useEffect(() => bar.current?.focus(), []);
+  const group = useRef<HTMLDivElement>(null);
+  useEffect(() => group.current?.focus(), []);
   return (
-    <div className={styles.second} role="group" aria-label="Confirm">
+    <div className={styles.second} role="group" aria-label={`Confirm: ${words}`} tabIndex={-1} ref={group}>
       {beside !== null && <p>{beside}</p>}
-      <Button ref={bar} className={styles.secondBar ?? ''} loading={isSending} onClick={onConfirm}>
+      <Button className={styles.secondBar ?? ''} loading={isSending} onClick={onConfirm}>
         {words}
       </Button>
       <Button variant="minimal" onClick={onBack}>

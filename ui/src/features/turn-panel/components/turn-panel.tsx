@@ -127,7 +127,7 @@ function PanelBody(props: TurnPanelProps & { turn: TurnNow; titleId: string }) {
             <h3 className={styles.heading}>
               Steps
               <span className={styles.headingActs}>
-                {acts.has('step') && turn.steps.length > 0 && (
+                {acts.has('step') && turn.steps.length > 0 && turn.annulled === null && (
                   <Button size="small" aria-keyshortcuts="R" onClick={() => open('step')}>
                     Relay by radio
                   </Button>
