@@ -4,8 +4,11 @@ import { type Config, ConfigProblem, readConfig } from './config/config';
 import { createApp } from './create-app';
 import { readyDemo, type RunningDemo } from './demo/start-demo';
 
-/** However many streams are open, a stopping service is gone within this time. */
-const longestStopMilliseconds = 4500;
+/**
+ * A stopping service does not wait longer than this for streams and work under way; five seconds are promised, and a
+ * busy machine needs some of them. What was acknowledged is on disk by then in any case.
+ */
+const longestStopMilliseconds = 3000;
 
 /** Reads the environment, serves until it is told to end, and ends the process when it cannot start. */
 export async function runService(environment: NodeJS.ProcessEnv): Promise<void> {
