@@ -23,7 +23,7 @@ export function LastEntry({ onWithdraw }: { onWithdraw: (entry: EntryToWithdraw)
   return (
     <div className={styles.line}>
       {step.source === 'by-radio' && <RadioSign />}
-      <span>{words}</span>
+      <span className={styles.grows}>{words}</span>
       {canWithdraw && step.entryId !== null && (
         <button
           type="button"

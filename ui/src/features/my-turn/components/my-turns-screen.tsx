@@ -144,9 +144,9 @@ function OtherTurns({
   if (turns.length === 0) return null;
   return (
     <section aria-labelledby={`others-${terminal.code}`}>
-      <h3 id={`others-${terminal.code}`}>
+      <h2 id={`others-${terminal.code}`} className={listStyles.heading}>
         {isOnly ? 'Other turns in the next two hours' : `${terminal.name}, next two hours`}
-      </h3>
+      </h2>
       <ol className={listStyles.list}>
         {turns.map((turn) => (
           <li key={turn.id}>
