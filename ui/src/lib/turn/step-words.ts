@@ -4,12 +4,11 @@ import type { StepNow, TurnNow } from './turn-now';
 /** A label inside a sentence. */
 export const lowerFirst = (text: string): string => text.charAt(0).toLowerCase() + text.slice(1);
 
-/** The step that is to be done next: the first overdue one, else the first that is open before the departure. */
+/** The step that is to be done next: the first overdue one, else the first open one; after the departure of those that follow it. */
 export function nextStep(turn: TurnNow): StepNow | null {
   const open = turn.steps.filter((step) => step.doneAt === null && step.state !== 'not-needed');
-  const overdue = open.find((step) => step.state === 'overdue');
-  const side = turn.departedAt === null ? open.filter((step) => step.holdsDeparture) : open;
-  return overdue ?? side[0] ?? null;
+  const side = open.filter((step) => step.holdsDeparture === (turn.departedAt === null));
+  return side.find((step) => step.state === 'overdue') ?? side[0] ?? null;
 }
 
 /** A step in words: "cab brake check not recorded, due 17:24", "handbrake set recorded 17:20, by radio". */

@@ -17,28 +17,45 @@ export function needsAction(turn: TurnNow): boolean {
   return turn.health !== 'on-plan' || turn.steps.some((step) => step.state === 'overdue');
 }
 
-/** The turns that match; each word of the text must be found somewhere in train, set, track, car or person. */
+/**
+ * The turns that match. Each word of the text must be found somewhere in train, set, track, car or person; "track 7" and
+ * "set 52" mean exactly that track and that set.
+ */
 export function filterTurns(turns: readonly TurnNow[], filter: TurnFilter): TurnNow[] {
-  const words = filter.text.toLocaleLowerCase().split(/\s+/).filter(Boolean);
+  const tests = textTests(filter.text);
   return turns.filter(
     (turn) =>
       (filter.states.length === 0 || filter.states.includes(turn.state)) &&
       (!filter.needsAction || needsAction(turn)) &&
-      matches(turn, words),
+      tests.every((test) => test(turn)),
   );
 }
 
-function matches(turn: TurnNow, words: readonly string[]): boolean {
-  if (words.length === 0) return true;
-  const texts = [
-    turn.outboundTrain,
-    turn.inboundTrain,
-    turn.track === null ? null : `track ${turn.track}`,
-    turn.set === null ? null : `set ${turn.set}`,
-    ...turn.cars,
-    ...turn.crew.map((member) => member.name),
-  ].map((text) => (text ?? '').toLocaleLowerCase());
-  return words.every((word) => texts.some((text) => text.includes(word)));
+type TurnTest = (turn: TurnNow) => boolean;
+
+const namedPlace = /\b(track|set)\s+(\S+)/g;
+
+function textTests(text: string): TurnTest[] {
+  const lower = text.toLocaleLowerCase();
+  const places = [...lower.matchAll(namedPlace)].map(([, subject, label]): TurnTest => {
+    return (turn) => (subject === 'track' ? turn.track : turn.set)?.toLocaleLowerCase() === label;
+  });
+  const words = lower.replace(namedPlace, ' ').split(/\s+/).filter(Boolean);
+  return [
+    ...places,
+    ...words.map(
+      (word): TurnTest =>
+        (turn) =>
+          wordsOf(turn).some((one) => one.includes(word)),
+    ),
+  ];
+}
+
+function wordsOf(turn: TurnNow): string[] {
+  const people = turn.crew.map((member) => member.name);
+  return [turn.outboundTrain, turn.inboundTrain, turn.track, turn.set, ...turn.cars, ...people].map((text) =>
+    (text ?? '').toLocaleLowerCase(),
+  );
 }
 
 /** What the filter button says: "Filter: none", "Filter: needs action, 2 states, “17”". */

@@ -28,11 +28,11 @@ export function stepCell(step: StepNow, turn: TurnNow): StepCell {
     return { ...cell, text: clockText(step.doneAt, turn.zone), ...saidOf(step, due) };
   }
   if (step.state === 'not-needed') return { ...cell, text: 'not needed', small: '' };
+  if (isOver(turn) && step.holdsDeparture) return { ...cell, text: 'no record' };
   if (step.state === 'overdue') return { ...cell, text: 'overdue', strong: true };
   if (step.state === 'withdrawn') return { ...cell, text: 'withdrawn' };
   if (step.state === 'blocked') return blockedCell(cell, step);
   if (isFarOffPlan(turn)) return { ...cell, mark: null, text: '' };
-  if (isOver(turn)) return { ...cell, text: 'no record' };
   if (turn.health === 'no-word') return { ...cell, text: 'no word' };
   if (step.finishAt === null) return { ...cell, text: '' };
   return { ...cell, text: timeText(step.finishAt, turn.zone), estimate: true };

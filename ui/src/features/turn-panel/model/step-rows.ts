@@ -85,6 +85,8 @@ function openWords(step: StepNow, turn: TurnNow): Pick<StepRow, 'done' | 'isEsti
   const holder = turn.crew.find((member) => member.as === step.doer);
   const doer = holder === undefined ? `${step.doer} to do` : `${surname(holder.name)} to do`;
   const words = (done: string, known = doer) => ({ done, isEstimate: false, known });
+  if (turn.departedAt !== null && step.holdsDeparture && step.state !== 'not-needed')
+    return words('no record');
   switch (step.state) {
     case 'not-needed':
       return words(dash, 'not needed');
@@ -98,7 +100,6 @@ function openWords(step: StepNow, turn: TurnNow): Pick<StepRow, 'done' | 'isEsti
       break;
   }
   if (!step.holdsDeparture) return words(dash, turn.departedAt === null ? 'after leaving' : doer);
-  if (turn.departedAt !== null) return words('no record');
   if (turn.health === 'no-word' || step.finishAt === null) return words(dash);
   return { done: timeText(step.finishAt, turn.zone), isEstimate: true, known: doer };
 }
