@@ -1,6 +1,6 @@
 import { statSync } from 'node:fs';
 import type { Database } from 'better-sqlite3';
-import { DataSource, type EntitySchema } from 'typeorm';
+import { DataSource, type DataSourceOptions, type EntitySchema } from 'typeorm';
 import { MIGRATIONS } from './migrations';
 
 /** A class of rows, as TypeORM takes it. */
@@ -22,18 +22,34 @@ function preparing(database: Database): void {
   database.pragma(`journal_size_limit = ${walLimitBytes}`);
 }
 
-/** Opens the connection that writes, brings the tables up to date and makes sure that commits are durable. */
-export async function openWriter(options: DatabaseOptions): Promise<DataSource> {
-  const writer = new DataSource({
+/** Settings of the connection that writes. */
+export function writerOptions({ file, entities }: DatabaseOptions): DataSourceOptions {
+  return {
     type: 'better-sqlite3',
-    database: options.file,
-    entities: options.entities,
+    database: file,
+    entities,
     migrations: MIGRATIONS,
     migrationsTableName: 'migration',
     synchronize: false,
     prepareDatabase: preparing,
-  });
-  await writer.initialize();
+  };
+}
+
+/** Settings of the connection that only reads; it sees nothing of a transaction before its commit. */
+export function readerOptions({ file, entities }: DatabaseOptions): DataSourceOptions {
+  return {
+    type: 'better-sqlite3',
+    database: file,
+    entities,
+    synchronize: false,
+    readonly: true,
+    fileMustExist: true,
+  };
+}
+
+/** Opens the connection that writes, brings the tables up to date and makes sure that commits are durable. */
+export async function openWriter(options: DatabaseOptions): Promise<DataSource> {
+  const writer = await new DataSource(writerOptions(options)).initialize();
   try {
     await migrate(writer);
     await assertDurable(writer);
@@ -42,19 +58,6 @@ export async function openWriter(options: DatabaseOptions): Promise<DataSource> 
     throw error;
   }
   return writer;
-}
-
-/** Opens the connection that only reads; it sees nothing of a transaction before its commit. */
-export async function openReader(options: DatabaseOptions): Promise<DataSource> {
-  const reader = new DataSource({
-    type: 'better-sqlite3',
-    database: options.file,
-    entities: options.entities,
-    synchronize: false,
-    readonly: true,
-    fileMustExist: true,
-  });
-  return reader.initialize();
 }
 
 /**

@@ -1,9 +1,9 @@
 import path from 'node:path';
-import type { DataSource } from 'typeorm';
+import { DataSource } from 'typeorm';
 import { FixedClock } from '../../src/common/clock';
 import { type Change, ChangeFeed, ChangeLog } from '../../src/database/change-log';
 import { Counters } from '../../src/database/counters';
-import { openReader, openWriter } from '../../src/database/data-sources';
+import { openWriter, readerOptions } from '../../src/database/data-sources';
 import { Reader } from '../../src/database/reader';
 import { type Transaction, UnitOfWork } from '../../src/database/unit-of-work';
 import { ENTITIES } from '../../src/entities';
@@ -23,7 +23,7 @@ beforeEach(async () => {
   remove = temporary.remove;
   const options = { file: path.join(temporary.folder, 'test.sqlite'), entities: ENTITIES };
   writer = await openWriter(options);
-  readerSource = await openReader(options);
+  readerSource = await new DataSource(readerOptions(options)).initialize();
   reader = new Reader(readerSource);
   unitOfWork = new UnitOfWork(writer);
 });
