@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import { Outlet } from 'react-router-dom';
 import { Clock, Today } from '../components/clock';
 import { PostMark } from '../components/post-mark';
+import { DemoLabel } from './demo-label';
 import { NotEncrypted } from './not-encrypted';
 import { PageFoot } from './page-foot';
 import styles from './shell.module.css';
@@ -18,6 +19,7 @@ export function PlainShell({ children }: { children?: ReactNode }) {
           <PostMark />
           Stubpost
         </a>
+        <DemoLabel short />
         <div className={styles.plainClock}>
           <Today zone={ownZone} /> <Clock zone={ownZone} />
         </div>

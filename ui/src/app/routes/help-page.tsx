@@ -1,3 +1,4 @@
+import { Link } from 'react-router-dom';
 import { SafetyCaution } from '../../components/caution';
 import { PageHeader } from '../../components/page-header';
 import { MarkLegend } from '../../features/help/components/mark-legend';
@@ -29,6 +30,9 @@ export function HelpPage() {
       <MarkLegend />
       <WordList />
       <RoleList />
+      <p>
+        More: <Link to="/keys">Keys</Link>, <Link to="/accessibility">Accessibility</Link>
+      </p>
     </div>
   );
 }

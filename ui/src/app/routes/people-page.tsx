@@ -7,6 +7,9 @@ import { EditPerson } from '../../features/people/components/edit-person';
 import { PeopleTable } from '../../features/people/components/people-table';
 import { PersonAccess } from '../../features/people/components/person-access';
 import { peopleQuery } from '../../features/people/api/people';
+import { LeaveDemo } from '../../features/set-up/components/leave-demo';
+import { demoQuery } from '../../lib/service-facts';
+import { useMay } from '../../lib/session';
 import { terminalsQuery, useTerminalChoice } from '../../lib/terminal-choice';
 import styles from './people-page.module.css';
 
@@ -17,6 +20,8 @@ export function PeoplePage() {
   const { terminal } = useTerminalChoice();
   const chosenId = useSearchParams()[0].get('person');
   const zone = terminal?.zone ?? Intl.DateTimeFormat().resolvedOptions().timeZone;
+  const { data: demo } = useQuery(demoQuery);
+  const mayLeave = useMay('demo.leave') && demo?.demo === true;
   const chosen = people?.find(({ id }) => id === chosenId);
   return (
     <div className="sp-page">
@@ -31,7 +36,10 @@ export function PeoplePage() {
         </section>
         <div className={styles.side}>
           {chosen === undefined ? (
-            <AddPerson terminals={terminals} zone={zone} />
+            <>
+              <AddPerson terminals={terminals} zone={zone} />
+              {mayLeave && <LeaveDemo onEmpty={() => window.location.assign('/welcome')} />}
+            </>
           ) : (
             <>
               <EditPerson key={`edit ${chosen.id}`} person={chosen} terminals={terminals} />

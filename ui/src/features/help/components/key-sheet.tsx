@@ -15,7 +15,9 @@ function Line({ line, isOff }: { line: KeyLine; isOff: boolean }) {
         {isOff && <span className="muted small">switched off</span>}
       </th>
       <td>{line.does}</td>
-      <td className="muted">{line.button}</td>
+      <td data-head="By pointing" className="muted">
+        {line.button}
+      </td>
     </tr>
   );
 }
@@ -24,7 +26,7 @@ function Group({ group, lettersOff }: { group: KeyGroup; lettersOff: boolean }) 
   return (
     <section className="sp-panel">
       <h2>{group.where}</h2>
-      <table className="sp-table">
+      <table className="sp-table sp-stack">
         <thead>
           <tr>
             <th scope="col">Key</th>

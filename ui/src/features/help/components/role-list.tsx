@@ -22,7 +22,7 @@ export function RoleList() {
     <section className="sp-panel" aria-labelledby="roles">
       <h2 id="roles">What each role does</h2>
       <div className="sp-table-scroll" role="region" aria-label="Roles" tabIndex={0}>
-        <table className="sp-table">
+        <table className="sp-table sp-stack">
           <thead>
             <tr>
               <th scope="col">Role</th>
@@ -34,8 +34,10 @@ export function RoleList() {
             {ROLES.map((role) => (
               <tr key={role}>
                 <th scope="row">{ROLE_WORDS[role]}</th>
-                <td className="nowrap">{HOME_NAMES[homeOfRole(role)]}</td>
-                <td>{DOES[role]}</td>
+                <td data-head="Starts at" className="nowrap">
+                  {HOME_NAMES[homeOfRole(role)]}
+                </td>
+                <td data-head="Does">{DOES[role]}</td>
               </tr>
             ))}
           </tbody>

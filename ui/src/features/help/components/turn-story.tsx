@@ -21,7 +21,7 @@ export function TurnStory() {
         room between them is what is left to spare.
       </p>
       <div className="sp-table-scroll" role="region" aria-label="Steps of a turn" tabIndex={0}>
-        <table className="sp-table">
+        <table className="sp-table sp-stack">
           <thead>
             <tr>
               <th scope="col">Step</th>
@@ -37,12 +37,14 @@ export function TurnStory() {
                 <th scope="row">
                   <StepMark kind={step.kind} state="not-due" /> {step.label}
                 </th>
-                <td>
+                <td data-head="Who, where">
                   {step.doer}, {PLACE_WORDS[step.place]}
                 </td>
-                <td>{due(step)}</td>
-                <td>{step.typicalSeconds === 0 ? '–' : formatDuration(step.typicalSeconds)}</td>
-                <td>{step.holdsDeparture ? 'yes' : 'no'}</td>
+                <td data-head="Due">{due(step)}</td>
+                <td data-head="Usually takes">
+                  {step.typicalSeconds === 0 ? '–' : formatDuration(step.typicalSeconds)}
+                </td>
+                <td data-head="Holds the departure">{step.holdsDeparture ? 'yes' : 'no'}</td>
               </tr>
             ))}
           </tbody>

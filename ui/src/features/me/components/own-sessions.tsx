@@ -22,8 +22,10 @@ function SessionRow({ session, zone, now, onEnd, isBusy }: RowProps) {
       <th scope="row" title={session.device}>
         {deviceWords(session.device)}
       </th>
-      <td>{formatStamp(session.startedAt, zone)}</td>
-      <td className="nowrap">{session.current ? 'now' : formatSince(session.lastSeenAt, now)}</td>
+      <td data-head="Since">{formatStamp(session.startedAt, zone)}</td>
+      <td data-head="Last seen" className="nowrap">
+        {session.current ? 'now' : formatSince(session.lastSeenAt, now)}
+      </td>
       <td className="number">
         {session.current ? (
           <span className="muted nowrap">this one</span>
@@ -60,7 +62,7 @@ export function OwnSessions({ zone }: { zone: string }) {
       {data === undefined && error === null && <LoadingRows what="your sessions" rows={2} />}
       {data !== undefined && (
         <div className="sp-table-scroll" role="region" aria-label="Sessions" tabIndex={0}>
-          <table className="sp-table">
+          <table className="sp-table sp-stack">
             <thead>
               <tr>
                 <th scope="col">Device</th>

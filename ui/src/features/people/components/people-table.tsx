@@ -28,7 +28,7 @@ export function PeopleTable({
   return (
     <>
       <div className="sp-fields">
-        <FormGroup label="Name, e-mail or role" labelFor="find-people">
+        <FormGroup label="Find by name, e-mail or role" labelFor="find-people">
           <InputGroup id="find-people" type="search" value={text} onValueChange={setText} />
         </FormGroup>
         <span role="status" className={styles.count}>
