@@ -63,7 +63,9 @@ describe('loading', () => {
     expect(screen.getByRole('status')).toHaveTextContent('Loading turns for Tue 3 Mar');
     expect(container.querySelector('[aria-hidden]')?.children).toHaveLength(3);
     expect(screen.queryByRole('button')).not.toBeInTheDocument();
-    act(() => vi.advanceTimersByTime(4000));
+    act(() => {
+      vi.advanceTimersByTime(4000);
+    });
     expect(screen.getByRole('status')).toHaveTextContent('Still loading');
     vi.useRealTimers();
     await userEvent.click(screen.getByRole('button', { name: 'Retry' }));

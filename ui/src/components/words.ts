@@ -1,13 +1,4 @@
-import type {
-  AlertState,
-  EntrySource,
-  Health,
-  Priority,
-  Role,
-  StepState,
-  TurnKind,
-  TurnState,
-} from '@stubpost/shared';
+import type { EntrySource, Health, Priority, Role, StepState, TurnState } from '@stubpost/shared';
 
 /** Words on screen for the tokens of the interface. One word, one meaning, on every page. */
 export const TURN_STATE_WORDS: Record<TurnState, string> = {
@@ -54,20 +45,6 @@ export const PRIORITY_WORDS: Record<Priority, string> = {
   'act-now': 'Act now',
   'act-soon': 'Act soon',
   watch: 'Watch',
-};
-
-export const ALERT_STATE_WORDS: Record<AlertState, string> = {
-  raised: 'Raised',
-  taken: 'Taken',
-  'set-aside': 'Set aside',
-  cleared: 'Cleared',
-  closed: 'Closed',
-};
-
-export const TURN_KIND_WORDS: Record<TurnKind, string> = {
-  turn: 'Turn',
-  'first-out': 'First train out',
-  'tie-up': 'Tie-up',
 };
 
 export const ROLE_WORDS: Record<Role, string> = {
