@@ -32,7 +32,7 @@ export function plannedStretch(turn: TurnNow): Stretch {
 export function trackStretch(turn: TurnNow, now: Instant): Stretch {
   const leaves = turn.departedAt ?? latest(turn.expectedDepartureAt, departureOf(turn));
   const { from, to } = stretch(arrivalOf(turn), leaves);
-  const standing = turn.arrivedAt !== null && turn.departedAt === null && turn.annulled === null;
+  const standing = turn.arrivedAt !== null && !isOver(turn);
   return { from, to: standing ? Math.max(to, now) : to };
 }
 

@@ -125,10 +125,15 @@ function about(
 function standsAt(turn: TurnNow, tracks: readonly WireTrack[]): string {
   const track = tracks.find((one) => one.label === turn.track);
   const cars = turn.cars.length;
+  const room = track?.cars;
+  if (cars === 0) return room === undefined ? '' : `fits ${carsSaid(room)}`;
+  const marker = markerFor(track, cars);
   const parts = [
-    cars === 0 ? '' : `${cars} ${cars === 1 ? 'car' : 'cars'}`,
-    cars === 0 || markerFor(track, cars) === null ? '' : `at marker ${markerFor(track, cars)}`,
-    track?.cars === undefined ? '' : `(${track.cars} fit)`,
+    carsSaid(cars),
+    marker === null ? '' : `at marker ${marker}`,
+    room === undefined ? '' : `(${room} fit)`,
   ].filter(Boolean);
   return parts.join(' ');
 }
+
+const carsSaid = (count: number): string => `${count} ${count === 1 ? 'car' : 'cars'}`;
