@@ -147,6 +147,17 @@ describe('the bars of the desk', () => {
     await waitFor(() => expect(router.state.location.pathname).toBe('/turns/b'));
   });
 
+  test('give the focus back when find is closed', async () => {
+    const { user } = open('/me');
+    const signOut = await screen.findByRole('button', { name: 'Sign out' });
+    await screen.findByText('Find train, set, car, person or track');
+    signOut.focus();
+    await user.keyboard('{Control>}k{/Control}');
+    expect(await screen.findByRole('combobox', { name: /^Train, set/ })).toHaveFocus();
+    await user.keyboard('{Escape}');
+    await waitFor(() => expect(signOut).toHaveFocus());
+  });
+
   test('open the keys with "?", unless letters are switched off', async () => {
     const { user, router } = open('/me');
     await screen.findByRole('heading', { name: 'Me' });

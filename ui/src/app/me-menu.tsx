@@ -50,7 +50,7 @@ export function MeMenu() {
   const role = person.roles[0]?.role;
   return (
     <div className={styles.me}>
-      <Popover content={<MeItems />} placement="bottom-end" minimal>
+      <Popover content={<MeItems />} placement="bottom-end" minimal shouldReturnFocusOnClose>
         <Button variant="minimal">
           {person.name}
           {role !== undefined && <span className={styles.role}>, {ROLE_WORDS[role].toLowerCase()}</span>}

@@ -101,6 +101,8 @@ function FindBody({ terminal, onClose }: Omit<FindDialogProps, 'isOpen'>) {
 /** Find a turn from anywhere: three keys and Enter. */
 export function FindDialog({ terminal, isOpen, onClose }: FindDialogProps) {
   const opener = useRef<Element | null>(null);
+  // Asked while drawing, before the field inside takes the focus.
+  if (isOpen && opener.current === null) opener.current = document.activeElement;
   return (
     <Dialog
       isOpen={isOpen}
@@ -108,11 +110,9 @@ export function FindDialog({ terminal, isOpen, onClose }: FindDialogProps) {
       title="Find"
       className={styles.dialog ?? ''}
       transitionDuration={0}
-      onOpening={() => {
-        opener.current = document.activeElement;
-      }}
       onClosed={() => {
         if (opener.current instanceof HTMLElement) opener.current.focus();
+        opener.current = null;
       }}
     >
       <FindBody terminal={terminal} onClose={onClose} />
