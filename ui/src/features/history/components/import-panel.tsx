@@ -1,6 +1,7 @@
-import { FileInput, HTMLTable } from '@blueprintjs/core';
+import { FormGroup, HTMLTable } from '@blueprintjs/core';
 import type { WireHistoryImport } from '@stubpost/shared';
 import { useQuery } from '@tanstack/react-query';
+import { useId } from 'react';
 import { ErrorState } from '../../../components/page-states';
 import { historyImportsQuery, useLoadDepartures } from '../api/history-imports';
 import { formatCount } from '../model/figures-text';
@@ -30,6 +31,7 @@ function Outcome({ each }: { each: WireHistoryImport }) {
 export function ImportPanel() {
   const { data } = useQuery(historyImportsQuery);
   const load = useLoadDepartures();
+  const id = useId();
   return (
     <section className="sp-panel" aria-labelledby="load">
       <h2 id="load">Load past departures</h2>
@@ -38,20 +40,20 @@ export function ImportPanel() {
         with a zone, such as 2026-03-03T22:40:00Z. It may also have set, track, scheduledArrivalAt,
         actualArrivalAt and annulled. One wrong row refuses the whole table, and says which.
       </p>
-      <FileInput
-        text={load.isPending ? 'Sending' : 'Choose a table'}
-        disabled={load.isPending}
-        inputProps={{
-          accept: '.csv,text/csv',
-          'aria-label': 'Table of past departures',
-          'aria-describedby': 'load-hint',
-        }}
-        onInputChange={(event) => {
-          const file = event.currentTarget.files?.[0];
-          if (file !== undefined) load.mutate(file);
-          event.currentTarget.value = '';
-        }}
-      />
+      <FormGroup label={load.isPending ? 'Sending' : 'Table of past departures'} labelFor={id}>
+        <input
+          id={id}
+          type="file"
+          accept=".csv,text/csv"
+          aria-describedby="load-hint"
+          disabled={load.isPending}
+          onChange={(event) => {
+            const file = event.currentTarget.files?.[0];
+            if (file !== undefined) load.mutate(file);
+            event.currentTarget.value = '';
+          }}
+        />
+      </FormGroup>
       {load.error !== null && <ErrorState error={load.error} />}
       {data !== undefined && data.length > 0 && (
         <HTMLTable className="sp-table">

@@ -1,5 +1,5 @@
 import { FormGroup, HTMLSelect, InputGroup } from '@blueprintjs/core';
-import { DateRangeInput3 } from '@blueprintjs/datetime2';
+import { DateInput3 } from '@blueprintjs/datetime2';
 import { enUS } from 'date-fns/locale/en-US';
 import { useId, useState } from 'react';
 import { formatLimit, parseLimit } from '../model/figures-text';
@@ -41,6 +41,27 @@ function LimitField({ seconds, onChange }: { seconds: number; onChange: (seconds
   );
 }
 
+/** A service date, picked from a calendar or typed as 2026-03-03. */
+function DayField({ label, day, onChange }: { label: string; day: string; onChange: (day: string) => void }) {
+  const id = useId();
+  return (
+    <FormGroup label={label} labelFor={id}>
+      <DateInput3
+        value={day}
+        onChange={(next) => {
+          if (next !== null) onChange(next.slice(0, 10));
+        }}
+        formatDate={formatDay}
+        parseDate={parseDay}
+        locale={enUS}
+        highlightCurrentDay
+        showTimezoneSelect={false}
+        inputProps={{ id }}
+      />
+    </FormGroup>
+  );
+}
+
 /** Service dates and the rule, in words; each change goes into the address at once. */
 export function RuleFields({
   search,
@@ -57,25 +78,14 @@ export function RuleFields({
     <form
       className="sp-fields"
       onSubmit={(event) => event.preventDefault()}
-      aria-label="Service dates and rule"
+      aria-label="Service dates, both included, and rule"
     >
-      <FormGroup label="Service dates, both included">
-        <DateRangeInput3
-          value={[toPickerDate(search.from), toPickerDate(search.to)]}
-          onChange={([from, to]) => {
-            if (from !== null && to !== null)
-              onChange({ ...search, from: fromPickerDate(from), to: fromPickerDate(to) });
-          }}
-          formatDate={formatDay}
-          parseDate={parseDay}
-          locale={enUS}
-          shortcuts={false}
-          allowSingleDayRange
-          highlightCurrentDay
-          startInputProps={{ 'aria-label': 'First service date', placeholder: undefined }}
-          endInputProps={{ 'aria-label': 'Last service date', placeholder: undefined }}
-        />
-      </FormGroup>
+      <DayField
+        label="First service date"
+        day={search.from}
+        onChange={(from) => onChange({ ...search, from })}
+      />
+      <DayField label="Last service date" day={search.to} onChange={(to) => onChange({ ...search, to })} />
       <LimitField
         seconds={rule.thresholdSeconds}
         onChange={(thresholdSeconds) => setRule({ thresholdSeconds })}
