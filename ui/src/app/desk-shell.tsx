@@ -45,7 +45,7 @@ export function DeskShell() {
             <Outlet />
           </PartBoundary>
         </main>
-        <PageFoot />
+        <PageFoot terminal={terminal} />
       </div>
       {terminal !== null && (
         <FindDialog terminal={terminal.code} isOpen={isFinding} onClose={() => setFinding(false)} />

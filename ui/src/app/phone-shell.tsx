@@ -1,3 +1,4 @@
+import type { WireTerminal } from '@stubpost/shared';
 import { Link, Outlet, useLocation, useMatch } from 'react-router-dom';
 import { Clock } from '../components/clock';
 import { PartBoundary } from '../components/part-boundary';
@@ -6,6 +7,7 @@ import { LiveProvider } from '../lib/live';
 import { useTerminalChoice } from '../lib/terminal-choice';
 import { DemoLabel } from './demo-label';
 import { NotEncrypted } from './not-encrypted';
+import { OtherZone } from './other-zone';
 import { useSignOut } from './sign-out';
 import styles from './phone-shell.module.css';
 
@@ -32,7 +34,7 @@ function PhoneHead({ zone }: { zone: string }) {
   );
 }
 
-function PhoneFoot() {
+function PhoneFoot({ terminal }: { terminal: WireTerminal | null }) {
   const signOut = useSignOut();
   return (
     <footer className={styles.foot}>
@@ -42,6 +44,7 @@ function PhoneFoot() {
       <button type="button" onClick={() => signOut.mutate()}>
         Sign out
       </button>
+      {terminal !== null && <OtherZone terminal={terminal} />}
     </footer>
   );
 }
@@ -61,7 +64,7 @@ export function PhoneShell() {
             <Outlet />
           </PartBoundary>
         </main>
-        <PhoneFoot />
+        <PhoneFoot terminal={terminal} />
       </div>
     </LiveProvider>
   );

@@ -1,11 +1,11 @@
 import { useQuery } from '@tanstack/react-query';
-import type { WireTerminal } from '@stubpost/shared';
+import { parseInstant, type WireTerminal } from '@stubpost/shared';
 import { Link, useMatch, useNavigate, useSearchParams } from 'react-router-dom';
 import { Clock, Today } from '../components/clock';
 import { PostMark } from '../components/post-mark';
 import { standingAlertsQuery } from '../lib/standing-alerts';
 import { rememberTerminal } from '../lib/terminal-choice';
-import { formatServiceDate } from '../lib/time-display';
+import { dateAt, formatServiceDate } from '../lib/time-display';
 import { MeMenu } from './me-menu';
 import styles from './shell.module.css';
 
@@ -49,12 +49,12 @@ function AlertCount({ terminal }: { terminal: string }) {
   );
 }
 
+/** The day that is looked at: the board's window can start at another one. */
 function ServiceDate({ zone }: { zone: string }) {
-  const asked = useSearchParams()[0].get('date');
-  if (asked !== null && /^\d{4}-\d{2}-\d{2}$/.test(asked)) {
-    return <time dateTime={asked}>{formatServiceDate(asked)}</time>;
-  }
-  return <Today zone={zone} />;
+  const startAt = parseInstant(useSearchParams()[0].get('at') ?? '');
+  if (startAt === null) return <Today zone={zone} />;
+  const date = dateAt(startAt, zone);
+  return <time dateTime={date}>{formatServiceDate(date)}</time>;
 }
 
 export interface TopBarProps {

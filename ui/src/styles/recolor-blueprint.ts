@@ -62,15 +62,15 @@ const hexColour = /#(?:[0-9a-f]{8}|[0-9a-f]{6}|[0-9a-f]{3,4})(?![0-9a-z_-])/gi;
 const rgbColour = /\b(rgba?)\(\s*(\d+)\s*,\s*(\d+)\s*,\s*(\d+)\s*/g;
 
 /**
- * Its rules for plain links: they take the line away, so that a link would be told by colour alone, and in dark they
- * outrank what a page says about its own links.
+ * Its rules for plain links and for the focus. They take the line away from links, so that one would be told by colour
+ * alone, and in dark they outrank what our own sheets say.
  */
-const plainLinks = /^(?:\.bp6-dark )?a(?::hover)?\s*\{[^}]*\}/gm;
+const outranking = [/^(?:\.bp6-dark )?a(?::hover)?\s*\{[^}]*\}/gm, /^(?:\.bp6-dark )?:focus\s*\{[^}]*\}/gm];
 
-/** The stylesheet with every colour turned and without its rules for plain links. Colours derived by `oklch(from …)` follow what they are derived from. */
+/** The stylesheet with every colour turned and without what outranks ours. Colours derived by `oklch(from …)` follow what they are derived from. */
 export function recolorBlueprint(css: string): string {
-  return css
-    .replace(plainLinks, '')
+  return outranking
+    .reduce((rest, rule) => rest.replace(rule, ''), css)
     .replace(hexColour, turnHex)
     .replace(rgbColour, (_all, name: string, red: string, green: string, blue: string) => {
       const turned = toRgb(turn(toHsl(Number(red), Number(green), Number(blue))));

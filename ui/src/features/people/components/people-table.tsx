@@ -10,7 +10,7 @@ import styles from './people.module.css';
 
 function standing(person: WirePerson): string {
   if (!person.active) return 'may not sign in';
-  if (!person.hasPassword) return 'link not used yet';
+  if (!person.hasPassword) return 'no password yet';
   return person.sessions === 1 ? '1 session' : `${person.sessions} sessions`;
 }
 
