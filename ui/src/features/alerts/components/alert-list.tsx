@@ -1,5 +1,6 @@
+import { Button } from '@blueprintjs/core';
 import type { WireAlert } from '@stubpost/shared';
-import { useRef, type KeyboardEvent } from 'react';
+import { useRef, useState, type KeyboardEvent } from 'react';
 import { usePreferences } from '../../../lib/preferences';
 import { groupWords, type AlertGroup } from '../model/group-alerts';
 import styles from './alert-list.module.css';
@@ -18,6 +19,9 @@ export interface AlertListProps {
   onForm: (alert: WireAlert) => void;
 }
 
+/** Of what is over only so many are drawn at first: the latest. */
+const mostDrawn = 40;
+
 const asides: Partial<Record<AlertGroup['key'], string>> = {
   'set-aside': 'comes back by itself',
   closed: 'the latest first',
@@ -25,7 +29,13 @@ const asides: Partial<Record<AlertGroup['key'], string>> = {
 
 /** All alerts in their groups. One stop of the Tab key; arrows move, Enter opens the turn, T takes, S sets aside. */
 export function AlertList(props: AlertListProps) {
-  const { groups, pickedId } = props;
+  const { pickedId } = props;
+  const [isWhole, setWhole] = useState(false);
+  const groups = props.groups.map((group) => ({
+    ...group,
+    count: group.alerts.length,
+    alerts: isWhole ? group.alerts : group.alerts.slice(0, mostDrawn),
+  }));
   const table = useRef<HTMLTableElement>(null);
   const { letterKeys } = usePreferences();
   const alerts = groups.flatMap((group) => group.alerts);
@@ -85,7 +95,7 @@ export function AlertList(props: AlertListProps) {
               <th colSpan={7} scope="rowgroup">
                 {groupWords[group.key]}
                 <span>
-                  {group.alerts.length}
+                  {group.count}
                   {asides[group.key] === undefined ? '' : `, ${asides[group.key]}`}
                 </span>
               </th>
@@ -105,6 +115,15 @@ export function AlertList(props: AlertListProps) {
                 onName={() => props.onForm(alert)}
               />
             ))}
+            {group.count > group.alerts.length && (
+              <tr>
+                <td colSpan={7} className={styles.more}>
+                  <Button size="small" onClick={() => setWhole(true)}>
+                    Show {group.count - group.alerts.length} more
+                  </Button>
+                </td>
+              </tr>
+            )}
           </tbody>
         ))}
       </table>
