@@ -13,7 +13,14 @@ export interface SetAsideDialogProps {
 /** Sets an alert aside from the board, where its line has no room for the form. */
 export function SetAsideDialog({ alert, zone, onClose }: SetAsideDialogProps) {
   return (
-    <Dialog isOpen={alert !== null} onClose={onClose} title="Set aside" className={styles.dialog}>
+    <Dialog
+      isOpen={alert !== null}
+      onClose={onClose}
+      title="Set aside"
+      className={styles.dialog}
+      shouldReturnFocusOnClose
+      transitionDuration={0}
+    >
       <DialogBody>
         {alert !== null && (
           <>

@@ -19,7 +19,14 @@ export interface ExtraTurnDialogProps {
 /** Enters a turn that is in no timetable. */
 export function ExtraTurnDialog(props: ExtraTurnDialogProps) {
   return (
-    <Dialog isOpen={props.isOpen} onClose={props.onClose} title="Extra turn" className={styles.dialog}>
+    <Dialog
+      isOpen={props.isOpen}
+      onClose={props.onClose}
+      title="Extra turn"
+      className={styles.dialog}
+      shouldReturnFocusOnClose
+      transitionDuration={0}
+    >
       <ExtraTurnForm {...props} />
     </Dialog>
   );

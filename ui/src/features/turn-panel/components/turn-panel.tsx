@@ -9,7 +9,7 @@ import { usePerson } from '../../../lib/session';
 import type { TurnNow } from '../../../lib/turn/turn-now';
 import { planQuery } from '../../../lib/turn/turn-queries';
 import { useTurnAt } from '../../../lib/turn/use-turn-at';
-import { isTyping } from '../../../lib/use-key';
+import { isTyping, usePageKey } from '../../../lib/use-key';
 import { useNow } from '../../../lib/use-now';
 import { actsOf, type ActTarget, type EntryAct } from '../model/entry-acts';
 import { squeezeOf, squeezeWords } from '../model/squeeze';
@@ -70,17 +70,13 @@ export function TurnPanel(props: TurnPanelProps) {
 
 const letterActs: Record<string, EntryAct> = { r: 'step', n: 'note', m: 'track', w: 'set' };
 
-/** Esc closes; the letters of the list work here too, while nobody types. */
+/** Esc closes, wherever the focus is; the letters of the list work here too, while nobody types. */
 function usePanelKeys({ turnId, terminal, onAct, onClose }: TurnPanelProps, turn: TurnNow | undefined) {
   const { letterKeys } = usePreferences();
+  usePageKey({ key: 'escape' }, onClose);
   const acts = actsOf(usePerson(), terminal.code);
   return (event: KeyboardEvent): void => {
     if (event.defaultPrevented || event.ctrlKey || event.altKey || event.metaKey) return;
-    if (event.key === 'Escape') {
-      event.preventDefault();
-      onClose();
-      return;
-    }
     const act = letterActs[event.key.toLowerCase()];
     if (act === undefined || !letterKeys || turn === undefined || !acts.has(act) || isTyping(event.target))
       return;
