@@ -3,7 +3,7 @@ import { useEffect, useState } from 'react';
 import { createRoot } from 'react-dom/client';
 import { Timeline } from 'vis-timeline/esnext';
 import { TimelinePicture } from '../src/features/board/components/timeline-picture';
-import { laneGroup, LANES, type PictureItem } from '../src/features/board/model/picture-items';
+import { laneGroup, LANES, type PictureItem } from '../src/features/board/model/picture-scene';
 import '../src/styles/index.css';
 
 /** A day of a large terminal: rows, items spread over 24 hours, four of them in view. */

@@ -16,6 +16,7 @@ import { rowWords } from '../model/row-words';
 import { clockText, timeText } from '../../../lib/turn/time-text';
 import { movedChoice, neighbourSpan, resizedChoice, type TimeWindow } from '../model/time-window';
 import { BoardTools } from './board-tools';
+import type { BoardPartProps } from './board-part';
 import styles from './board.module.css';
 import { ExtraTurnDialog } from './extra-turn-dialog';
 import { Legend } from './legend';
@@ -161,17 +162,6 @@ function useStableCallback<Args extends unknown[]>(
     latest.current = callback;
   });
   return useCallback((...args: Args) => latest.current(...args), []);
-}
-
-export interface BoardPartProps {
-  terminal: WireTerminal;
-  view: ReturnType<typeof useBoardView>[0];
-  now: number;
-  found: ReturnType<typeof useShownTurns>;
-  wordsOf: ReadonlyMap<string, string>;
-  list: ReturnType<typeof useTurnList>;
-  openId: string | null;
-  onAct: (act: TurnAct, turnId: string, step: string | null) => void;
 }
 
 /** Loading, failed, empty or hidden by the filter, in words; else the board itself. */

@@ -6,7 +6,7 @@ import { clashPartners, groupRows } from '../model/group-rows';
 import { stepColumns } from '../model/step-columns';
 import { tableRow } from '../model/table-cells';
 import { timeText } from '../../../lib/turn/time-text';
-import type { BoardPartProps } from './board';
+import type { BoardPartProps } from './board-part';
 import styles from './board.module.css';
 import { TurnTable, type TableGroup } from './turn-table';
 

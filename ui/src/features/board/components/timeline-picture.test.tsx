@@ -1,6 +1,6 @@
 import { render } from '@testing-library/react';
 import { clockAt } from '../../../testing/wire-turn';
-import type { PictureItem } from '../model/picture-items';
+import type { PictureItem } from '../model/picture-scene';
 import { TimelinePicture, type TimelinePictureProps } from './timeline-picture';
 
 const now = clockAt('17:26:40');

@@ -5,7 +5,7 @@ import 'vis-timeline/styles/vis-timeline-graph2d.min.css';
 import type { Instant } from '@stubpost/shared';
 import { axisStep } from '../model/axis-labels';
 import { diffItems } from '../model/diff-items';
-import { laneGroup, LANES, type PictureItem } from '../model/picture-items';
+import { laneGroup, LANES, type PictureItem } from '../model/picture-scene';
 import type { TimeWindow } from '../model/time-window';
 import './lanes.css';
 import styles from './timeline-picture.module.css';

@@ -9,7 +9,7 @@ import { detailedItems } from '../model/picture-items';
 import { stepWords } from '../../../lib/turn/step-words';
 import { clockText, timeText } from '../../../lib/turn/time-text';
 import { draggedChoice, summaryFromMinutes, type WindowChoice } from '../model/time-window';
-import type { BoardPartProps } from './board';
+import type { BoardPartProps } from './board-part';
 import styles from './board.module.css';
 import { RowHeads } from './row-heads';
 

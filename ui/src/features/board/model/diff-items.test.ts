@@ -1,5 +1,5 @@
 import { diffItems } from './diff-items';
-import type { PictureItem } from './picture-items';
+import type { PictureItem } from './picture-scene';
 
 const item = (id: string, change: Partial<PictureItem> = {}): PictureItem => ({
   id,

@@ -1,4 +1,4 @@
-import type { PictureItem } from './picture-items';
+import type { PictureItem } from './picture-scene';
 
 /** What has to be told to the picture: items that are new or look different, and names of those that are gone. */
 export interface ItemChanges {

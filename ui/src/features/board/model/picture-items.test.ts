@@ -11,7 +11,8 @@ import {
 import { turnAt } from '../../../lib/turn/turn-at';
 import { timeText } from '../../../lib/turn/time-text';
 import { groupRows } from './group-rows';
-import { detailedItems, mostItems, pictureItems, type Detail, type PictureItem } from './picture-items';
+import { detailedItems, mostItems, pictureItems } from './picture-items';
+import type { Detail, PictureItem } from './picture-scene';
 import { windowAt } from './time-window';
 
 const zone = 'America/New_York';

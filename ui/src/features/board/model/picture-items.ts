@@ -3,6 +3,15 @@ import { formatSlack } from '../../../lib/time-display';
 import type { BoardRow } from './group-rows';
 import type { TurnNow } from '../../../lib/turn/turn-now';
 import { planText } from './mark-pitch';
+import {
+  LANES,
+  laneGroup,
+  type Detail,
+  type Lane,
+  type PictureItem,
+  type Scene,
+  type TurnScene,
+} from './picture-scene';
 import { markItems } from './picture-marks';
 import { overlaps, type TimeWindow } from './time-window';
 import { nextLane, workLane, type NextLane, type WorkLane } from './turn-picture';
@@ -16,52 +25,6 @@ import {
   shownStretch,
 } from '../../../lib/turn/turn-times';
 import { wordItems } from './picture-words';
-
-/** One thing drawn on a lane. Looks hang on class names alone; content is plain text. */
-export interface PictureItem {
-  id: string;
-  group: string;
-  type: 'range' | 'point';
-  start: Instant;
-  end?: Instant;
-  className: string;
-  content: string;
-}
-
-/** How much is drawn: everything, without the comb of due times, or four cells in the place of the marks. */
-export type Detail = 'full' | 'lean' | 'summary';
-
-/** What the picture is drawn from. */
-export interface Scene {
-  rows: readonly BoardRow[];
-  window: TimeWindow;
-  now: Instant;
-  pixelsPerMinute: number;
-  detail: Detail;
-  /** Writes a plan time in the terminal's zone. */
-  clock: (instant: Instant) => string;
-}
-
-/** Where an item of a turn goes: its scene and the lanes of its row. */
-export interface TurnScene {
-  turn: TurnNow;
-  now: Instant;
-  window: TimeWindow;
-  clock: (instant: Instant) => string;
-  /** Pixels from one instant to another. */
-  pixels: (from: Instant, to: Instant) => number;
-  /** The instant so many pixels after another. */
-  after: (instant: Instant, pixels: number) => Instant;
-  item: (lane: Lane, name: string, item: Omit<PictureItem, 'id' | 'group'>) => PictureItem;
-}
-
-export const LANES = ['plan', 'work', 'next'] as const;
-export type Lane = (typeof LANES)[number];
-
-/** Name of a lane's group in the timeline: `track-3-plan`. */
-export function laneGroup(rowId: string, lane: Lane): string {
-  return `${rowId}-${lane}`;
-}
 
 /** Everything to draw in a window, for the turns that reach into it. */
 export function pictureItems(scene: Scene): PictureItem[] {

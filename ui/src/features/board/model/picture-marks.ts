@@ -2,7 +2,7 @@ import type { Instant } from '@stubpost/shared';
 import { stepMarkClass } from '../../../components/step-mark';
 import type { StepNow, TurnNow } from '../../../lib/turn/turn-now';
 import { markPitch, spacedMarks } from './mark-pitch';
-import type { PictureItem, TurnScene } from './picture-items';
+import type { PictureItem, TurnScene } from './picture-scene';
 import { isFarOffPlan } from '../../../lib/turn/turn-times';
 
 /** The marks of one turn, and the right edge of the last of them. */

@@ -1,5 +1,5 @@
 import type { Instant } from '@stubpost/shared';
-import type { PictureItem, TurnScene } from './picture-items';
+import type { PictureItem, TurnScene } from './picture-scene';
 import type { WorkLane } from './turn-picture';
 import { arrivalOf, isUntaken, plannedStretch } from '../../../lib/turn/turn-times';
 import { healthFlag } from '../../../lib/turn/health-flag';
