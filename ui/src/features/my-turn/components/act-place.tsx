@@ -119,7 +119,7 @@ function ActBody({ page, lead, isAfter, ways }: ActBodyProps) {
         act={act}
         lead={lead}
         isBrief={(page.fields.length > 0 || page.asksTime) && !isAfter}
-        {...(brakes.hand === null ? {} : { hint: handHint(page) })}
+        {...hintOf(page, isAfter)}
       >
         {!isAfter && <ActInputs page={page} />}
         {isAfter && isDue && (
@@ -146,6 +146,12 @@ function ActBody({ page, lead, isAfter, ways }: ActBodyProps) {
       <SecondaryButtons page={page} ways={ways} isAfter={isAfter} />
     </>
   );
+}
+
+/** On a page with keys the boxes say whose reading it is; nothing is said twice. */
+function hintOf(page: ActOnPage, isAfter: boolean): { hint?: string } {
+  if (page.brakes.hand !== null) return { hint: handHint(page) };
+  return page.active !== null && !isAfter ? { hint: '' } : {};
 }
 
 function handHint({ brakes }: ActOnPage): string {

@@ -1,3 +1,4 @@
+import { useEffect, useRef } from 'react';
 import { fieldWords, type ActForm, type NumberField } from '../model/act-form';
 import { EraseSign } from './phone-icons';
 import styles from './phone-input.module.css';
@@ -19,6 +20,11 @@ export interface NumberPadProps {
 /** Boxes for what is read off or counted, and keys large enough for gloves. */
 export function NumberPad(props: NumberPadProps) {
   const { fields, form, active, onDigit, onErase, onNone } = props;
+  const pad = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    // On a short phone the lower keys would lie behind the bar.
+    pad.current?.scrollIntoView({ block: 'nearest' });
+  }, []);
   const noneWord = active === 'count' ? 'No count' : 'No reading';
   return (
     <>
@@ -35,6 +41,7 @@ export function NumberPad(props: NumberPadProps) {
       </div>
       <div
         className={styles.pad}
+        ref={pad}
         role="group"
         aria-label={`Number pad for ${fieldWords[active].name.toLowerCase()}`}
       >

@@ -26,6 +26,8 @@ export interface RecordBarProps {
   children: ReactNode;
   under?: string;
   hollow?: boolean;
+  /** The second bar of a release, whose words are a whole record. */
+  isSecond?: boolean;
   onRecord: () => void;
 }
 
@@ -40,6 +42,7 @@ export function RecordBar({
   children,
   under,
   hollow = false,
+  isSecond = false,
   onRecord,
 }: RecordBarProps) {
   const memory = useBarMemory(barKey, isOwnChange);
@@ -52,7 +55,7 @@ export function RecordBar({
   return (
     <button
       type="button"
-      className={`${styles.bar} ${hollow ? styles.hollow : ''}`}
+      className={`${styles.bar} ${hollow ? styles.hollow : ''} ${isSecond ? styles.second : ''}`}
       onPointerDown={() => {
         downOn.current = memory.current?.key ?? null;
       }}

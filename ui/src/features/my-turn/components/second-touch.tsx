@@ -13,7 +13,7 @@ export function SecondTouch({ page, onRecord }: { page: ActOnPage; onRecord: () 
     <>
       <section className={styles.next} aria-label="Second touch">
         <p className="muted">Second touch, here</p>
-        <RecordBar barKey="second" isOwnChange over="Record now" onRecord={onRecord}>
+        <RecordBar barKey="second" isOwnChange isSecond over="Record now" onRecord={onRecord}>
           Released: {handbrakeWords(page.reading)}
         </RecordBar>
       </section>

@@ -1,4 +1,4 @@
-import { useCallback, useEffect, useState } from 'react';
+import { useCallback, useLayoutEffect, useState } from 'react';
 import { actKey, isSettled, nextAct, type NextAct } from '../model/next-act';
 import type { ActWays } from './act-place';
 import type { EntryToWithdraw } from './last-entry';
@@ -51,7 +51,8 @@ export function usePlaces(): Places {
   const place: Place = isOutdated ? { kind: 'act' } : chosen;
 
   const shownKey = `${place.kind} ${actKey(act)}`;
-  useEffect(() => {
+  // Before the parts of the page look where they stand: a number pad may then bring itself into sight.
+  useLayoutEffect(() => {
     window.scrollTo({ top: 0 });
   }, [shownKey]);
 
