@@ -1,6 +1,13 @@
-import { latenessSettingsOf, shippedThresholds, type LatenessSettings } from '@stubpost/shared';
-import { skipToken, useQuery } from '@tanstack/react-query';
+import {
+  latenessSettingsOf,
+  shippedThresholds,
+  type LatenessSettings,
+  type WireBoard,
+  type WireTurn,
+} from '@stubpost/shared';
+import { skipToken, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query';
 import { useMemo } from 'react';
+import { queryKeys } from '../query-keys';
 import { useNow } from '../use-now';
 import { turnAt } from './turn-at';
 import type { TurnNow } from './turn-now';
@@ -24,11 +31,22 @@ export interface TurnAnswer {
   refetch: () => void;
 }
 
+/** A turn that some board has already brought, so that its panel and its forms stand at once. */
+function turnOnBoards(client: QueryClient, turnId: string): WireTurn | undefined {
+  const boards = client.getQueriesData<WireBoard>({ queryKey: queryKeys.turns.boards });
+  return boards.flatMap(([, board]) => board?.turns ?? []).find((turn) => turn.id === turnId);
+}
+
 /** One turn as it stands this second; null asks for none. */
 export function useTurnAt(turnId: string | null): TurnAnswer {
   const now = useNow();
   const asked = turnQuery(turnId ?? '');
-  const found = useQuery({ ...asked, queryFn: turnId === null ? skipToken : asked.queryFn });
+  const client = useQueryClient();
+  const found = useQuery({
+    ...asked,
+    queryFn: turnId === null ? skipToken : asked.queryFn,
+    placeholderData: () => (turnId === null ? undefined : turnOnBoards(client, turnId)),
+  });
   const wire = found.data;
   const plan = planQuery(wire?.planId ?? '');
   const { data } = useQuery({ ...plan, queryFn: wire === undefined ? skipToken : plan.queryFn });
