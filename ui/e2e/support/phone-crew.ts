@@ -3,9 +3,6 @@ import type { Page } from 'playwright-core';
 /** A bar that appeared by itself is deaf for a second; people take longer than that, tests do not. */
 const deafMilliseconds = 1200;
 
-const bar = (page: Page) =>
-  page.getByRole('button', { name: /Record now|Record for earlier|I have this turn/ });
-
 /** Puts the signed-in person on the turn of a train, from the list of turns. */
 export async function takeTurn(page: Page, train: string): Promise<void> {
   await page.goto('/my');
