@@ -5,7 +5,7 @@ import {
   type WireBoard,
   type WireTurn,
 } from '@stubpost/shared';
-import { skipToken, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query';
+import { useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import { queryKeys } from '../query-keys';
 import { useNow } from '../use-now';
@@ -18,8 +18,7 @@ export function useLatenessSettings(
   terminal: string | undefined,
   zone: string | undefined,
 ): LatenessSettings {
-  const options = settingsQuery(terminal ?? '');
-  const { data } = useQuery({ ...options, queryFn: terminal === undefined ? skipToken : options.queryFn });
+  const { data } = useQuery({ ...settingsQuery(terminal ?? ''), enabled: terminal !== undefined });
   const thresholds = data?.thresholds ?? shippedThresholds;
   return useMemo(() => latenessSettingsOf(thresholds, zone ?? 'UTC'), [thresholds, zone]);
 }
@@ -40,20 +39,21 @@ function turnOnBoards(client: QueryClient, turnId: string): WireTurn | undefined
 /** One turn as it stands this second; null asks for none. */
 export function useTurnAt(turnId: string | null): TurnAnswer {
   const now = useNow();
-  const asked = turnQuery(turnId ?? '');
   const client = useQueryClient();
   const found = useQuery({
-    ...asked,
-    queryFn: turnId === null ? skipToken : asked.queryFn,
+    ...turnQuery(turnId ?? ''),
+    enabled: turnId !== null,
     placeholderData: () => (turnId === null ? undefined : turnOnBoards(client, turnId)),
   });
   const wire = found.data;
-  const plan = planQuery(wire?.planId ?? '');
-  const { data } = useQuery({ ...plan, queryFn: wire === undefined ? skipToken : plan.queryFn });
+  const { data } = useQuery({ ...planQuery(wire?.planId ?? ''), enabled: wire !== undefined });
   const settings = useLatenessSettings(wire?.terminal, wire?.zone);
   const turn = useMemo(
     () => (wire === undefined ? undefined : turnAt(wire, { plan: data, settings }, now)),
     [wire, data, settings, now],
   );
-  return { turn, isPending: found.isPending, error: found.error, refetch: () => void found.refetch() };
+  const refetch = (): void => {
+    if (turnId !== null) void found.refetch();
+  };
+  return { turn, isPending: found.isPending, error: found.error, refetch };
 }

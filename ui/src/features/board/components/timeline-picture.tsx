@@ -143,7 +143,7 @@ function useItems(
             },
           ]
         : [];
-    drawing.items.update([...past, ...changed.map((item) => ({ ...item }) as DataItem)]);
+    drawing.items.update([...past, ...changed.map((item) => ({ ...item }))]);
     for (const item of changed) drawing.drawn.set(item.id, item);
     for (const id of removed) drawing.drawn.delete(id);
   }, [drawing, items, now, shown.from]);
