@@ -1,7 +1,9 @@
 import { useState, type ReactNode } from 'react';
+import { Link } from 'react-router-dom';
 import { useEntryQueue } from '../api/use-entry-queue';
 import { actKey } from '../model/next-act';
-import { ActPlace, draftOf } from './act-place';
+import { draftOf } from './act-bar';
+import { ActPlace } from './act-place';
 import { AllSteps } from './all-steps';
 import { DoneBar } from './done-bar';
 import { EntriesOnPhone } from './entries-on-phone';
@@ -13,6 +15,7 @@ import { RecordBar } from './record-bar';
 import { SecondTouch } from './second-touch';
 import { TakeTurn } from './take-turn';
 import { TrainFacts } from './train-facts';
+import { TurnPicture } from './turn-picture';
 import { useTurnScene, type Recorded } from './turn-context';
 import { usePlaces, type Places } from './use-places';
 
@@ -29,6 +32,7 @@ export function TurnPlaces() {
   const { turn, me, record } = useTurnScene();
   const places = usePlaces();
   const [isHelping, setHelping] = useState(false);
+  if (me.roles.length === 0) return <NotCrew />;
   const isOutside = me.role === null && me.roles.length > 0 && !isHelping && turn.annulled === null;
   if (isOutside && places.place.kind === 'act') {
     return (
@@ -46,6 +50,21 @@ export function TurnPlaces() {
   return (
     <div className={styles.main}>
       <SubPlace places={places} />
+    </div>
+  );
+}
+
+/** Somebody who may record, but not from a crew's phone: the desk has a page of its own for the turn. */
+function NotCrew() {
+  const { turn, now, marker } = useTurnScene();
+  return (
+    <div className={styles.main}>
+      <TrainFacts turn={turn} now={now} marker={marker} />
+      <TurnPicture turn={turn} now={now} />
+      <p className={styles.said}>Only a conductor or an engineer of this terminal records from the phone.</p>
+      <Link className={`${styles.button} ${styles.wide}`} to={`/turns/${turn.id}`}>
+        Open the turn at the desk
+      </Link>
     </div>
   );
 }

@@ -1,6 +1,6 @@
 import { useCallback, useLayoutEffect, useState } from 'react';
 import { actKey, isSettled, nextAct, type NextAct } from '../model/next-act';
-import type { ActWays } from './act-place';
+import type { ActWays } from './act-ways';
 import type { EntryToWithdraw } from './last-entry';
 import { useTurnScene, type Recorded } from './turn-context';
 import type { ActOnPage } from './use-act';

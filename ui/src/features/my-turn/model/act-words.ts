@@ -1,6 +1,5 @@
 import type { CrewRole, PlanStep, WireReading } from '@stubpost/shared';
 import { carList, handbrakeWords, readingWords } from './act-form';
-import type { NextAct } from './next-act';
 
 const doerWords = { conductor: 'the conductor', engineer: 'the engineer', crew: 'a crew member' } as const;
 
@@ -22,9 +21,4 @@ export function barWords(
   const word = hand === 'set' ? 'Set' : 'Released';
   const cars = reading.cars ?? [];
   return cars.length > 0 ? `${word}: ${carList(cars)}` : `${word}: ${handbrakeWords(reading)}`;
-}
-
-/** What the "Done" bar calls an act. */
-export function doneWord(act: NextAct['kind']): string {
-  return act === 'step' ? 'Done' : 'Recorded';
 }

@@ -14,7 +14,7 @@ export const DOER_WORDS: Record<Doer, string> = {
   engineer: 'Engineer',
   crew: 'Any crew member',
 };
-export const PLACE_WORDS: Record<Place, string> = { cab: 'In a cab', ground: 'On the ground' };
+export const PLACE_WORDS: Record<Place, string> = { cab: 'Cab', ground: 'Ground' };
 export const ANCHOR_WORDS: Record<Anchor, string> = { arrival: 'Arrival', departure: 'Departure' };
 export const READING_WORDS: Record<ReadingKey, string> = {
   count: 'Handbrakes, count',
