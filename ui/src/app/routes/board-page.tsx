@@ -56,7 +56,7 @@ function TerminalBoard({ terminal }: { terminal: WireTerminal }) {
   const { turnId } = useParams();
   const navigate = useNavigate();
   const [query] = useSearchParams();
-  const { state } = useLocation();
+  const state: unknown = useLocation().state;
   const isNarrow = useMedia(narrow);
   const isFull = turnId !== undefined && (isNarrow || query.get('page') === 'full');
   const open = (id: string): void =>
@@ -98,8 +98,8 @@ function TerminalBoard({ terminal }: { terminal: WireTerminal }) {
           />
         </PartBoundary>
       )}
-      <EntryDialog target={desk.target} onClose={desk.closeForm} onRecorded={desk.onRecorded} />
-      <SetAsideDialog alert={desk.aside} zone={terminal.zone} onClose={desk.closeAside} />
+      <EntryDialog target={desk.target} onClose={desk.close} onRecorded={desk.onRecorded} />
+      <SetAsideDialog alert={desk.aside} zone={terminal.zone} onClose={desk.close} />
       {desk.recorded !== null && (
         <ReceiptLine key={desk.recorded.entryId} recorded={desk.recorded} onClose={desk.closeReceipt} />
       )}

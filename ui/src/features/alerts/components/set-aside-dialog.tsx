@@ -18,7 +18,7 @@ export function SetAsideDialog({ alert, zone, onClose }: SetAsideDialogProps) {
       onClose={onClose}
       title="Set aside"
       className={styles.dialog}
-      shouldReturnFocusOnClose
+      shouldReturnFocusOnClose={false}
       transitionDuration={0}
     >
       <DialogBody>

@@ -1,8 +1,7 @@
 import type { WireTerminal } from '@stubpost/shared';
 import type { BoardView } from '../model/board-search';
-import type { TurnAct } from '../model/list-keys';
+import type { TurnAct, WindowMove } from '../model/list-keys';
 import type { ShownTurns } from './use-shown-turns';
-import type { TurnList } from './use-turn-list';
 
 /** What both views of the board are drawn from. */
 export interface BoardPartProps {
@@ -11,7 +10,8 @@ export interface BoardPartProps {
   now: number;
   found: ShownTurns;
   wordsOf: ReadonlyMap<string, string>;
-  list: TurnList;
+  /** Moves or resizes the window, as a key of the list asks. */
+  onWindow: (to: WindowMove) => void;
   openId: string | null;
   onAct: (act: TurnAct, turnId: string, step: string | null) => void;
 }

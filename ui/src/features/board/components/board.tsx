@@ -8,10 +8,11 @@ import { useLiveState } from '../../../lib/live';
 import { useMay } from '../../../lib/session';
 import { formatServiceDate } from '../../../lib/time-display';
 import { useNow } from '../../../lib/use-now';
+import { useReturnFocus } from '../../../lib/use-return-focus';
 import { noFilter } from '../model/board-search';
 import type { TurnNow } from '../../../lib/turn/turn-now';
 import { isFiltering } from '../model/filter-turns';
-import type { TurnAct } from '../model/list-keys';
+import type { TurnAct, WindowMove } from '../model/list-keys';
 import { rowWords } from '../model/row-words';
 import { clockText, timeText } from '../../../lib/turn/time-text';
 import { movedChoice, neighbourSpan, resizedChoice, type TimeWindow } from '../model/time-window';
@@ -25,7 +26,6 @@ import { TableView } from './table-view';
 import { TimelineView } from './timeline-view';
 import { useBoardView } from './use-board-view';
 import { useShownTurns } from './use-shown-turns';
-import { useTurnList } from './use-turn-list';
 
 export interface BoardProps {
   terminal: WireTerminal;
@@ -48,6 +48,7 @@ export function Board({ terminal, openId, hasPicture, onOpen, onAct }: BoardProp
   const [pausedAt, setPausedAt] = useState<number | null>(null);
   const [hasLegend, setLegend] = useState(true);
   const [isAdding, setAdding] = useState(false);
+  const focus = useReturnFocus();
   const ticking = useNow(pace);
   const now = pausedAt ?? ticking;
   const holdKey = pausedAt !== null || pace > 1 ? String(now) : undefined;
@@ -56,7 +57,7 @@ export function Board({ terminal, openId, hasPicture, onOpen, onAct }: BoardProp
   const isStale = useStale(ticking);
   const wordsOf = useMemo(() => new Map(shown.map((turn) => [turn.id, rowWords(turn, now)])), [shown, now]);
 
-  const setWindow = (to: 'earlier' | 'later' | 'shorter' | 'longer' | 'now'): void => {
+  const setWindow = (to: WindowMove): void => {
     if (to === 'now') change({ startAt: null });
     else if (to === 'earlier' || to === 'later')
       change(movedChoice(view, shownWindow, to === 'earlier' ? -1 : 1));
@@ -67,15 +68,8 @@ export function Board({ terminal, openId, hasPicture, onOpen, onAct }: BoardProp
     if (what === 'open') onOpen(turnId);
     else if (turn !== undefined) onAct(what, turn, step);
   });
-  const list = useTurnList({
-    ids: shown.map((turn) => turn.id),
-    stepsOf: (turnId) => found.all.get(turnId)?.steps.map((step) => step.key) ?? [],
-    onAct: act,
-    onWindow: setWindow,
-  });
-  useFocusBack(openId, list.focusTurn);
 
-  const parts = { terminal, view, now, found, wordsOf, list, openId, onAct: act };
+  const parts = { terminal, view, now, found, wordsOf, openId, onAct: act, onWindow: setWindow };
   return (
     <div className={`${styles.board} ${isStale ? `stale ${styles.stale}` : ''}`}>
       <BoardTools
@@ -100,7 +94,10 @@ export function Board({ terminal, openId, hasPicture, onOpen, onAct }: BoardProp
           setPausedAt(null);
         }}
         onPause={() => setPausedAt(pausedAt === null ? now : null)}
-        onAdd={() => setAdding(true)}
+        onAdd={() => {
+          focus.remember();
+          setAdding(true);
+        }}
       />
       {found.steady.waiting > 0 && (
         <div className={styles.waiting}>
@@ -122,7 +119,10 @@ export function Board({ terminal, openId, hasPicture, onOpen, onAct }: BoardProp
       <ExtraTurnDialog
         terminal={terminal}
         isOpen={isAdding}
-        onClose={() => setAdding(false)}
+        onClose={() => {
+          setAdding(false);
+          focus.giveBack();
+        }}
         onDone={(turn) => {
           setAdding(false);
           onOpen(turn.id);
@@ -142,15 +142,6 @@ const wholeMinute = (instant: number): number => Math.floor(instant / 60_000) * 
 function useStale(now: number): boolean {
   const { live, lastWordAt } = useLiveState();
   return !live && lastWordAt !== null && now - lastWordAt > staleAfter;
-}
-
-/** When the panel closes the focus goes back to the turn it was open for. */
-function useFocusBack(openId: string | null, focusTurn: (turnId: string) => void): void {
-  const before = useRef(openId);
-  useEffect(() => {
-    if (before.current !== null && openId === null) focusTurn(before.current);
-    before.current = openId;
-  }, [openId, focusTurn]);
 }
 
 /** A callback that stays the same object, so that rows need not be drawn again, and always does the latest. */

@@ -24,7 +24,7 @@ export function ExtraTurnDialog(props: ExtraTurnDialogProps) {
       onClose={props.onClose}
       title="Extra turn"
       className={styles.dialog}
-      shouldReturnFocusOnClose
+      shouldReturnFocusOnClose={false}
       transitionDuration={0}
     >
       <ExtraTurnForm {...props} />

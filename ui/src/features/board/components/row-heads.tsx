@@ -22,7 +22,13 @@ export function RowHeads(props: RowHeadsProps) {
   const { subject, list } = props;
   return (
     <div className={styles.heads}>
-      <table role="grid" ref={list.container} onKeyDown={list.onKeyDown} onFocus={list.onFocus}>
+      <table
+        role="grid"
+        ref={list.container}
+        onKeyDown={list.onKeyDown}
+        onFocus={list.onFocus}
+        onBlur={list.onBlur}
+      >
         <caption className="unseen">{props.caption}</caption>
         <colgroup>
           {[44, 58, 38, 96, 46, 54].map((width, index) => (

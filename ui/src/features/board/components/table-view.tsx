@@ -3,7 +3,9 @@ import { useRef } from 'react';
 import { usePerson } from '../../../lib/session';
 import { formatServiceDate, formatZoneLetters } from '../../../lib/time-display';
 import { clashPartners, groupRows } from '../model/group-rows';
-import { stepColumns } from '../model/step-columns';
+import { stepColumns, type StepColumn } from '../model/step-columns';
+import type { TurnNow } from '../../../lib/turn/turn-now';
+import { useTurnList } from './use-turn-list';
 import { tableRow } from '../model/table-cells';
 import { timeText } from '../../../lib/turn/time-text';
 import type { BoardPartProps } from './board-part';
@@ -13,7 +15,8 @@ import { TurnTable, type TableGroup } from './turn-table';
 const orderWords = { departure: 'in order of departure', track: 'by track', set: 'by set' } as const;
 
 /** The board as a table. */
-export function TableView({ terminal, view, now, found, wordsOf, list, openId, onAct }: BoardPartProps) {
+export function TableView(props: BoardPartProps) {
+  const { terminal, view, now, found, wordsOf, openId, onAct, onWindow } = props;
   const me = usePerson().name;
   const columns = useKept(stepColumns(found.shown));
   const trackRows = groupRows(found.shown, 'track', terminal.tracks, now);
@@ -36,6 +39,13 @@ export function TableView({ terminal, view, now, found, wordsOf, list, openId, o
             rows: group.turns.map(rowOf),
           }),
         );
+  const list = useTurnList({
+    ids: groups.flatMap((group) => group.rows.map((row) => row.id)),
+    stepsOf: (turnId) => stepsIn(turnId, columns, found.all),
+    onAct,
+    onWindow,
+    openId,
+  });
   const { zone } = terminal;
   const caption =
     `${found.shown.length} turns, ${terminal.name}, ${formatServiceDate(found.date)}, ` +
@@ -59,6 +69,18 @@ export function TableView({ terminal, view, now, found, wordsOf, list, openId, o
       </p>
     </div>
   );
+}
+
+/** Steps of a turn that have a cell in the table. */
+function stepsIn(
+  turnId: string,
+  columns: readonly StepColumn[],
+  all: ReadonlyMap<string, TurnNow>,
+): string[] {
+  const steps = all.get(turnId)?.steps ?? [];
+  return columns
+    .filter((column) => steps.some((step) => step.key === column.key))
+    .map((column) => column.key);
 }
 
 /** Groups of the table: all turns of a track or set together, also where the picture needs several rows for them. */

@@ -12,6 +12,7 @@ import { draggedChoice, summaryFromMinutes, type WindowChoice } from '../model/t
 import type { BoardPartProps } from './board-part';
 import styles from './board.module.css';
 import { RowHeads } from './row-heads';
+import { useTurnList, type TurnList } from './use-turn-list';
 
 const TimelinePicture = lazy(() =>
   import('./timeline-picture').then((loaded) => ({ default: loaded.TimelinePicture })),
@@ -21,7 +22,7 @@ const usualWidth = 1104;
 
 /** Row heads in words and, beside them, the picture. */
 export function TimelineView(props: BoardPartProps & { onDrag: (choice: WindowChoice) => void }) {
-  const { terminal, view, now, found, list } = props;
+  const { terminal, view, now, found } = props;
   const { zone } = terminal;
   const [width, setWidth] = useState(usualWidth);
   const subject = view.by === 'set' ? 'set' : 'track';
@@ -39,15 +40,23 @@ export function TimelineView(props: BoardPartProps & { onDrag: (choice: WindowCh
   const caption =
     `Turns by ${subject}, ${terminal.name}, ${formatServiceDate(found.date)}, ` +
     `${timeText(found.window.from, zone)} to ${timeText(found.window.to, zone)} ${formatZoneLetters(now, zone)}`;
+  const heads = useHeads(rows, props);
+  const list = useTurnList({
+    ids: heads.flatMap((head) => head.lines.map((line) => line.id)),
+    stepsOf: (turnId) => found.all.get(turnId)?.steps.map((step) => step.key) ?? [],
+    onAct: props.onAct,
+    onWindow: props.onWindow,
+    openId: props.openId,
+  });
   const isNowShown = now >= found.window.from && now < found.window.to;
   return (
     <div className={styles.rows} {...found.steady.hold} onScroll={setScrolled}>
       <RowHeads
         caption={caption}
         subject={subject}
-        heads={useHeads(rows, props)}
+        heads={heads}
         wordsOf={props.wordsOf}
-        stepWords={useStepWords(props)}
+        stepWords={useStepWords(props, list)}
         list={list}
         openId={props.openId}
         onAct={props.onAct}
@@ -91,7 +100,7 @@ function useHeads(rows: readonly BoardRow[], { found, now, terminal }: BoardPart
   return kept.current;
 }
 
-function useStepWords({ found, list, terminal }: BoardPartProps): string | null {
+function useStepWords({ found, terminal }: BoardPartProps, list: TurnList): string | null {
   const turn = list.activeId === null ? undefined : found.all.get(list.activeId);
   const step = turn?.steps.find((one) => one.key === list.activeStep);
   return useMemo(

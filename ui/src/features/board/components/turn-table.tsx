@@ -44,6 +44,7 @@ export function TurnTable(props: TurnTableProps) {
         ref={list.container}
         onKeyDown={list.onKeyDown}
         onFocus={list.onFocus}
+        onBlur={list.onBlur}
       >
         <caption className="unseen">{caption}</caption>
         <colgroup>

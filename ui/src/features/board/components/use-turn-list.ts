@@ -1,14 +1,24 @@
-import { useCallback, useRef, useState, type FocusEvent, type KeyboardEvent, type RefObject } from 'react';
+import {
+  useCallback,
+  useEffect,
+  useRef,
+  useState,
+  type FocusEvent,
+  type KeyboardEvent,
+  type RefObject,
+} from 'react';
 import { usePreferences } from '../../../lib/preferences';
-import { listCommand, movedIndex, type ListCommand, type TurnAct } from '../model/list-keys';
+import { listCommand, movedIndex, type ListCommand, type TurnAct, type WindowMove } from '../model/list-keys';
 
 export interface TurnListOptions {
-  /** Turns in the order of the list. */
+  /** Turns that have a row, in the order in which the rows stand. */
   ids: readonly string[];
   /** Keys of the steps of a turn, in the order in which Left and Right walk them. */
   stepsOf: (turnId: string) => readonly string[];
   onAct: (act: TurnAct, turnId: string, step: string | null) => void;
-  onWindow: (to: 'earlier' | 'later' | 'shorter' | 'longer' | 'now') => void;
+  onWindow: (to: WindowMove) => void;
+  /** The turn whose panel is open; when it closes its row gets the focus back. */
+  openId: string | null;
 }
 
 /** A list of turns with one stop of the Tab key; arrows move inside it. */
@@ -20,8 +30,7 @@ export interface TurnList {
   container: RefObject<HTMLTableElement>;
   onKeyDown: (event: KeyboardEvent) => void;
   onFocus: (event: FocusEvent) => void;
-  /** Puts the focus on a turn's row. */
-  focusTurn: (turnId: string) => void;
+  onBlur: (event: FocusEvent) => void;
 }
 
 const find = (root: HTMLElement | null, turnId: string, step: string | null): HTMLElement | null => {
@@ -31,7 +40,7 @@ const find = (root: HTMLElement | null, turnId: string, step: string | null): HT
 };
 
 /** Roving focus over rows marked with `data-turn` and step cells marked with `data-turn` and `data-step`. */
-export function useTurnList({ ids, stepsOf, onAct, onWindow }: TurnListOptions): TurnList {
+export function useTurnList({ ids, stepsOf, onAct, onWindow, openId }: TurnListOptions): TurnList {
   const container = useRef<HTMLTableElement>(null);
   const [chosen, setChosen] = useState<{ turn: string | null; step: string | null }>({
     turn: null,
@@ -93,6 +102,47 @@ export function useTurnList({ ids, stepsOf, onAct, onWindow }: TurnListOptions):
     if (turn !== undefined) setChosen({ turn, step: place?.dataset['step'] ?? null });
   };
 
-  const focusTurn = useCallback((turn: string) => focusPlace(turn, null), [focusPlace]);
-  return { activeId, activeStep, container, onKeyDown, onFocus, focusTurn };
+  useFocusBack(openId, focusPlace);
+  const hold = useFocusHold(activeId, focusPlace);
+  return {
+    activeId,
+    activeStep,
+    container,
+    onKeyDown,
+    onFocus: (event) => {
+      hold.onFocus();
+      onFocus(event);
+    },
+    onBlur: hold.onBlur,
+  };
+}
+
+type FocusPlace = (turn: string, step: string | null) => void;
+
+/** When the panel closes the focus goes back to the turn it was open for. */
+function useFocusBack(openId: string | null, focusPlace: FocusPlace): void {
+  const before = useRef(openId);
+  useEffect(() => {
+    if (before.current !== null && openId === null) focusPlace(before.current, null);
+    before.current = openId;
+  }, [openId, focusPlace]);
+}
+
+/** A row that leaves the list takes the focus with it; then the row that has the tab stop gets it. */
+function useFocusHold(activeId: string | null, focusPlace: FocusPlace) {
+  const hasFocus = useRef(false);
+  useEffect(() => {
+    if (hasFocus.current && activeId !== null && document.activeElement === document.body) {
+      focusPlace(activeId, null);
+    }
+  }, [activeId, focusPlace]);
+  return {
+    onFocus: (): void => {
+      hasFocus.current = true;
+    },
+    onBlur: (event: FocusEvent): void => {
+      // An element that is taken out of the page may blur as well, but then it is no longer in it.
+      hasFocus.current = !(event.target as HTMLElement).isConnected;
+    },
+  };
 }

@@ -2,12 +2,15 @@
 export const TURN_ACTS = ['open', 'tick', 'relay', 'note', 'take', 'set-aside', 'track', 'set'] as const;
 export type TurnAct = (typeof TURN_ACTS)[number];
 
+/** How a key moves or resizes the window. */
+export type WindowMove = 'earlier' | 'later' | 'shorter' | 'longer' | 'now';
+
 /** What a key does while a list of turns has the focus. */
 export type ListCommand =
   | { do: 'move'; by: number | 'first' | 'last' }
   | { do: 'step'; by: -1 | 1 }
   | { do: 'act'; act: TurnAct }
-  | { do: 'window'; to: 'earlier' | 'later' | 'shorter' | 'longer' | 'now' };
+  | { do: 'window'; to: WindowMove };
 
 const pageRows = 10;
 

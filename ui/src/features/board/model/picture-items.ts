@@ -1,17 +1,8 @@
-import { millisecondsInMinute, type Instant } from '@stubpost/shared';
+import { millisecondsInMinute } from '@stubpost/shared';
 import { formatSlack } from '../../../lib/time-display';
-import type { BoardRow } from './group-rows';
 import type { TurnNow } from '../../../lib/turn/turn-now';
 import { planText } from './mark-pitch';
-import {
-  LANES,
-  laneGroup,
-  type Detail,
-  type Lane,
-  type PictureItem,
-  type Scene,
-  type TurnScene,
-} from './picture-scene';
+import { laneGroup, type Detail, type PictureItem, type Scene, type TurnScene } from './picture-scene';
 import { markItems } from './picture-marks';
 import { overlaps, type TimeWindow } from './time-window';
 import { nextLane, workLane, type NextLane, type WorkLane } from './turn-picture';

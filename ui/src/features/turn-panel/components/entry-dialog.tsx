@@ -30,7 +30,7 @@ export function EntryDialog({ target, onClose, onRecorded }: EntryDialogProps) {
       title={target === null ? '' : actTitles[target.act]}
       className={styles.dialog}
       canOutsideClickClose={false}
-      shouldReturnFocusOnClose
+      shouldReturnFocusOnClose={false}
       transitionDuration={0}
     >
       {target !== null && <LoadedForm target={target} onClose={onClose} onRecorded={onRecorded} />}
