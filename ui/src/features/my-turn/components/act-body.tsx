@@ -26,6 +26,8 @@ interface ActBodyProps {
 export function ActBody({ page, lead, isAfter, ways, onGoOn }: ActBodyProps) {
   const { act, lock, isLockLifted, brakes } = page;
   const isDue = act.kind === 'step' && (act.step.state === 'due' || act.step.state === 'overdue');
+  // A shut bar asks for nothing yet: first its reason, then cars and keys.
+  const isShut = lock !== null && !isLockLifted;
   if (act.kind === 'nothing') return <Finished ways={ways} />;
   return (
     <>
@@ -39,14 +41,14 @@ export function ActBody({ page, lead, isAfter, ways, onGoOn }: ActBodyProps) {
         isBrief={(page.fields.length > 0 || page.asksTime) && !isAfter}
         {...hintOf(page, isAfter)}
       >
-        {!isAfter && <ActInputs page={page} />}
+        {!isAfter && !isShut && <ActInputs page={page} />}
         {isAfter && isDue && (
           <button type="button" className={`${styles.button} ${styles.wide}`} onClick={onGoOn}>
             Go on to {actLabel(act)}
           </button>
         )}
       </NextStep>
-      {!isAfter && lock !== null && !isLockLifted && <LockNotice lock={lock} onLift={page.liftLock} />}
+      {!isAfter && isShut && <LockNotice lock={lock} onLift={page.liftLock} />}
       {!isAfter && lock !== null && isLockLifted && (
         <div className={styles.said}>
           <LockWords lock={lock} />
@@ -125,6 +127,7 @@ function Finished({ ways }: { ways: ActWays }) {
   const { turn } = useTurnScene();
   return (
     <>
+      <UnsentNotice />
       <section className={styles.next} aria-label="Next step">
         <h2>{turn.annulled === null ? 'Nothing left to record' : 'Annulled'}</h2>
         {turn.annulled !== null && <p>{turn.annulled.reason}</p>}

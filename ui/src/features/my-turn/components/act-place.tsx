@@ -30,7 +30,8 @@ export function ActPlace(props: ActPlaceProps) {
   const page = useAct(act);
   const bar = controlsBar({ turn, steps, personId: me.id, act, now, nextArrivalAt });
   const isAfter = doneBar !== null;
-  const hasInputs = page.fields.length > 0 && !isAfter;
+  const isShut = page.lock !== null && !page.isLockLifted;
+  const hasInputs = page.fields.length > 0 && !isAfter && !isShut;
   return (
     <>
       <div className={styles.main}>

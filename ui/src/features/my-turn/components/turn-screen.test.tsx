@@ -260,6 +260,9 @@ describe('out of order', () => {
     await openTurn({ ...ready, blueSignal: { since: at('17:10'), by: 'Marsh' } });
     expect(screen.getByText('blue signal up')).toBeVisible();
     expect(screen.getByText(/up since 17:10:00, Marsh/)).toBeVisible();
+    expect(screen.queryByRole('group', { name: /Number pad/ })).toBeNull();
+    await touch('It has happened: record it');
+    expect(screen.getByRole('group', { name: /Number pad/ })).toBeVisible();
   });
 
   it('records an act for earlier with the time the person gives', async () => {
