@@ -85,7 +85,7 @@ const RowHeadBody = memo(function RowHeadBody(props: BodyProps) {
   const isOnStep = activeStep !== null && activeId !== null;
   const lines = isOnStep && head.about === null ? linesBesideStep(head.lines, activeId) : head.lines;
   const subject = (
-    <td className={styles.subject} rowSpan={3} aria-label={head.labelWords}>
+    <td className={subjectClass(head.label)} rowSpan={3} aria-label={head.labelWords}>
       {head.label}
     </td>
   );
@@ -133,6 +133,12 @@ const RowHeadBody = memo(function RowHeadBody(props: BodyProps) {
     </tbody>
   );
 });
+
+/** Two figures stand large; longer labels must fit into the same cell. */
+function subjectClass(label: string): string {
+  if (label.length <= 2) return styles.subject ?? '';
+  return `${styles.subject} ${label.length <= 4 ? styles.long : styles.words}`;
+}
 
 /** With three turns in the head the focused step takes the place of another one. */
 function linesBesideStep(lines: readonly HeadLine[], activeId: string): HeadLine[] {

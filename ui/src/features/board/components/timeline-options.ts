@@ -10,13 +10,19 @@ export interface AxisState {
   pixelsPerMinute: number;
 }
 
+/**
+ * The library stays hidden until its range has changed once after the start. So it starts with a range that is a second
+ * too long, and shows itself with the first window it is given, also when that window then stands still.
+ */
+const firstChange = 1000;
 const halfHour = 30 * 60_000;
 const longest = 36 * 3_600_000;
 
 /** How the library is set up: fixed lanes, nothing selectable, our own labels, HTML cleaned by its own filter. */
 export function timelineOptions(axis: AxisState, range: { start: Instant; end: Instant }): TimelineOptions {
   return {
-    ...range,
+    start: range.start,
+    end: range.end + firstChange,
     stack: false,
     stackSubgroups: false,
     groupHeightMode: 'fixed',

@@ -48,7 +48,7 @@ export function rowHead(row: BoardRow, context: HeadContext): RowHead {
   const hidden = row.turns.length - shown.length;
   return {
     rowId: row.id,
-    label: row.part > 0 ? '″' : (row.label ?? '–'),
+    label: row.part > 0 ? '″' : (row.label ?? labelWords(row)),
     labelWords: labelWords(row),
     lines: shown.map((turn) => headLine(turn, row, turn === current)),
     about: shown.length === mostLines ? null : about(row, current, hidden, context),
