@@ -252,6 +252,28 @@ describe('acts of the desk', () => {
     expect(screen.queryByRole('dialog')).not.toBeInTheDocument();
   });
 
+  it('say why an alert could not be taken', async () => {
+    const server = serverOf(world()).refuse('POST', '/api/alerts/:id/taking', 'alert.not_standing');
+    const { user } = open(server);
+    (await row('1742')).focus();
+    await user.keyboard('t');
+    expect(await screen.findByText('This alert no longer stands.')).toBeVisible();
+  });
+
+  it('are taken back within ten seconds by the same hand', async () => {
+    const server = serverOf(world());
+    const { user } = open(server);
+    (await row('1742')).focus();
+    await user.keyboard('n');
+    await user.type(await screen.findByRole('textbox', { name: 'Note' }), 'wrong train');
+    await user.click(screen.getByRole('button', { name: 'Record' }));
+    await user.click(await screen.findByRole('button', { name: 'Undo' }));
+    await waitFor(() => expect(sentEntries(server)).toHaveLength(2));
+    const [note, undo] = sentEntries(server);
+    expect(undo).toMatchObject({ kind: 'withdrawn', target: note?.['id'] });
+    expect(await screen.findByText('Taken back.')).toBeVisible();
+  });
+
   it('enter an extra turn, which then is open', async () => {
     const server = serverOf(world());
     const extra = aWireTurn({ planned: { id: madeUuid(), outboundTrain: '9742' }, extra: true }, now);

@@ -11,6 +11,7 @@ import { Board } from '../../features/board/components/board';
 import { EntryDialog } from '../../features/turn-panel/components/entry-dialog';
 import { ReceiptLine } from '../../features/turn-panel/components/receipt-line';
 import { TurnPanel } from '../../features/turn-panel/components/turn-panel';
+import { errorText } from '../../lib/error-texts';
 import { useTerminalChoice } from '../../lib/terminal-choice';
 import { useTurnAt } from '../../lib/turn/use-turn-at';
 import { useMedia } from '../../lib/use-media';
@@ -100,6 +101,11 @@ function TerminalBoard({ terminal }: { terminal: WireTerminal }) {
       )}
       <EntryDialog target={desk.target} onClose={desk.close} onRecorded={desk.onRecorded} />
       <SetAsideDialog alert={desk.aside} zone={terminal.zone} onClose={desk.close} />
+      {desk.problem !== null && (
+        <p className={styles.problem} role="alert">
+          {errorText(desk.problem)}
+        </p>
+      )}
       {desk.recorded !== null && (
         <ReceiptLine key={desk.recorded.entryId} recorded={desk.recorded} onClose={desk.closeReceipt} />
       )}

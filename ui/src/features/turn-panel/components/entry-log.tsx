@@ -55,7 +55,7 @@ export function EntryLog({ turn, onWithdraw }: EntryLogProps) {
         <table className={styles.log}>
           <caption className="unseen">Entries of this turn, the latest first</caption>
           <colgroup>
-            {[66, 0, 124, 54, 62].map((width, index) => (
+            {[64, 0, 112, 66, 62].map((width, index) => (
               <col key={index} {...(width === 0 ? {} : { style: { width } })} />
             ))}
           </colgroup>
