@@ -5,7 +5,7 @@ import { v4 as uuid } from 'uuid';
 import { errorText } from '../../../lib/error-texts';
 import { readNow } from '../../../lib/use-now';
 import { useRecordEntry, type EntryToRecord } from '../api/record-entry';
-import { actTitles, type EntryAct } from '../model/entry-acts';
+import { entryNouns } from '../model/entry-acts';
 import styles from './receipt-line.module.css';
 import type { Recorded } from './use-entry-form';
 
@@ -40,7 +40,7 @@ export function ReceiptLine({ recorded, onClose }: { recorded: Recorded; onClose
       <span>
         {record.isSuccess
           ? 'Taken back.'
-          : `${wordsOf(recorded)} recorded, no. ${numbers.format(recorded.sequence)}.`}
+          : `${entryNouns[recorded.body.kind]} recorded, no. ${numbers.format(recorded.sequence)}.`}
       </span>
       {record.error !== null && <b>{errorText(record.error)}</b>}
       {hasUndo && !record.isSuccess && (
@@ -53,12 +53,4 @@ export function ReceiptLine({ recorded, onClose }: { recorded: Recorded; onClose
       </Button>
     </div>
   );
-}
-
-function wordsOf({ body }: Recorded): string {
-  if (body.kind === 'step-done') return 'Step';
-  if (body.kind === 'cannot-do') return '“Cannot be done”';
-  const acts = Object.keys(actTitles) as EntryAct[];
-  const act = acts.find((one) => one === body.kind);
-  return act === undefined ? 'Entry' : actTitles[act];
 }

@@ -7,6 +7,7 @@ import { ErrorState, LoadingRows } from '../../../components/page-states';
 import { usePreferences } from '../../../lib/preferences';
 import { usePerson } from '../../../lib/session';
 import type { TurnNow } from '../../../lib/turn/turn-now';
+import { shownSlack } from '../../../lib/turn/turn-times';
 import { planQuery } from '../../../lib/turn/turn-queries';
 import { useTurnAt } from '../../../lib/turn/use-turn-at';
 import { isTyping, usePageKey } from '../../../lib/use-key';
@@ -114,7 +115,8 @@ function PanelBody(props: TurnPanelProps & { turn: TurnNow; titleId: string }) {
           {squeeze !== null && (
             <section aria-label="Squeeze">
               <h3 className={styles.heading}>
-                Squeeze <span className={styles.plain}>{squeezeWords(squeeze.spareSeconds)}</span>
+                Squeeze{' '}
+                <span className={styles.plain}>{squeezeWords(shownSlack(turn) ?? squeeze.spareSeconds)}</span>
               </h3>
               <SqueezePicture squeeze={squeeze} now={now} zone={turn.zone} />
             </section>

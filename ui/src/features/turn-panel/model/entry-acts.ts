@@ -55,6 +55,27 @@ export const actTitles: Record<EntryAct, string> = {
   note: 'Note',
 };
 
+/** What an entry is called in the line that answers it. */
+export const entryNouns: Record<EntryKind, string> = {
+  arrival: 'Arrival',
+  departure: 'Departure',
+  'expected-arrival': 'Expected arrival',
+  'step-done': 'Step',
+  withdrawn: 'Withdrawal',
+  corrected: 'Correction',
+  'cannot-do': 'Cannot be done',
+  crew: 'Crew',
+  relief: 'Relief',
+  briefing: 'Briefing',
+  track: 'Track',
+  set: 'Set',
+  hold: 'Hold',
+  annulled: 'Annulment',
+  'blue-signal-up': 'Blue signal up',
+  'blue-signal-down': 'Blue signal down',
+  note: 'Note',
+};
+
 const kindsOfAct: Record<EntryAct, readonly EntryKind[]> = {
   step: ['step-done', 'cannot-do'],
   arrival: ['arrival'],

@@ -91,7 +91,7 @@ function openWords(step: StepNow, turn: TurnNow): Pick<StepRow, 'done' | 'isEsti
     case 'not-needed':
       return words(dash, 'not needed');
     case 'withdrawn':
-      return words('withdrawn');
+      return words(dash, 'withdrawn');
     case 'blocked':
       return words('cannot');
     case 'overdue':
