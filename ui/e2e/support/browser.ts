@@ -65,12 +65,22 @@ export async function signIn(page: Page, email: string, password: string): Promi
   await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
 }
 
+const wcagTags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
+
 /** Serious and critical findings of axe (WCAG 2.2 A and AA) on the page as it stands, one line each. */
 export async function seriousFindings(page: Page): Promise<string[]> {
-  const results = await new AxeBuilder({ page })
-    .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'])
-    .analyze();
-  return results.violations
+  return findingsOf(new AxeBuilder({ page }).withTags(wcagTags));
+}
+
+/** Findings about contrast alone: what can change when only the colours of a page do. */
+export async function contrastFindings(page: Page): Promise<string[]> {
+  return findingsOf(new AxeBuilder({ page }).withRules(['color-contrast']));
+}
+
+async function findingsOf(axe: AxeBuilder): Promise<string[]> {
+  // No frames to look into, so no second page to gather their results on.
+  const { violations } = await axe.setLegacyMode(true).analyze();
+  return violations
     .filter((violation) => violation.impact === 'serious' || violation.impact === 'critical')
     .flatMap((violation) => violation.nodes.map((node) => `${violation.id}: ${node.target.join(' ')}`));
 }
