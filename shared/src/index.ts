@@ -75,32 +75,47 @@ export { rolesOf } from './plan/step-roles';
 export type { StepRoles } from './plan/step-roles';
 export { shortestTurnSeconds, stepsFor } from './plan/steps-for-turn';
 export type { StepsQuestion } from './plan/steps-for-turn';
-export { ANCHORS, DOERS, PLACES, READINGS, STEP_KINDS } from './plan/step-plan';
+export { ANCHORS, DOERS, PLACES, READINGS, STEP_KINDS, isInCab } from './plan/step-plan';
 export type { Anchor, Doer, Place, PlanStep, ReadingKey, StepKind, StepPlan } from './plan/step-plan';
 
 // turn
 export { compareAccounts, inQuestionSeconds } from './turn/account';
 export type { Account } from './turn/account';
+export type { Answer } from './turn/answers';
+export { wouldNeedApproval } from './turn/approvals';
+export type { Decision, RecordChange } from './turn/approvals';
 export { attendanceAt, handbrakesStanding, silenceSeconds } from './turn/attendance';
 export type { Attendance } from './turn/attendance';
 export { blueSignalAt } from './turn/blue-signals';
 export type { BlueSignal } from './turn/blue-signals';
+export { CORRECTION_STATES } from './turn/corrections';
+export type { CorrectionState, RecordCorrection } from './turn/corrections';
 export { crewToCarry } from './turn/carried-crew';
 export type { CrewOnTurn, ReliefFact } from './turn/crew';
-export { CREW_ROLES, ENTRY_KINDS, ENTRY_SOURCES, SUBJECT_KINDS } from './turn/entry';
+export {
+  CREW_ROLES,
+  DEFECT_CAUSES,
+  ENTRY_KINDS,
+  ENTRY_SOURCES,
+  SUBJECT_KINDS,
+  TIE_UP_CHECKS,
+} from './turn/entry';
 export type {
   CrewRole,
+  DefectCause,
   Entry,
   EntryAuthor,
   EntryContent,
   EntryKind,
   EntrySource,
+  LeftHandbrakes,
   Reading,
   SubjectKind,
+  TieUpCheck,
 } from './turn/entry';
 export type { EntryFinding, EntryFindingCode } from './turn/entry-finding';
 export { evolve, startOfTurn, turnFrom } from './turn/evolve';
-export type { CannotDo, InQuestion, TurnFacts, TurnNote } from './turn/facts';
+export type { AsksAgreement, CannotDo, InQuestion, TurnFacts, TurnNote } from './turn/facts';
 export { formatEntryFinding, sourceWords, stepRemarks } from './turn/finding-words';
 export type { FormatTime } from './turn/finding-words';
 export type { Handbrakes } from './turn/handbrakes';
@@ -113,9 +128,11 @@ export {
   stepStateOf,
 } from './turn/life';
 export type { OpenStep, StepTimes } from './turn/life';
+export type { DefectReport, TieUp } from './turn/remarks';
 export { compareEntries } from './turn/standing-entries';
 export { HEALTHS, STEP_STATES, TURN_KINDS, TURN_STATES } from './turn/turn';
 export type { Health, PlannedTurn, StepState, TurnKind, TurnState } from './turn/turn';
+export { isUndo, undoGraceSeconds, undoSeconds } from './turn/undo';
 
 // forecast
 export { forecastTurn, outlookOf } from './forecast/forecast';
@@ -127,8 +144,18 @@ export type { Activity, ActivityTimes, NetworkRefusal, NetworkSchedule } from '.
 
 // records
 export { canonicalJson } from './records/canonical-json';
-export { noPreviousHash, sealEntry } from './records/seal';
-export type { Seal, SealableEntry } from './records/seal';
+export { HeadFinder, receiptDay } from './records/daily-heads';
+export type { DailyHead, SealedPoint } from './records/daily-heads';
+export { columnsOf } from './records/entry-columns';
+export type { EntryColumns } from './records/entry-columns';
+export { LogCheck, mostFaultsKept } from './records/log-check';
+export type { LogCheckOptions } from './records/log-check';
+export { formatLogLine, readLogLine } from './records/log-line';
+export type { KeptEntry, LineRefusal, LogLine } from './records/log-line';
+export type { ChangedPart, EntryPlace, LogFault, LogHead, LogNote, LogVerdict } from './records/log-verdict';
+export { formatLogFault, formatLogNote } from './records/log-words';
+export { hashEnvelope, noPreviousHash, sealEntry } from './records/seal';
+export type { Envelope, Seal, SealableEntry } from './records/seal';
 
 // lateness
 export { nextAlertStep, noAlertMemory, shippedHoldTimes } from './lateness/alert-life';
@@ -166,7 +193,7 @@ export { LIVE_EVENTS, beatSeconds, liveQuerySchema, notLiveAfterSeconds } from '
 export type { LiveEvent, LiveQuery } from './contract/live';
 
 // contract: plans
-export { createPlanSchema, planStepSchema, stepPlanSchema } from './contract/plans';
+export { createPlanSchema, longestInstruction, planStepSchema, stepPlanSchema } from './contract/plans';
 export type { CreatePlanRequest, WireStepPlan } from './contract/plans';
 
 // contract: primitives
@@ -223,6 +250,23 @@ export {
   wireSecurementOf,
 } from './contract/turn-from-wire';
 
+// contract: entries
+export { actTimeOf, readingSchema, recordEntrySchema, wireEntrySchema } from './contract/entries';
+export type { RecordEntryRequest, WireEntry, WireReading } from './contract/entries';
+
+// contract: corrections
+export {
+  CORRECTION_QUESTIONS,
+  correctionsQuerySchema,
+  listedCorrectionSchema,
+} from './contract/record-corrections';
+export type { CorrectionsQuery, ListedCorrection } from './contract/record-corrections';
+
+// contract: what people still have to settle about a turn
+export { turnCorrectionSchema } from './contract/turn-matters';
+export type { WireCorrection, WireTurnMatters } from './contract/turn-matters';
+export { turnMattersOf } from './contract/wire-turn-matters';
+
 // contract: turns
 export {
   boardAheadMinutes,
@@ -233,10 +277,7 @@ export {
   entryReceiptSchema,
   findQuerySchema,
   foundTurnSchema,
-  readingSchema,
-  recordEntrySchema,
   turnSchema,
-  wireEntrySchema,
 } from './contract/turns';
 export type {
   BoardQuery,
@@ -244,10 +285,7 @@ export type {
   EntryReceipt,
   FindQuery,
   FoundTurn,
-  RecordEntryRequest,
   WireBoard,
-  WireEntry,
-  WireReading,
   WireSecurement,
   WireStep,
   WireTurn,
@@ -270,6 +308,8 @@ export type { ControlsQuestion, WithdrawalReach } from './access/recording';
 
 export { judgePassword } from './access/password';
 export type { PasswordVerdict } from './access/password';
+export { judgePin } from './access/pin';
+export type { PinVerdict } from './access/pin';
 export { passwordAdvised, passwordLongest, passwordShortest } from './access/password-lengths';
 
 // contract: errors
@@ -302,12 +342,19 @@ export type {
 
 // contract: session
 export {
+  badgeSchema,
   changePasswordSchema,
+  changePinSchema,
   emailSchema,
   firstAdministratorSchema,
   linkSchema,
+  ownBadgeSchema,
   ownSessionSchema,
   passwordTextSchema,
+  personHeader,
+  pinLongest,
+  pinSchema,
+  pinShortest,
   roleGrantSchema,
   sessionSchema,
   setupSchema,
@@ -317,7 +364,9 @@ export {
 } from './contract/session';
 export type {
   ChangePasswordRequest,
+  ChangePinRequest,
   FirstAdministratorRequest,
+  OwnBadge,
   OwnSession,
   SessionAnswer,
   SetupAnswer,
@@ -350,6 +399,16 @@ export type {
   WireTerminalSettings,
   WireTrack,
 } from './contract/terminals';
+
+// contract: records
+export {
+  CHAIN_STATES,
+  dailyHeadSchema,
+  logQuerySchema,
+  logStateQuerySchema,
+  logStateSchema,
+} from './contract/records';
+export type { LogQuery, LogStateQuery, WireDailyHead, WireLogState } from './contract/records';
 
 // contract: routes
 export { ROUTES } from './contract/routes';

@@ -15,6 +15,9 @@ import { unknownTerminal } from './terminals.repository';
 /** Name of the setting that holds a terminal's thresholds. */
 export const THRESHOLDS = 'thresholds';
 
+/** What is kept under that name: the thresholds, and beside them what the phone asks for. */
+export type KeptSettings = TerminalThresholds & { briefingRequired: boolean };
+
 interface TerminalTrackRow {
   id: string;
   version: number;
@@ -58,11 +61,13 @@ export class TerminalsReadModel {
   }
 
   async settingsOf(code: string): Promise<WireTerminalSettings> {
-    const kept = await this.settings.find<Partial<TerminalThresholds>>(code, THRESHOLDS);
+    const kept = await this.settings.find<Partial<KeptSettings>>(code, THRESHOLDS);
+    const { briefingRequired = false, ...thresholds } = kept?.value ?? {};
     return {
       terminal: code,
       version: kept?.version ?? 0,
-      thresholds: { ...shippedThresholds, ...kept?.value },
+      thresholds: { ...shippedThresholds, ...thresholds },
+      briefingRequired,
       changedAt: kept === null ? null : formatInstant(kept.changedAt),
       changedBy: kept?.changedBy ?? null,
     };

@@ -11,7 +11,7 @@ import { ChangeLog } from '../database/change-log';
 import { Settings } from '../database/settings';
 import { type Transaction, UnitOfWork } from '../database/unit-of-work';
 import type { TerminalRow } from './terminal.entity';
-import { TerminalsReadModel, THRESHOLDS } from './terminals.read-model';
+import { type KeptSettings, TerminalsReadModel, THRESHOLDS } from './terminals.read-model';
 import { TerminalsRepository } from './terminals.repository';
 
 /** Terminals, their tracks and their thresholds. */
@@ -89,14 +89,17 @@ export class TerminalsService {
   ): Promise<void> {
     await this.unitOfWork.run(async (transaction) => {
       const terminal = await this.terminals.require(transaction, code);
-      const { version } = await this.readModel.settingsOf(code);
+      const { version, briefingRequired: before } = await this.readModel.settingsOf(code);
       if (version !== request.version) {
         throw new Refusal({ code: 'settings.changed', message: 'somebody changed these settings meanwhile' });
       }
       await this.settings.put(transaction, {
         scope: code,
         name: THRESHOLDS,
-        value: request.thresholds,
+        value: {
+          ...request.thresholds,
+          briefingRequired: request.briefingRequired ?? before,
+        } satisfies KeptSettings,
         changedBy: person.name,
       });
       await this.tell(transaction, await this.terminals.bump(transaction, terminal));

@@ -3,6 +3,7 @@ import {
   type EntrySource,
   type Instant,
   type RecordEntryRequest,
+  actTimeOf,
   assertNever,
   formatInstant,
   parseInstant,
@@ -33,18 +34,21 @@ export interface EntryBodyParts {
   request: RecordEntryRequest;
   turn: { id: string; terminalCode: string; serviceDate: CalendarDate };
   by: PersonInBody | null;
+  /** When it came in; a correction that does not say when it was made was made then. */
+  receivedAt: Instant;
   /** The name of the day of each person that the request names. */
   nameOf: (personId: string) => string;
 }
 
 /** Builds the body of an entry. */
-export function entryBodyFrom({ request, turn, by, nameOf }: EntryBodyParts): EntryBody {
+export function entryBodyFrom({ request, turn, by, receivedAt, nameOf }: EntryBodyParts): EntryBody {
+  const madeAt = actTimeOf(request);
   return {
     subject: { kind: 'turn', id: turn.id },
     terminal: turn.terminalCode,
     serviceDate: turn.serviceDate,
     kind: request.kind,
-    observedAt: inOneForm(request.observedAt),
+    observedAt: madeAt === undefined ? formatInstant(receivedAt) : inOneForm(madeAt),
     source: request.source,
     by,
     ...given('saidBy', request.saidBy),
@@ -76,7 +80,7 @@ function contentOf(
         reason: request.reason,
         ...given(
           'correctedObservedAt',
-          request.correctedObservedAt && inOneForm(request.correctedObservedAt),
+          request.observedAt === undefined ? undefined : inOneForm(request.observedAt),
         ),
         ...given('reading', request.reading),
       };
@@ -101,6 +105,23 @@ function contentOf(
       return { reason: request.reason };
     case 'note':
       return { note: request.note };
+    case 'agreed':
+    case 'correction-approved':
+      return { target: request.target };
+    case 'disagreed':
+    case 'correction-declined':
+      return { target: request.target, reason: request.reason };
+    case 'ruled':
+      return { target: request.target, considered: request.considered };
+    case 'defect':
+      return { car: request.car, cause: request.cause, ...given('note', request.note) };
+    case 'tied-up':
+      return {
+        handbrakes: request.handbrakes,
+        checks: request.checks,
+        ...given('offAir', request.offAir),
+        ...given('reason', request.reason),
+      };
     default:
       return assertNever(request);
   }

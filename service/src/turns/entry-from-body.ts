@@ -58,6 +58,29 @@ function contentFrom(body: EntryBody): EntryContent {
       return { kind, reason: field('reason') };
     case 'note':
       return { kind, note: field('note') };
+    case 'agreed':
+    case 'correction-approved':
+      return { kind, target: field('target') };
+    case 'disagreed':
+    case 'correction-declined':
+      return { kind, target: field('target'), reason: field('reason') };
+    case 'ruled':
+      return { kind, target: field('target'), considered: field('considered') };
+    case 'defect':
+      return {
+        kind,
+        car: field('car'),
+        cause: field('cause'),
+        ...given('note', field<string | undefined>('note')),
+      };
+    case 'tied-up':
+      return {
+        kind,
+        handbrakes: field('handbrakes'),
+        checks: field('checks'),
+        ...given('offAir', field<boolean | undefined>('offAir')),
+        ...given('reason', field<string | undefined>('reason')),
+      };
     default:
       return assertNever(kind);
   }

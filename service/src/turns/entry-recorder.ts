@@ -60,17 +60,23 @@ export class EntryRecorder {
     if (record === null) throw unknownTurn();
     this.rights.requireKind(actor, request.kind, record.terminalCode);
     const file = await this.files.open(transaction, record);
-    const body = await this.bodyOf(command, record);
     const known = await this.log.findById(transaction, request.id);
+    const receivedAt = known?.receivedAt ?? now;
+    const body = await this.bodyOf(command, record, receivedAt);
     if (known !== null) return this.again(known, body, file);
-    await this.rights.require(transaction, { actor, request, file, now });
+    const entry = entryFrom({ id: request.id, receivedAt, body });
+    await this.rights.require(transaction, { actor, request, entry, file, now });
     await this.requireKnownStep(request, file);
     const seal = await this.append(transaction, { id: request.id, body, now, record });
     const after = await this.follow(transaction, file, { id: request.id, receivedAt: now, body });
     return { isNew: true, ...seal, file: after };
   }
 
-  private async bodyOf({ request, actor }: RecordCommand, turn: TurnRecord): Promise<EntryBody> {
+  private async bodyOf(
+    { request, actor }: RecordCommand,
+    turn: TurnRecord,
+    receivedAt: Instant,
+  ): Promise<EntryBody> {
     const names = new Map<string, string>();
     for (const id of peopleNamedIn(request)) {
       const name = id === actor.id ? actor.name : await this.people.nameOf(id);
@@ -84,7 +90,7 @@ export class EntryRecorder {
       names.set(id, name);
     }
     const by = { id: actor.id, name: actor.name };
-    return entryBodyFrom({ request, turn, by, nameOf: (id) => names.get(id) ?? '' });
+    return entryBodyFrom({ request, turn, by, receivedAt, nameOf: (id) => names.get(id) ?? '' });
   }
 
   /** The same id twice is one entry and one receipt; with another body it is somebody's mistake. */
@@ -185,6 +191,8 @@ function copiesOf({ record, facts, entries }: TurnFile): TurnRecord {
     set: facts.set,
     annulledAt: facts.annulled?.at ?? null,
     entryCount: entries.length,
+    correctionCount: facts.corrections.length,
+    waitingCount: facts.corrections.filter((each) => each.state === 'waiting').length,
     crew: crewOf(facts.crew),
     withdrawnAt: null,
   };

@@ -121,6 +121,8 @@ function extraTurnOf(
     set: request.set ?? null,
     annulledAt: null,
     entryCount: 0,
+    correctionCount: 0,
+    waitingCount: 0,
     crew: [],
     carriedCrew: [],
     ...times,

@@ -1,6 +1,7 @@
 import { Injectable } from '@nestjs/common';
 import {
   type ControlsQuestion,
+  type Entry,
   type Instant,
   type PersonAccess,
   type RecordEntryRequest,
@@ -8,6 +9,7 @@ import {
   barredAtTheControls,
   mayRecord,
   withdrawalReach,
+  wouldNeedApproval,
 } from '@stubpost/shared';
 import { Refusal } from '../common/refusal';
 import type { Transaction } from '../database/unit-of-work';
@@ -23,6 +25,8 @@ export interface Actor extends PersonAccess {
 export interface RecordingQuestion {
   actor: Actor;
   request: RecordEntryRequest;
+  /** The request as an entry. */
+  entry: Entry;
   file: TurnFile;
   now: Instant;
 }
@@ -49,28 +53,36 @@ export class RecordingRights {
   /** Everything that depends on the turn itself. */
   async require(transaction: Transaction, question: RecordingQuestion): Promise<void> {
     this.requireReach(question);
+    this.requireAnotherPerson(question);
     await this.requireOffTheControls(transaction, question);
   }
 
-  /** A crew takes back and corrects its own entries, and only before the departure; the desk anybody's. */
-  private requireReach({ actor, request, file }: RecordingQuestion): void {
-    if (request.kind !== 'withdrawn' && request.kind !== 'corrected') return;
+  /**
+   * A crew takes back and corrects its own entries, the desk anybody's. Once the train has left, anybody of the crew
+   * may ask for a correction of any entry: it waits for a supervisor.
+   */
+  private requireReach({ actor, entry, file }: RecordingQuestion): void {
+    if (entry.kind !== 'withdrawn' && entry.kind !== 'corrected') return;
     if (withdrawalReach(actor, file.record.terminalCode) === 'anyone') return;
-    const target = file.entries.find((entry) => entry.id === request.target);
-    if (target !== undefined && target.by?.personId !== actor.id) {
-      throw new Refusal({ code: 'entry.not_yours', message: 'that entry was made by somebody else' });
-    }
-    const { departureAt } = file.facts;
-    if (departureAt === null || Date.parse(request.observedAt) < departureAt) return;
+    const target = file.entries.find((each) => each.id === entry.target);
+    if (target === undefined || target.by?.personId === actor.id) return;
+    if (wouldNeedApproval(file.entries, entry)) return;
+    throw new Refusal({ code: 'entry.not_yours', message: 'that entry was made by somebody else' });
+  }
+
+  /** Nobody decides on what they asked for themselves. */
+  private requireAnotherPerson({ actor, entry, file }: RecordingQuestion): void {
+    if (entry.kind !== 'correction-approved' && entry.kind !== 'correction-declined') return;
+    const request = file.entries.find((each) => each.id === entry.target);
+    if (request?.by?.personId !== actor.id) return;
     throw new Refusal({
-      code: 'entry.after_departure',
-      message: 'the train has left: a supervisor corrects the record',
-      facts: { departureAt: new Date(departureAt).toISOString() },
+      code: 'entry.own_request',
+      message: 'you asked for this correction yourself: somebody else must decide on it',
     });
   }
 
   private async requireOffTheControls(transaction: Transaction, question: RecordingQuestion): Promise<void> {
-    const { actor, request, file, now } = question;
+    const { actor, request, entry, file, now } = question;
     const isEngineerOfTurn = file.facts.crew.some(
       (member) => member.as === 'engineer' && member.personId === actor.id,
     );
@@ -79,7 +91,7 @@ export class RecordingRights {
       isEngineerOfTurn,
       step: 'step' in request ? request.step : undefined,
       source: request.source,
-      observedAt: Date.parse(request.observedAt),
+      observedAt: entry.observedAt,
       receivedAt: now,
       atControls: await this.timeAtControls(transaction, file, actor),
     });

@@ -185,6 +185,8 @@ function newTurn(
     set: planned.plannedSet,
     annulledAt: null,
     entryCount: 0,
+    correctionCount: 0,
+    waitingCount: 0,
     crew: [],
     carriedCrew: [],
     ...times,

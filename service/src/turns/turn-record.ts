@@ -31,6 +31,8 @@ export interface TurnRecord {
   departureAt: Instant | null;
   annulledAt: Instant | null;
   entryCount: number;
+  correctionCount: number;
+  waitingCount: number;
   crew: CrewMemberOfTurn[];
   carriedCrew: CrewMemberOfTurn[];
   spanFrom: Instant;
@@ -70,6 +72,8 @@ export const turnColumns = [
   ['departureAt', 'departure_at'],
   ['annulledAt', 'annulled_at'],
   ['entryCount', 'entry_count'],
+  ['correctionCount', 'correction_count'],
+  ['waitingCount', 'waiting_count'],
   ['crew', 'crew'],
   ['carriedCrew', 'carried_crew'],
   ['spanFrom', 'span_from'],
@@ -114,6 +118,8 @@ export function turnRecordOf(raw: RawTurn): TurnRecord {
     departureAt: instant(raw['departure_at']),
     annulledAt: instant(raw['annulled_at']),
     entryCount: Number(raw['entry_count']),
+    correctionCount: Number(raw['correction_count']),
+    waitingCount: Number(raw['waiting_count']),
     crew: crewOf(raw['crew']),
     carriedCrew: crewOf(raw['carried_crew']),
     spanFrom: Number(raw['span_from']),

@@ -19,6 +19,7 @@ export interface CrewMemberOfTurn {
 @Index('turn_span', ['terminalCode', 'spanTo'])
 @Index('turn_unsettled', ['spanFrom'], { where: '"settled_at" IS NULL' })
 @Index('turn_set', ['set', 'spanFrom'])
+@Index('turn_corrections', ['terminalCode', 'waitingCount'], { where: '"correction_count" > 0' })
 @Index('turn_pair', ['terminalCode', 'serviceDate', 'pairKey'], {
   unique: true,
   where: '"pair_key" IS NOT NULL',
@@ -102,6 +103,13 @@ export class TurnRow {
 
   @Column({ name: 'entry_count', type: 'integer' })
   entryCount: number;
+
+  /** Changes of the record that need an approval, and those of them that wait. */
+  @Column({ name: 'correction_count', type: 'integer', default: 0 })
+  correctionCount: number;
+
+  @Column({ name: 'waiting_count', type: 'integer', default: 0 })
+  waitingCount: number;
 
   @Column(jsonColumn('crew'))
   crew: CrewMemberOfTurn[];

@@ -12,6 +12,7 @@ import {
   formatInstant,
   shortByDesignSeconds,
   stepRemarks,
+  turnMattersOf,
   wireSecurementOf,
 } from '@stubpost/shared';
 import { wireAlertOf } from '../alerts/alert-record';
@@ -69,6 +70,7 @@ export function wireTurnOf(file: TurnFile, moment: TurnMoment, rules: LatenessSe
     lastHeardAt: wireInstant(facts.lastHeardAt),
     findings: facts.findings.map((finding) => formatEntryFinding(finding, facts.steps, clock)),
     noteCount: facts.notes.length,
+    ...turnMattersOf(facts),
     computedAt: formatInstant(now),
   };
 }

@@ -16,6 +16,8 @@ const followingColumns = [
   'departureAt',
   'annulledAt',
   'entryCount',
+  'correctionCount',
+  'waitingCount',
   'crew',
   'carriedCrew',
   'spanFrom',

@@ -7,6 +7,8 @@ import { RecordsModule } from '../records/records.module';
 import { SetsModule } from '../sets/sets.module';
 import { TerminalsModule } from '../terminals/terminals.module';
 import { BoardController } from './board.controller';
+import { CorrectionsController } from './corrections.controller';
+import { CorrectionsReadModel } from './corrections.read-model';
 import { CrewCarrier } from './crew-carrier';
 import { EntryRecorder } from './entry-recorder';
 import { ExtraTurns } from './extra-turns.service';
@@ -37,8 +39,9 @@ import { TurnsService } from './turns.service';
     TerminalsModule,
     TurnStoreModule,
   ],
-  controllers: [BoardController, TurnsController],
+  controllers: [BoardController, CorrectionsController, TurnsController],
   providers: [
+    CorrectionsReadModel,
     CrewCarrier,
     EntryRecorder,
     ExtraTurns,

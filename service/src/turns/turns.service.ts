@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import { type WireEntry, formatInstant } from '@stubpost/shared';
+import type { WireEntry } from '@stubpost/shared';
 import { Access } from '../common/access';
 import type { CurrentPersonFacts } from '../common/signed-in';
 import { type Transaction, UnitOfWork } from '../database/unit-of-work';
@@ -8,6 +8,7 @@ import { EntryRecorder, type RecordCommand, type Recorded, unknownTurn } from '.
 import { TurnChanges } from './turn-changes';
 import type { TurnFile } from './turn-file';
 import { TurnFiles } from './turn-files';
+import { wireEntryOf } from './wire-entry';
 
 /** Turns: recording what happens, and reading single ones. */
 @Injectable()
@@ -34,10 +35,7 @@ export class TurnsService {
     const { record } = await this.require(id, person);
     this.access.require(person, 'entries.read', record.terminalCode);
     const logged = (await this.log.findAbout([id])).get(id) ?? [];
-    return logged.map(
-      ({ sequence, hash, id: entryId, receivedAt, body }) =>
-        ({ sequence, hash, id: entryId, receivedAt: formatInstant(receivedAt), ...body }) as WireEntry,
-    );
+    return logged.map(wireEntryOf);
   }
 
   /** Records one entry in a transaction of its own. */

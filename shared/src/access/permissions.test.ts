@@ -17,6 +17,7 @@ describe('the policy', () => {
     ['turns.create', ['dispatcher']],
     ['alerts.act', ['dispatcher', 'supervisor']],
     ['crew.read', ['conductor', 'engineer', 'dispatcher', 'supervisor']],
+    ['records.read', ['supervisor', 'auditor', 'administrator']],
     ['history.import', ['analyst', 'administrator']],
     ['sets.edit', ['dispatcher', 'inspector', 'administrator']],
   ])('%s is for %j and nobody else', (permission, roles) => {

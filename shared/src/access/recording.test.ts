@@ -12,7 +12,7 @@ import { ROLES, type Role } from './roles';
 const person = (role: Role, terminal = 'HBR') => ({ id: 'p', roles: [{ role, terminal }] });
 
 describe('which entries a role may record', () => {
-  const crew = [
+  const train = [
     'arrival',
     'departure',
     'step-done',
@@ -23,13 +23,16 @@ describe('which entries a role may record', () => {
     'relief',
     'briefing',
     'note',
+    'defect',
+    'tied-up',
   ];
+  const crew = [...train, 'agreed', 'disagreed'];
   test.each<[Role, string[]]>([
     ['conductor', crew],
     ['engineer', crew],
-    ['dispatcher', [...crew, 'expected-arrival', 'track', 'set', 'hold', 'annulled']],
-    ['supervisor', ['note', 'corrected', 'withdrawn']],
-    ['inspector', ['blue-signal-up', 'blue-signal-down', 'note']],
+    ['dispatcher', [...train, 'expected-arrival', 'track', 'set', 'hold', 'annulled', 'ruled']],
+    ['supervisor', ['note', 'corrected', 'withdrawn', 'ruled', 'correction-approved', 'correction-declined']],
+    ['inspector', ['blue-signal-up', 'blue-signal-down', 'note', 'defect']],
     ['planner', []],
     ['analyst', []],
     ['auditor', []],

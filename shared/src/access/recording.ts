@@ -2,7 +2,8 @@ import type { Instant } from '../lib/instant';
 import type { EntryKind, EntrySource } from '../turn/entry';
 import { rolesAt, type PersonAccess, type Role } from './roles';
 
-const crewKinds = [
+/** What happens at the train, which a crew records and the desk writes down as it hears it. */
+const trainKinds = [
   'arrival',
   'departure',
   'step-done',
@@ -13,21 +14,25 @@ const crewKinds = [
   'relief',
   'briefing',
   'note',
+  'defect',
+  'tied-up',
 ] as const satisfies readonly EntryKind[];
 
-const deskKinds = [...crewKinds, 'expected-arrival', 'track', 'set', 'hold', 'annulled'] as const;
+const crewKinds = [...trainKinds, 'agreed', 'disagreed'] as const;
+const deskKinds = [...trainKinds, 'expected-arrival', 'track', 'set', 'hold', 'annulled', 'ruled'] as const;
 
 /**
  * Which kinds of entry each role may record (our choice, after the product's list of roles). The desk may write
- * all that a crew may, plus its own orders. Only mechanical inspectors put blue signals up or take them down.
+ * all that happens at the train, plus its own orders and rulings; only the crew agrees to what the desk wrote, and
+ * only a supervisor decides on corrections. Only mechanical inspectors put blue signals up or take them down.
  * The administrator of the system records nothing about operations.
  */
 const kindsOfRole: Record<Role, readonly EntryKind[]> = {
   conductor: crewKinds,
   engineer: crewKinds,
   dispatcher: deskKinds,
-  supervisor: ['note', 'corrected', 'withdrawn'],
-  inspector: ['blue-signal-up', 'blue-signal-down', 'note'],
+  supervisor: ['note', 'corrected', 'withdrawn', 'ruled', 'correction-approved', 'correction-declined'],
+  inspector: ['blue-signal-up', 'blue-signal-down', 'note', 'defect'],
   planner: [],
   analyst: [],
   auditor: [],

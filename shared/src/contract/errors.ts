@@ -18,6 +18,7 @@ const requestErrors = {
 const sessionErrors = {
   'session.missing': 401,
   'session.wrong_credentials': 401,
+  'session.other_person': 401,
   'session.cross_site': 403,
   'session.unknown': 404,
   'session.too_many_tries': 429,
@@ -28,10 +29,13 @@ const sessionErrors = {
   'password.too_short': 400,
   'password.too_long': 400,
   'password.common': 400,
+  'pin.too_simple': 400,
+  'pin.no_badge': 409,
 } as const;
 
 const peopleErrors = {
   'people.exists': 409,
+  'people.badge_taken': 409,
   'people.unknown': 404,
   'people.last_administrator': 409,
   'people.terminal_unknown': 400,
@@ -56,7 +60,7 @@ const turnErrors = {
   'entry.kind_not_permitted': 403,
   'entry.at_the_controls': 403,
   'entry.not_yours': 403,
-  'entry.after_departure': 403,
+  'entry.own_request': 403,
   'entry.target_unknown': 400,
   'entry.step_unknown': 400,
   'entry.person_unknown': 400,

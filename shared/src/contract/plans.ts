@@ -2,6 +2,9 @@ import { z } from 'zod';
 import { ANCHORS, DOERS, PLACES, READINGS, STEP_KINDS } from '../plan/step-plan';
 import { dateSchema, textSchema } from './primitives';
 
+/** Characters of an instruction at most. */
+export const longestInstruction = 2000;
+
 /** One step of a plan on the wire; the same shape as in the core. */
 export const planStepSchema = z.strictObject({
   key: z.string().regex(/^[a-z][a-z0-9-]{0,39}$/, 'a key is small letters, digits and dashes'),
@@ -20,6 +23,10 @@ export const planStepSchema = z.strictObject({
   toleranceSeconds: z.number().int().min(0).max(3600),
   holdsDeparture: z.boolean(),
   reads: z.array(z.enum(READINGS)),
+  /** The railroad's own words on how the step is done. Plain text; absent when there are none. */
+  instruction: textSchema(longestInstruction).optional(),
+  /** Whether it is recorded from the controlling cab; where absent, `place` says so. */
+  inCab: z.boolean().optional(),
 });
 
 /** A step plan version on the wire. */

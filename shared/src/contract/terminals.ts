@@ -91,6 +91,8 @@ export const terminalSettingsSchema = z.object({
   terminal: z.string(),
   version: z.number().int(),
   thresholds: terminalThresholdsSchema,
+  /** Whether the phone asks for the safety briefing before what is recorded from the controlling cab. */
+  briefingRequired: z.boolean(),
   changedAt: z.string().nullable(),
   changedBy: z.string().nullable(),
 });
@@ -100,6 +102,8 @@ export type WireTerminalSettings = z.infer<typeof terminalSettingsSchema>;
 export const updateTerminalSettingsSchema = z.strictObject({
   version: z.number().int(),
   thresholds: terminalThresholdsSchema,
+  /** Left as it is where absent. */
+  briefingRequired: z.boolean().optional(),
 });
 export type UpdateTerminalSettingsRequest = z.infer<typeof updateTerminalSettingsSchema>;
 

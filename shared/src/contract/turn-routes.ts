@@ -4,6 +4,8 @@ import { liveQuerySchema } from './live';
 import { createPlanSchema, stepPlanSchema } from './plans';
 import type { RouteSpec } from './route';
 import { putSetSchema, setSchema } from './sets';
+import { recordEntrySchema, wireEntrySchema } from './entries';
+import { correctionsQuerySchema, listedCorrectionSchema } from './record-corrections';
 import {
   boardQuerySchema,
   boardSchema,
@@ -11,9 +13,7 @@ import {
   entryReceiptSchema,
   findQuerySchema,
   foundTurnSchema,
-  recordEntrySchema,
   turnSchema,
-  wireEntrySchema,
 } from './turns';
 
 const boardRoutes: RouteSpec[] = [
@@ -97,6 +97,21 @@ const turnRoutes: RouteSpec[] = [
     response: entryReceiptSchema,
     status: 201,
     refusals: [404, 409],
+  },
+];
+
+const correctionRoutes: RouteSpec[] = [
+  {
+    method: 'GET',
+    path: '/api/records/corrections',
+    permission: 'corrections.read',
+    terminal: 'query',
+    area: 'Records',
+    summary:
+      'Corrections and withdrawals asked for after a departure, the latest first; those that wait, or all',
+    query: correctionsQuerySchema,
+    response: z.array(listedCorrectionSchema),
+    refusals: [404],
   },
 ];
 
@@ -205,6 +220,7 @@ const alertRoutes: RouteSpec[] = [
 export const turnAreaRoutes: readonly RouteSpec[] = [
   ...boardRoutes,
   ...turnRoutes,
+  ...correctionRoutes,
   ...planRoutes,
   ...setRoutes,
   ...alertRoutes,

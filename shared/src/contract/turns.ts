@@ -3,19 +3,9 @@ import { ANCHORS, DOERS, PLACES, STEP_KINDS } from '../plan/step-plan';
 import { CREW_ROLES, ENTRY_SOURCES } from '../turn/entry';
 import { HEALTHS, STEP_STATES, TURN_KINDS, TURN_STATES } from '../turn/turn';
 import { alertSchema } from './alerts';
-import { dateSchema, idSchema, instantSchema, terminalCodeSchema, textSchema } from './primitives';
-
-const personRefSchema = z.object({ id: z.string(), name: z.string() });
-
-/** What was read off or counted with a step. */
-export const readingSchema = z.strictObject({
-  count: z.number().int().min(0).max(200).optional(),
-  cars: z.array(textSchema(20)).max(200).optional(),
-  brakePipePsi: z.number().min(0).max(200).optional(),
-  p0: z.number().min(0).max(200).optional(),
-  p1: z.number().min(0).max(200).optional(),
-  seconds: z.number().min(0).max(3600).optional(),
-});
+import { readingSchema } from './entries';
+import { dateSchema, instantSchema, terminalCodeSchema, textSchema } from './primitives';
+import { turnMattersFields } from './turn-matters';
 
 const stepSchema = z.object({
   key: z.string(),
@@ -108,13 +98,13 @@ export const turnSchema = z.object({
   /** What is wrong with entries, in words: out of order, smaller count than set, two times for one step. */
   findings: z.array(z.string()),
   noteCount: z.number().int(),
+  ...turnMattersFields,
   /** Instant at which forecast, health and step states were computed. */
   computedAt: z.string(),
 });
 export type WireTurn = z.infer<typeof turnSchema>;
 export type WireStep = z.infer<typeof stepSchema>;
 export type WireSecurement = NonNullable<WireTurn['securement']>;
-export type WireReading = z.infer<typeof readingSchema>;
 
 /** Answer of the board route. */
 export const boardSchema = z.object({ now: z.string(), terminal: z.string(), turns: z.array(turnSchema) });
@@ -138,62 +128,6 @@ export const createTurnSchema = z
   });
 export type CreateTurnRequest = z.infer<typeof createTurnSchema>;
 
-const entryBase = {
-  id: idSchema,
-  observedAt: instantSchema,
-  source: z.enum(ENTRY_SOURCES),
-  saidBy: textSchema(80).optional(),
-  clockOffsetMilliseconds: z.number().int().optional(),
-};
-const reason = textSchema(300);
-const stepKey = textSchema(60);
-
-/** One entry as a device sends it. Person fields are ids; the service adds the names of the day. */
-export const recordEntrySchema = z.discriminatedUnion('kind', [
-  z.strictObject({ ...entryBase, kind: z.literal('arrival') }),
-  z.strictObject({ ...entryBase, kind: z.literal('departure') }),
-  z.strictObject({ ...entryBase, kind: z.literal('expected-arrival'), expectedAt: instantSchema }),
-  z.strictObject({
-    ...entryBase,
-    kind: z.literal('step-done'),
-    step: stepKey,
-    reading: readingSchema.optional(),
-  }),
-  z.strictObject({ ...entryBase, kind: z.literal('withdrawn'), target: idSchema, reason }),
-  z.strictObject({
-    ...entryBase,
-    kind: z.literal('corrected'),
-    target: idSchema,
-    correctedObservedAt: instantSchema.optional(),
-    reading: readingSchema.optional(),
-    reason,
-  }),
-  z.strictObject({ ...entryBase, kind: z.literal('cannot-do'), step: stepKey, reason }),
-  z.strictObject({
-    ...entryBase,
-    kind: z.literal('crew'),
-    person: z.string().min(1),
-    as: z.enum(CREW_ROLES),
-  }),
-  z.strictObject({
-    ...entryBase,
-    kind: z.literal('relief'),
-    out: z.string().min(1),
-    in: z.string().min(1).nullable().optional(),
-    as: z.enum(CREW_ROLES),
-    faceToFace: z.boolean(),
-  }),
-  z.strictObject({ ...entryBase, kind: z.literal('briefing') }),
-  z.strictObject({ ...entryBase, kind: z.literal('track'), track: textSchema(12) }),
-  z.strictObject({ ...entryBase, kind: z.literal('set'), set: textSchema(20) }),
-  z.strictObject({ ...entryBase, kind: z.literal('hold'), until: instantSchema, reason }),
-  z.strictObject({ ...entryBase, kind: z.literal('annulled'), reason }),
-  z.strictObject({ ...entryBase, kind: z.literal('blue-signal-up') }),
-  z.strictObject({ ...entryBase, kind: z.literal('blue-signal-down') }),
-  z.strictObject({ ...entryBase, kind: z.literal('note'), note: textSchema(1000) }),
-]);
-export type RecordEntryRequest = z.infer<typeof recordEntrySchema>;
-
 /** Answer to a recorded entry: its place in the sealed log and the turn as it now stands. */
 export const entryReceiptSchema = z.object({
   sequence: z.number().int(),
@@ -201,25 +135,6 @@ export const entryReceiptSchema = z.object({
   turn: turnSchema,
 });
 export type EntryReceipt = z.infer<typeof entryReceiptSchema>;
-
-/** One entry of a turn's log as the service gives it: the request's fields with names, receipt and seal. */
-export const wireEntrySchema = z.looseObject({
-  sequence: z.number().int(),
-  hash: z.string(),
-  id: z.string(),
-  kind: z.string(),
-  observedAt: z.string(),
-  receivedAt: z.string(),
-  source: z.enum(ENTRY_SOURCES),
-  by: personRefSchema.nullable(),
-  saidBy: z.string().optional(),
-  step: z.string().optional(),
-  reading: readingSchema.optional(),
-  target: z.string().optional(),
-  reason: z.string().optional(),
-  note: z.string().optional(),
-});
-export type WireEntry = z.infer<typeof wireEntrySchema>;
 
 /** Found turns, best first. */
 export const foundTurnSchema = z.object({

@@ -46,6 +46,20 @@ export interface PlanStep {
   /** Whether the train waits for this step. A step after departure never holds it. */
   holdsDeparture: boolean;
   reads: ReadingKey[];
+  /** The railroad's own words on how the step is done: plain text. Absent when it has none. */
+  instruction?: string | undefined;
+  /** Whether the step is recorded from the controlling cab. Absent: as `place` says. */
+  inCab?: boolean | undefined;
+}
+
+/**
+ * Whether a step is recorded from the controlling cab, so that the safety briefing comes first where the railroad
+ * asks for it. A conductor's act in a cab that is not the controlling one is marked `inCab: false`.
+ * Source: 49 CFR 220.305 to 220.309 (a briefing before a device is used in the controlling cab); text of the current
+ * edition not confirmed by the railroad.
+ */
+export function isInCab(step: Pick<PlanStep, 'inCab' | 'place'>): boolean {
+  return step.inCab ?? step.place === 'cab';
 }
 
 /** A versioned template of steps; a turn keeps the version that was in force on its service day. */

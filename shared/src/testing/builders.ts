@@ -93,6 +93,17 @@ const contents: { [Kind in EntryKind]: ContentOf<Kind> } = {
   'blue-signal-up': { kind: 'blue-signal-up' },
   'blue-signal-down': { kind: 'blue-signal-down' },
   note: { kind: 'note', note: 'door 2 locked' },
+  agreed: { kind: 'agreed', target: 'entry-1' },
+  disagreed: { kind: 'disagreed', target: 'entry-1', reason: 'not tested' },
+  ruled: { kind: 'ruled', target: 'entry-1', considered: [] },
+  'correction-approved': { kind: 'correction-approved', target: 'entry-1' },
+  'correction-declined': {
+    kind: 'correction-declined',
+    target: 'entry-1',
+    reason: 'the log of the yard agrees',
+  },
+  defect: { kind: 'defect', car: '1412', cause: 'door' },
+  'tied-up': { kind: 'tied-up', handbrakes: { count: 2, cars: [] }, checks: ['lights', 'doors'] },
 };
 
 let made = 0;

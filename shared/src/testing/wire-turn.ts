@@ -1,5 +1,6 @@
 import { wireSecurementOf } from '../contract/turn-from-wire';
 import type { WireStep, WireTurn } from '../contract/turns';
+import { turnMattersOf } from '../contract/wire-turn-matters';
 import { forecastTurn, type StepForecast } from '../forecast/forecast';
 import { forecastInputOf } from '../forecast/forecast-input';
 import { assessedTurnOf } from '../lateness/assessed-turn';
@@ -58,6 +59,7 @@ export function aWireTurn(facts: TurnFacts, now: Instant, overrides: Partial<Wir
     lastHeardAt: iso(facts.lastHeardAt),
     findings: facts.findings.map((finding) => formatEntryFinding(finding, facts.steps, clock)),
     noteCount: facts.notes.length,
+    ...turnMattersOf(facts),
     computedAt: formatInstant(now),
     ...overrides,
   };

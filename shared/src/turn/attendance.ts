@@ -26,7 +26,7 @@ interface Change {
 
 /**
  * Whether a standing train is unattended and unsecured at `now`. Unattended begins when the ends are changed (the
- * arriving cab is empty), when the crew or its engineer is relieved and nobody takes over, or 600 s after the
+ * arriving cab is empty), when the crew or its engineer is relieved and nobody takes over, when the set is tied up, or 600 s after the
  * arrival when the handbrake is outstanding and there has been no entry since the arrival. It ends with the
  * engineer in the leaving cab, with a relief taken over, and with the departure. Unsecured is unattended while no
  * handbrake stands set, by count. A turn whose plan has no securement after the arrival is not judged.
@@ -36,7 +36,12 @@ export function attendanceAt(facts: TurnFacts, now: Instant): Attendance {
   if (arrivalAt === null || arrivalAt > now) return attended;
   if (departureAt !== null && departureAt <= now) return attended;
   if (rolesOf(facts.steps).secure.length === 0) return attended;
-  const changes = [...cabChanges(facts), ...reliefChanges(facts), ...silence(facts, arrivalAt)];
+  const changes = [
+    ...cabChanges(facts),
+    ...reliefChanges(facts),
+    ...tieUpChanges(facts),
+    ...silence(facts, arrivalAt),
+  ];
   let unattendedSince: Instant | null = null;
   for (const change of changes.sort(mannedLast)) {
     if (change.at > now) break;
@@ -74,6 +79,10 @@ function reliefChanges(facts: TurnFacts): Change[] {
   return facts.reliefs
     .filter((relief) => relief.takenOver || relief.as === 'engineer' || !relief.crewLeft)
     .map((relief) => ({ at: relief.at, manned: relief.takenOver }));
+}
+
+function tieUpChanges({ tiedUp }: TurnFacts): Change[] {
+  return tiedUp === null ? [] : [{ at: tiedUp.at, manned: false }];
 }
 
 function silence(facts: TurnFacts, arrivalAt: Instant): Change[] {

@@ -1,6 +1,8 @@
 import type { Instant } from '../lib/instant';
+import type { Answer } from './answers';
+import { CREW_ROLES, type CrewRole, type Entry, type EntryAuthor } from './entry';
+import { reliefTypeOf } from './reliefs';
 import { compareEntries, ofKind, type EntryOf } from './standing-entries';
-import { CREW_ROLES, type CrewRole, type Entry } from './entry';
 
 /** Who is on a turn for one job. */
 export interface CrewOnTurn {
@@ -17,9 +19,18 @@ export interface CrewOnTurn {
 export interface ReliefFact {
   at: Instant;
   as: CrewRole;
+  /** The entry that says so. */
+  entryId: string;
+  /** Who went; null where a crew entry ended a relief that stood open. */
+  out: EntryAuthor | null;
+  /** Who came; null when nobody took over. */
+  in: EntryAuthor | null;
   /** Whether somebody took over. */
   takenOver: boolean;
+  /** Whether it was face to face by the word of both, or of somebody who is neither. */
   faceToFace: boolean;
+  /** Id of the person whose word that it was face to face is missing; null when none is. */
+  awaits: string | null;
   /** Whether any crew was left on the turn afterwards. */
   crewLeft: boolean;
 }
@@ -36,8 +47,13 @@ type CrewEntry = EntryOf<'crew'> | EntryOf<'relief'>;
  * Follows crew entries and reliefs in observed order; the latest counts for each job, of two at the same time the one
  * with the smaller id. A relief with nobody coming in leaves the job empty; the next crew entry for it takes over.
  */
-export function followCrew(entries: readonly Entry[], carriedOver: readonly CrewOnTurn[]): CrewFacts {
-  const changes: CrewEntry[] = [...ofKind(entries, 'crew'), ...ofKind(entries, 'relief')].sort(latestLast);
+export function followCrew(
+  entries: readonly Entry[],
+  carriedOver: readonly CrewOnTurn[],
+  answers: readonly Answer[],
+): CrewFacts {
+  const written = ofKind(entries, 'relief');
+  const changes: CrewEntry[] = [...ofKind(entries, 'crew'), ...written].sort(latestLast);
   const onTurn = new Map<CrewRole, CrewOnTurn>(carriedOver.map((member) => [member.as, member]));
   const open = new Set<CrewRole>();
   const reliefs: ReliefFact[] = [];
@@ -47,11 +63,18 @@ export function followCrew(entries: readonly Entry[], carriedOver: readonly Crew
     else onTurn.set(change.as, memberOf(change, person));
     const endsOpenRelief = change.kind === 'crew' && open.has(change.as);
     if (change.kind === 'relief' || endsOpenRelief) {
+      const type =
+        change.kind === 'relief'
+          ? reliefTypeOf(change, written, answers)
+          : { faceToFace: false, awaits: null };
       reliefs.push({
         at: change.observedAt,
         as: change.as,
+        entryId: change.id,
+        out: change.kind === 'relief' ? change.out : null,
+        in: person,
         takenOver: person !== null,
-        faceToFace: change.kind === 'relief' && change.faceToFace,
+        ...type,
         crewLeft: onTurn.size > 0,
       });
     }

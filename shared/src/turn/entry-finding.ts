@@ -1,5 +1,9 @@
 import type { Instant } from '../lib/instant';
 import type { Account } from './account';
+import type { Answer } from './answers';
+import type { RecordCorrection } from './corrections';
+import type { ReliefFact } from './crew';
+import type { TieUp } from './remarks';
 
 /**
  * What is wrong with an entry, or missing beside it. Nothing is refused for it; it is told at once, in words
@@ -8,6 +12,8 @@ import type { Account } from './account';
 export type EntryFinding =
   /** Two accounts of one thing more than 60 s apart; the one that counts comes first. */
   | { code: 'entry.two_times'; step: string; accounts: Account[] }
+  /** A person does not agree with an account, and nobody has ruled on it. */
+  | { code: 'entry.objection'; step: string; account: Account; objection: Answer }
   /** Recorded without the step it must follow, or earlier than that step (`beforeAt`). */
   | { code: 'entry.out_of_order'; step: string; at: Instant; before: string; beforeAt: Instant | null }
   /** Earlier than its not-before time. */
@@ -28,9 +34,15 @@ export type EntryFinding =
   | { code: 'entry.no_handbrake'; step: string }
   /** Manned, tested or left while a blue signal was up. */
   | { code: 'entry.blue_signal_up'; step: string; at: Instant; by: string }
+  /** An operator took charge, and not face to face by the word of both: a brake test is called for. */
+  | { code: 'entry.not_face_to_face'; relief: ReliefFact }
+  /** A change of the record after the departure that nobody has decided on. */
+  | { code: 'entry.correction_waiting'; correction: RecordCorrection }
+  /** The set was tied up, and a step that secures it is not recorded. */
+  | { code: 'entry.tied_up_open'; tieUp: TieUp; steps: string[] }
   /** Names a step that this turn does not have. */
   | { code: 'entry.unknown_step'; step: string }
-  /** Takes back or corrects an entry that is not on this turn. */
+  /** Takes back, corrects, answers or decides on an entry that is not on this turn. */
   | { code: 'entry.unknown_target'; entryId: string }
   /** Claims a time more than a minute after it was received: a clock is wrong. */
   | { code: 'entry.in_future'; entryId: string; at: Instant; receivedAt: Instant };

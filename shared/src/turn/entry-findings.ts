@@ -4,7 +4,7 @@ import type { PlanStep } from '../plan/step-plan';
 import { rolesOf } from '../plan/step-roles';
 import { blueSignalAt } from './blue-signals';
 import type { EntryFinding } from './entry-finding';
-import type { TurnFacts } from './facts';
+import type { InQuestion, TurnFacts } from './facts';
 import { ofKind, type StandingEntries } from './standing-entries';
 
 /** How far a claimed time may lie after its receipt before the clock is doubted. Our choice: a minute. */
@@ -15,12 +15,26 @@ type Known = Omit<TurnFacts, 'findings'>;
 /** Everything that is wrong with the entries of a turn, in the order of the plan; the same for every order of arrival. */
 export function findInEntries(facts: Known, standing: StandingEntries): EntryFinding[] {
   return [
-    ...facts.inQuestion.map((question): EntryFinding => ({ code: 'entry.two_times', ...question })),
+    ...facts.inQuestion.flatMap(findInQuestion),
     ...facts.steps.flatMap((step) => findInStep(facts, step)),
     ...findInHandbrakes(facts, standing),
     ...findInDeparture(facts),
+    ...findInReliefs(facts),
+    ...findInTieUp(facts),
+    ...facts.corrections
+      .filter((correction) => correction.state === 'waiting')
+      .map((correction): EntryFinding => ({ code: 'entry.correction_waiting', correction })),
     ...findInWords(facts, standing),
   ];
+}
+
+function findInQuestion({ step, accounts, timesDiffer, objections }: InQuestion): EntryFinding[] {
+  const times: EntryFinding[] = timesDiffer ? [{ code: 'entry.two_times', step, accounts }] : [];
+  const objected = objections.flatMap((objection): EntryFinding[] => {
+    const account = accounts.find((each) => each.entryId === objection.target);
+    return account === undefined ? [] : [{ code: 'entry.objection', step, account, objection }];
+  });
+  return [...times, ...objected];
 }
 
 function findInStep(facts: Known, step: PlanStep): EntryFinding[] {
@@ -85,6 +99,22 @@ function findInDeparture(facts: Known): EntryFinding[] {
   return [...missing, { code: 'entry.blue_signal_up', step: departureEvent, at: departureAt, by: signal.by }];
 }
 
+/** A new operator calls for a test unless the relief is face to face; who changes another job calls for none. */
+function findInReliefs(facts: Known): EntryFinding[] {
+  return facts.reliefs
+    .filter((relief) => relief.as === 'engineer' && relief.out !== null && relief.in !== null)
+    .filter((relief) => !relief.faceToFace)
+    .map((relief): EntryFinding => ({ code: 'entry.not_face_to_face', relief }));
+}
+
+function findInTieUp({ tiedUp, steps, doneAt }: Known): EntryFinding[] {
+  const open = rolesOf(steps)
+    .secure.map((step) => step.key)
+    .filter((key) => doneAt[key] === undefined);
+  if (tiedUp === null || open.length === 0) return [];
+  return [{ code: 'entry.tied_up_open', tieUp: tiedUp, steps: open }];
+}
+
 /** Entries whose own words do not fit: unknown steps and targets, times from a wrong clock. */
 function findInWords(facts: Known, standing: StandingEntries): EntryFinding[] {
   const keys = new Set(facts.steps.map((step) => step.key));
@@ -94,7 +124,7 @@ function findInWords(facts: Known, standing: StandingEntries): EntryFinding[] {
     if ((entry.kind === 'step-done' || entry.kind === 'cannot-do') && !keys.has(entry.step)) {
       found.push({ code: 'entry.unknown_step', step: entry.step });
     }
-    if ((entry.kind === 'withdrawn' || entry.kind === 'corrected') && !ids.has(entry.target)) {
+    if ('target' in entry && !ids.has(entry.target)) {
       found.push({ code: 'entry.unknown_target', entryId: entry.id });
     }
     if (entry.observedAt > entry.receivedAt + clockDoubtMilliseconds) {

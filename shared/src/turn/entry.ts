@@ -23,6 +23,13 @@ export const ENTRY_KINDS = [
   'blue-signal-up',
   'blue-signal-down',
   'note',
+  'agreed',
+  'disagreed',
+  'ruled',
+  'correction-approved',
+  'correction-declined',
+  'defect',
+  'tied-up',
 ] as const;
 export type EntryKind = (typeof ENTRY_KINDS)[number];
 
@@ -33,6 +40,30 @@ export type SubjectKind = (typeof SUBJECT_KINDS)[number];
 /** The jobs a person can have on a turn. */
 export const CREW_ROLES = ['conductor', 'engineer'] as const;
 export type CrewRole = (typeof CREW_ROLES)[number];
+
+/** What can be wrong with a car, for a bad-order report. Common practice, no published source. */
+export const DEFECT_CAUSES = [
+  'brakes',
+  'handbrake',
+  'door',
+  'lights',
+  'heating',
+  'wheel',
+  'coupler',
+  'window',
+  'other',
+] as const;
+export type DefectCause = (typeof DEFECT_CAUSES)[number];
+
+/** What a crew looks after when it ties a set up, beside its handbrakes. Common practice, no published source. */
+export const TIE_UP_CHECKS = ['lights', 'doors', 'heat', 'chocks'] as const;
+export type TieUpCheck = (typeof TIE_UP_CHECKS)[number];
+
+/** Handbrakes that stand set on a set that is left: how many, and on which cars where those are named. */
+export interface LeftHandbrakes {
+  count: number;
+  cars: string[];
+}
 
 /** What was read off or counted with a step. Pressures in psi, time in seconds. */
 export interface Reading {
@@ -69,7 +100,10 @@ interface EntryFacts {
   clockOffsetMilliseconds?: number | undefined;
 }
 
-/** The fields that go with each kind. */
+/**
+ * The fields that go with each kind. A correction's `observedAt` is when it was made, as with every other kind; the
+ * time it claims for its target is `correctedObservedAt`. On the wire the two are called `madeAt` and `observedAt`.
+ */
 export type EntryContent =
   | { kind: 'arrival' }
   | { kind: 'departure' }
@@ -93,7 +127,22 @@ export type EntryContent =
   | { kind: 'annulled'; reason: string }
   | { kind: 'blue-signal-up' }
   | { kind: 'blue-signal-down' }
-  | { kind: 'note'; note: string };
+  | { kind: 'note'; note: string }
+  | { kind: 'agreed'; target: string }
+  | { kind: 'disagreed'; target: string; reason: string }
+  | { kind: 'ruled'; target: string; considered: string[] }
+  | { kind: 'correction-approved'; target: string }
+  | { kind: 'correction-declined'; target: string; reason: string }
+  | { kind: 'defect'; car: string | null; cause: DefectCause; note?: string | undefined }
+  | {
+      kind: 'tied-up';
+      handbrakes: LeftHandbrakes;
+      checks: TieUpCheck[];
+      /** Whether the set was cut off from its source of compressed air. */
+      offAir?: boolean | undefined;
+      /** Why it is left although a step that secures it is not recorded. */
+      reason?: string | undefined;
+    };
 
 /** One appended fact. Never edited; a later entry may withdraw or correct it. */
 export type Entry = EntryFacts & EntryContent;

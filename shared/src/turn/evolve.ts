@@ -1,19 +1,26 @@
 import type { Instant } from '../lib/instant';
+import { arrivalEvent, departureEvent } from '../plan/step-network';
 import type { PlanStep } from '../plan/step-plan';
 import { rolesOf } from '../plan/step-roles';
-import { accountOf, compareAccounts, countingAccount, isInQuestion, type Account } from './account';
+import { accountOf, type Account } from './account';
+import { answersIn, openObjections, type Answer } from './answers';
+import { approvalsIn } from './approvals';
 import { followBlueSignals } from './blue-signals';
+import { correctionsIn } from './corrections';
 import { followCrew, type CrewOnTurn } from './crew';
 import type { Entry } from './entry';
 import { findInEntries } from './entry-findings';
-import type { CannotDo, InQuestion, TurnFacts } from './facts';
+import type { AsksAgreement, CannotDo, InQuestion, TurnFacts } from './facts';
 import { completeReleases, countHandbrakes, setsNone, type Handbrakes } from './handbrakes';
+import { defectsIn, tieUpIn } from './remarks';
+import { weighAccounts, type Weighed } from './rulings';
 import {
   compareEntries,
   keepEntries,
   latestObserved,
   ofKind,
   standingEntries,
+  type EntryOf,
   type StandingEntries,
 } from './standing-entries';
 import type { PlannedTurn } from './turn';
@@ -46,9 +53,11 @@ export function turnFrom(
   carriedOver: readonly CrewOnTurn[] = [],
 ): TurnFacts {
   const kept = keepEntries(entries);
-  const standing = standingEntries(kept);
-  const movement = movementFacts(planned, standing);
-  const work = stepFacts(steps, kept, standing);
+  const approvals = approvalsIn(kept);
+  const standing = standingEntries(kept, approvals.idle);
+  const said = { answers: answersIn(standing.entries), rulings: ofKind(standing.entries, 'ruled') };
+  const movement = movementFacts(planned, standing, said);
+  const work = stepFacts(steps, kept, standing, said);
   const blueSignals = followBlueSignals(standing.entries);
   const up = blueSignals.find((signal) => signal.until === null);
   const facts = {
@@ -57,9 +66,10 @@ export function turnFrom(
     carriedOver,
     entries: kept,
     ...movement,
-    ...followCrew(standing.entries, carriedOver),
+    ...followCrew(standing.entries, carriedOver, said.answers),
     ...work,
     inQuestion: [...movement.inQuestion, ...work.inQuestion],
+    corrections: correctionsIn(kept, approvals),
     blueSignal: up === undefined ? null : { since: up.from, by: up.by },
     blueSignals,
     ...remarkFacts(standing.entries),
@@ -71,22 +81,31 @@ export function turnFrom(
   return { ...facts, findings: findInEntries(facts, standing) };
 }
 
-const accountsOf = (standing: StandingEntries, kind: 'arrival' | 'departure' | 'briefing'): Account[] =>
-  ofKind(standing.entries, kind)
-    .map((entry) => accountOf(entry, standing.corrected.has(entry.id)))
-    .sort(compareAccounts);
+/** What people say to the accounts of others: that they agree or not, and which one counts. */
+interface Said {
+  answers: readonly Answer[];
+  rulings: readonly EntryOf<'ruled'>[];
+}
 
-/** When and where the train came and went, by rank; what the desk last said about it. */
-function movementFacts(planned: PlannedTurn, standing: StandingEntries) {
-  const arrivals = accountsOf(standing, 'arrival');
-  const departures = accountsOf(standing, 'departure');
-  const arrival = arrivals[0] ?? null;
-  const departure = departures[0] ?? null;
+const accountsOf = (standing: StandingEntries, kind: 'arrival' | 'departure'): Account[] =>
+  ofKind(standing.entries, kind).map((entry) => accountOf(entry, standing.corrected.has(entry.id)));
+
+/** Whether a thing is in question: its times differ, or somebody objects to one of `all` its accounts. */
+function questionAbout(step: string, weighed: Weighed, all: readonly Account[], said: Said): InQuestion[] {
+  const objections = openObjections(said.answers, all, weighed.ruling);
+  const { timesDiffer } = weighed;
+  if (!timesDiffer && objections.length === 0) return [];
+  const accounts = weighed.accounts.length > 0 ? weighed.accounts : weighAccounts(all, said.rulings).accounts;
+  return [{ step, accounts, timesDiffer, objections }];
+}
+
+/** When and where the train came and went, by rank or ruling; what the desk last said about it. */
+function movementFacts(planned: PlannedTurn, standing: StandingEntries, said: Said) {
+  const arrivals = weighAccounts(accountsOf(standing, 'arrival'), said.rulings);
+  const departures = weighAccounts(accountsOf(standing, 'departure'), said.rulings);
+  const arrival = arrivals.accounts[0] ?? null;
+  const departure = departures.accounts[0] ?? null;
   const hold = latestObserved(ofKind(standing.entries, 'hold'));
-  const questions: InQuestion[] = [
-    { step: 'arrival', accounts: arrivals },
-    { step: 'departure', accounts: departures },
-  ];
   return {
     arrival,
     arrivalAt: arrival?.at ?? null,
@@ -97,32 +116,61 @@ function movementFacts(planned: PlannedTurn, standing: StandingEntries) {
     holdReason: hold?.reason ?? null,
     track: latestObserved(ofKind(standing.entries, 'track'))?.track ?? planned.track,
     set: latestObserved(ofKind(standing.entries, 'set'))?.set ?? planned.set,
-    inQuestion: questions.filter(({ accounts }) => isInQuestion(accounts)),
+    inQuestion: [
+      ...questionAbout(arrivalEvent, arrivals, arrivals.accounts, said),
+      ...questionAbout(departureEvent, departures, departures.accounts, said),
+    ],
   };
 }
 
 /** What is recorded about each step of the turn. */
-function stepFacts(steps: readonly PlanStep[], kept: readonly Entry[], standing: StandingEntries) {
+function stepFacts(
+  steps: readonly PlanStep[],
+  kept: readonly Entry[],
+  standing: StandingEntries,
+  said: Said,
+) {
   const accounts = new Map<string, Account[]>();
   for (const entry of ofKind(standing.entries, 'step-done')) {
     const account = accountOf(entry, standing.corrected.has(entry.id));
     accounts.set(entry.step, [...(accounts.get(entry.step) ?? []), account]);
   }
-  const handbrakes = countHandbrakes(steps, accounts);
+  const tiedUp = tieUpIn(standing.entries);
+  const handbrakes = countHandbrakes(steps, accounts, { rulings: said.rulings, tiedUp });
   const done: Record<string, Account> = {};
   const doneAt: Record<string, Instant> = {};
   const inQuestion: InQuestion[] = [];
+  const asksAgreement: AsksAgreement[] = [];
   for (const step of steps) {
-    const counted = countable(step, steps, accounts.get(step.key) ?? [], handbrakes).sort(compareAccounts);
-    const counting = countingAccount(counted);
-    if (counting === null) continue;
-    done[step.key] = counting;
-    doneAt[step.key] = counting.at;
-    if (isInQuestion(counted)) inQuestion.push({ step: step.key, accounts: counted });
+    const all = accounts.get(step.key) ?? [];
+    const weighed = weighAccounts(countable(step, steps, all, handbrakes), said.rulings);
+    const counting = weighed.accounts[0];
+    if (counting !== undefined) {
+      done[step.key] = counting;
+      doneAt[step.key] = counting.at;
+    }
+    inQuestion.push(...questionAbout(step.key, weighed, all, said));
+    asksAgreement.push(...unansweredIn(step.key, all, said));
   }
   const recorded = new Set(ofKind(kept, 'step-done').map((entry) => entry.step));
   const withdrawn = steps.map((step) => step.key).filter((key) => recorded.has(key) && !accounts.has(key));
-  return { done, doneAt, inQuestion, withdrawn, handbrakes, cannotDo: cannotDoFacts(standing.entries, done) };
+  const cannotDo = cannotDoFacts(standing.entries, done);
+  return { done, doneAt, inQuestion, asksAgreement, withdrawn, handbrakes, tiedUp, cannotDo };
+}
+
+/**
+ * The accounts by radio that wait for the crew's word: nobody has answered them, no ruling knows them, and the crew
+ * has not told of the step by hand, which is an answer too.
+ */
+function unansweredIn(step: string, all: readonly Account[], { answers, rulings }: Said): AsksAgreement[] {
+  if (all.some((account) => account.source === 'by-hand')) return [];
+  const known = new Set([
+    ...answers.map((answer) => answer.target),
+    ...rulings.flatMap((ruling) => [ruling.target, ...ruling.considered]),
+  ]);
+  return all
+    .filter((account) => account.source === 'by-radio' && !known.has(account.entryId))
+    .map((account) => ({ step, account }));
 }
 
 /** The accounts that make a step done: for a release those by which the counts agree, for a set those of any brake. */
@@ -162,6 +210,7 @@ function remarkFacts(entries: readonly Entry[]) {
             reason: annulled.reason,
             by: annulled.by?.name ?? null,
           },
+    defects: defectsIn(entries),
     briefings: ofKind(entries, 'briefing').map((entry) => accountOf(entry, false)),
     notes: ofKind(entries, 'note').map((entry) => ({
       entryId: entry.id,

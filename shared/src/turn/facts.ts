@@ -1,19 +1,32 @@
 import type { Instant } from '../lib/instant';
 import type { PlanStep } from '../plan/step-plan';
 import type { Account } from './account';
+import type { Answer } from './answers';
 import type { BlueSignal } from './blue-signals';
+import type { RecordCorrection } from './corrections';
 import type { CrewOnTurn, ReliefFact } from './crew';
 import type { Entry } from './entry';
 import type { EntryFinding } from './entry-finding';
 import type { Handbrakes } from './handbrakes';
+import type { DefectReport, TieUp } from './remarks';
 import type { PlannedTurn } from './turn';
 
-/** Two or more accounts of one thing that lie more than 60 s apart. */
+/** Accounts of one thing on which a person has to rule: they lie more than 60 s apart, or somebody objects. */
 export interface InQuestion {
   /** Key of a step, or the word `arrival` or `departure`. */
   step: string;
   /** The one that counts comes first. */
   accounts: Account[];
+  /** Whether two of the accounts lie more than 60 s apart. */
+  timesDiffer: boolean;
+  /** Who does not agree with which account, and why. */
+  objections: Answer[];
+}
+
+/** A step by radio to which no crew has said anything yet. */
+export interface AsksAgreement {
+  step: string;
+  account: Account;
 }
 
 /** Somebody said that a step cannot be done, and it has not been done since. */
@@ -64,6 +77,11 @@ export interface TurnFacts {
   /** Steps that were recorded, and every record of them has been taken back. */
   withdrawn: string[];
   inQuestion: InQuestion[];
+  asksAgreement: AsksAgreement[];
+  /** Corrections and withdrawals asked for after the departure. */
+  corrections: RecordCorrection[];
+  defects: DefectReport[];
+  tiedUp: TieUp | null;
   cannotDo: CannotDo[];
   annulled: { entryId: string; at: Instant; reason: string; by: string | null } | null;
   /** The signal that has stood longest; null when none stands. */

@@ -55,7 +55,7 @@ describe('findings about entries in words', () => {
       [arrival, aStepDone('handbrake-set', 70, { reading: { count: 0 } })],
     ],
     [
-      'An entry takes back or corrects an entry that is not on this turn.',
+      'An entry speaks of another entry that is not on this turn.',
       [anEntry('withdrawn', { target: 'elsewhere' })],
     ],
     [

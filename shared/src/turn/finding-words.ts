@@ -3,6 +3,7 @@ import type { Instant } from '../lib/instant';
 import { arrivalEvent, departureEvent } from '../plan/step-network';
 import type { PlanStep } from '../plan/step-plan';
 import type { Account } from './account';
+import type { ReliefFact } from './crew';
 import type { EntrySource } from './entry';
 import type { EntryFinding } from './entry-finding';
 import type { TurnFacts } from './facts';
@@ -31,6 +32,11 @@ export function formatEntryFinding(
   switch (finding.code) {
     case 'entry.two_times':
       return `Two times for ${lowerFirst(name(finding.step))}: ${finding.accounts.map((account) => accountWords(account, formatTime)).join(', ')}. Which one?`;
+    case 'entry.objection': {
+      const { step, account, objection } = finding;
+      const who = objection.by?.name ?? 'Somebody';
+      return `${name(step)} ${accountWords(account, formatTime)}: ${who} does not agree: ${objection.reason ?? ''}. Which one?`;
+    }
     case 'entry.out_of_order': {
       const { step, at, before, beforeAt } = finding;
       if (beforeAt === null)
@@ -49,9 +55,63 @@ export function formatEntryFinding(
       return `${name(finding.step)} at ${formatTime(finding.at)}, blue signal of ${finding.by} up.`;
     case 'entry.in_future':
       return `An entry claims ${formatTime(finding.at)} and came in at ${formatTime(finding.receivedAt)}. Check the clock of the device.`;
+    case 'entry.not_face_to_face':
+    case 'entry.correction_waiting':
+    case 'entry.tied_up_open':
+      return formatPersonFinding(finding, name, formatTime);
     default:
       return formatCountFinding(finding, name);
   }
+}
+
+type PersonFinding = Extract<
+  EntryFinding,
+  { code: 'entry.not_face_to_face' | 'entry.correction_waiting' | 'entry.tied_up_open' }
+>;
+
+function formatPersonFinding(
+  finding: PersonFinding,
+  name: (key: string) => string,
+  formatTime: FormatTime,
+): string {
+  switch (finding.code) {
+    case 'entry.not_face_to_face':
+      return reliefWords(finding.relief, formatTime);
+    case 'entry.correction_waiting': {
+      const { kind, what, by, askedAt } = finding.correction;
+      const change = kind === 'withdrawn' ? 'Withdrawal' : 'Correction';
+      const who = by === null ? '' : ` by ${by.name}`;
+      const known = name(what);
+      const subject = known === what ? what.replaceAll('-', ' ') : lowerFirst(known);
+      return `${change} of ${subject} asked for at ${formatTime(askedAt)}${who}. It waits for a supervisor.`;
+    }
+    case 'entry.tied_up_open': {
+      const { tieUp, steps } = finding;
+      const open = steps.map((step) => lowerFirst(name(step))).join(', ');
+      const reason = tieUp.reason === null ? 'No reason given' : `Reason: ${tieUp.reason}`;
+      return `Tied up at ${formatTime(tieUp.at)}, ${open} not recorded. ${reason}.`;
+    }
+    default:
+      return assertNever(finding);
+  }
+}
+
+/**
+ * When an operator first takes charge, a Class II test is called for unless the relief is face to face.
+ * Source: 49 CFR 238.317(a)(5), editions of 2004 and 2005; not confirmed by the railroad.
+ */
+const reliefRule =
+  'An operator who first takes charge other than face to face: Class II brake test (49 CFR 238.317(a)(5), editions 2004 and 2005).';
+
+function reliefWords(relief: ReliefFact, formatTime: FormatTime): string {
+  const goes = relief.out?.name ?? 'Engineer';
+  const comes = relief.in?.name ?? 'nobody';
+  const missing = [relief.out, relief.in].find((person) => person?.personId === relief.awaits);
+  const how =
+    missing === undefined || missing === null
+      ? 'not face to face'
+      : `face to face by one account, ${missing.name} has not said so`;
+  return `${goes} relieved by ${comes} at ${formatTime(relief.at)}, ${how}. ${reliefRule}`;
 }
 
 type CountFinding = Extract<
@@ -84,7 +144,7 @@ function formatCountFinding(finding: CountFinding, name: (key: string) => string
     case 'entry.unknown_step':
       return `"${finding.step}" is recorded and is no step of this turn.`;
     case 'entry.unknown_target':
-      return 'An entry takes back or corrects an entry that is not on this turn.';
+      return 'An entry speaks of another entry that is not on this turn.';
     default:
       return assertNever(finding);
   }

@@ -1,8 +1,11 @@
 import type { Instant } from '../lib/instant';
 import { rolesOf } from '../plan/step-roles';
 import type { PlanStep } from '../plan/step-plan';
-import { compareTimes, countingAccount, type Account } from './account';
+import { compareTimes, type Account } from './account';
 import { ENTRY_SOURCES } from './entry';
+import type { TieUp } from './remarks';
+import { weighAccounts } from './rulings';
+import type { EntryOf } from './standing-entries';
 
 /** What the entries say about the handbrakes of a turn. */
 export interface Handbrakes {
@@ -61,21 +64,34 @@ function releasedBy(releases: readonly Account[]): number {
   return cars.size + unnamed;
 }
 
+/** What else bears on the handbrakes: rulings on accounts, and how the set was left. */
+export interface HandbrakeWords {
+  rulings: readonly EntryOf<'ruled'>[];
+  tiedUp: TieUp | null;
+}
+
 /** Adds up what was set and released. `accounts` gives the standing accounts of each step by its key. */
 export function countHandbrakes(
   steps: readonly PlanStep[],
   accounts: ReadonlyMap<string, readonly Account[]>,
+  { rulings, tiedUp }: HandbrakeWords,
 ): Handbrakes {
   const { secure, release } = rolesOf(steps);
   const of = (some: readonly PlanStep[]): Account[] => some.flatMap((step) => accounts.get(step.key) ?? []);
   const sets = of(secure);
   const releases = of(release);
-  const counting = countingAccount(sets.filter((account) => !setsNone(account)));
+  const setting = sets.filter((account) => !setsNone(account));
+  const counting = weighAccounts(setting, rulings).accounts[0];
   const set = countOf(counting?.reading ?? null);
   const carsSet = counting?.reading?.cars ?? [];
   const carsOff = new Set(releases.flatMap((each) => each.reading?.cars ?? []));
   const carsStillSet = carsOff.size > 0 ? carsSet.filter((car) => !carsOff.has(car)) : [];
-  return { set, released: releasedCount(releases, set), carsStillSet, log: logOf(sets, releases) };
+  return {
+    set,
+    released: releasedCount(releases, set),
+    carsStillSet,
+    log: withTieUp(logOf(sets, releases), tiedUp),
+  };
 }
 
 function releasedCount(releases: readonly Account[], set: number | null): number | null {
@@ -86,6 +102,15 @@ function releasedCount(releases: readonly Account[], set: number | null): number
     releasedBy(releases.filter((release) => release.source === source)),
   );
   return Math.max(...bySource);
+}
+
+/** The record of a tie-up says how many stand at that moment, whatever was added up before. */
+function withTieUp(log: Handbrakes['log'], tiedUp: TieUp | null): Handbrakes['log'] {
+  if (tiedUp === null) return log;
+  const { at } = tiedUp;
+  const after = log.findIndex((change) => change.at > at);
+  const place = after < 0 ? log.length : after;
+  return [...log.slice(0, place), { at, standing: tiedUp.handbrakes.count }, ...log.slice(place)];
 }
 
 function logOf(sets: readonly Account[], releases: readonly Account[]): Handbrakes['log'] {

@@ -1,5 +1,6 @@
 import { compareIds } from './account';
 import type { Entry, EntryKind } from './entry';
+import { rootOf, withdrawnIds } from './withdrawals';
 
 /** An entry of one kind. */
 export type EntryOf<Kind extends EntryKind> = Extract<Entry, { kind: Kind }>;
@@ -56,14 +57,16 @@ export function latestObserved<Some extends Entry>(entries: readonly Some[]): So
 }
 
 /**
- * Carries out withdrawals and corrections. A withdrawal may itself be withdrawn; then its target stands again. A
- * correction of a correction is one more correction of the entry at the root. Of several corrections the latest
- * observed counts, for time and reading each. Entries that name an unknown target, or one another, change nothing.
+ * Carries out withdrawals and corrections, all but those that are `idle` (from `approvalsIn`). A withdrawal may
+ * itself be withdrawn; then its target stands again. A correction of a correction is one more correction of the
+ * entry at the root. Of several corrections the latest observed counts, for time and reading each. Entries that
+ * name an unknown target change nothing.
  */
-export function standingEntries(kept: readonly Entry[]): StandingEntries {
-  const withdrawn = withdrawnIds(kept);
+export function standingEntries(kept: readonly Entry[], idle: ReadonlySet<string>): StandingEntries {
+  const withdrawals = ofKind(kept, 'withdrawn').filter((entry) => !idle.has(entry.id));
+  const withdrawn = withdrawnIds(kept, withdrawals);
   const left = kept.filter((entry) => !withdrawn.has(entry.id));
-  const byTarget = correctionsByTarget(left);
+  const byTarget = correctionsByTarget(left.filter((entry) => !idle.has(entry.id)));
   const corrected = new Set<string>();
   const entries = left.map((entry) => {
     const changed = correct(entry, byTarget.get(entry.id) ?? []);
@@ -73,24 +76,8 @@ export function standingEntries(kept: readonly Entry[]): StandingEntries {
   return { entries: entries.sort(compareEntries), withdrawn, corrected };
 }
 
-function withdrawnIds(kept: readonly Entry[]): Set<string> {
-  const withdrawals = ofKind(kept, 'withdrawn');
-  const answers = new Map<string, boolean>();
-  const path = new Set<string>();
-  const isWithdrawn = (id: string): boolean => {
-    const known = answers.get(id);
-    if (known !== undefined) return known;
-    if (path.has(id)) return false;
-    path.add(id);
-    const answer = withdrawals.some((each) => each.target === id && !isWithdrawn(each.id));
-    path.delete(id);
-    answers.set(id, answer);
-    return answer;
-  };
-  return new Set(kept.map((entry) => entry.id).filter((id) => isWithdrawn(id)));
-}
-
-function correctionsByTarget(entries: readonly Entry[]): Map<string, EntryOf<'corrected'>[]> {
+/** The corrections among some entries, by the entry that each corrects in the end. */
+export function correctionsByTarget(entries: readonly Entry[]): Map<string, EntryOf<'corrected'>[]> {
   const corrections = ofKind(entries, 'corrected');
   const targets = new Map(corrections.map((each) => [each.id, each.target]));
   const byTarget = new Map<string, EntryOf<'corrected'>[]>();
@@ -101,18 +88,8 @@ function correctionsByTarget(entries: readonly Entry[]): Map<string, EntryOf<'co
   return byTarget;
 }
 
-/** Follows a chain of corrections to the entry that is corrected; a circle ends where it began. */
-function rootOf(target: string, targets: ReadonlyMap<string, string>): string {
-  const seen = new Set<string>();
-  let root = target;
-  for (let next = targets.get(root); next !== undefined && !seen.has(root); next = targets.get(root)) {
-    seen.add(root);
-    root = next;
-  }
-  return root;
-}
-
-function correct(entry: Entry, corrections: readonly EntryOf<'corrected'>[]): Entry {
+/** An entry with some corrections of it carried out; the very same when they change nothing. */
+export function correct(entry: Entry, corrections: readonly EntryOf<'corrected'>[]): Entry {
   if (entry.kind === 'corrected') return entry;
   const time = latestObserved(corrections.filter((each) => each.correctedObservedAt !== undefined));
   const observedAt = time?.correctedObservedAt ?? entry.observedAt;

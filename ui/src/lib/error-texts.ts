@@ -48,6 +48,7 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'server.busy': () => 'The server is busy. Try again in a moment.',
   'session.missing': () => 'You are signed out. Sign in to go on.',
   'session.wrong_credentials': () => 'E-mail and password do not fit together.',
+  'session.other_person': () => 'Somebody else is signed in on this phone. Sign in to go on.',
   'session.cross_site': () => 'The request came from another site and was not taken.',
   'session.unknown': () => 'That session has already ended.',
   'session.too_many_tries': (facts) => `Too many tries. Try again ${waiting(facts)}.`,
@@ -58,6 +59,9 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'password.too_short': (facts) => `Too short: at least ${fact(facts, 'shortest', '8')} characters.`,
   'password.too_long': (facts) => `Too long: at most ${fact(facts, 'longest', '128')} characters.`,
   'password.common': () => 'This password is among the most used ones. Choose another.',
+  'pin.too_simple': () => 'One digit repeated, or a run such as 1234, is tried first. Choose another PIN.',
+  'pin.no_badge': () => 'A PIN goes with a badge. The administrator gives badges out.',
+  'people.badge_taken': (facts) => `Somebody else has badge ${fact(facts, 'badge', 'of this number')}.`,
   'people.exists': () => 'Somebody with this e-mail is already there.',
   'people.unknown': () => 'This person is not there any more.',
   'people.last_administrator': () =>
@@ -79,7 +83,7 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'entry.at_the_controls': () =>
     'Not from the engineer at the controls. The conductor records it, the desk does from radio, or it is entered later.',
   'entry.not_yours': () => 'Only the person who wrote an entry, the desk or the supervisor takes it back.',
-  'entry.after_departure': () => 'The train has left: ask for a correction instead of taking the entry back.',
+  'entry.own_request': () => 'You asked for this correction yourself. Somebody else has to decide on it.',
   'entry.target_unknown': () => 'The entry to take back or correct is not there.',
   'entry.step_unknown': () => 'This step is not in the plan of this turn.',
   'entry.person_unknown': () => 'This person is not there.',
