@@ -34,5 +34,21 @@ export function sealEntry(entry: SealableEntry, sha256: (text: string) => string
   const bodyHash = sha256(body);
   const { previousHash, sequence, id, receivedAt } = entry;
   const envelope = { previousHash, sequence, id, receivedAt: formatInstant(receivedAt), bodyHash };
-  return { body, bodyHash, hash: sha256(canonicalJson(envelope)) };
+  return { body, bodyHash, hash: hashEnvelope(envelope, sha256) };
+}
+
+/** What stands round the body of an entry, as it is hashed. */
+export interface Envelope {
+  previousHash: string;
+  sequence: number;
+  id: string;
+  /** ISO 8601 in UTC with milliseconds. */
+  receivedAt: string;
+  bodyHash: string;
+}
+
+/** The hash of an entry: SHA-256 over the RFC 8785 form of its envelope; members beside the five do not count. */
+export function hashEnvelope(envelope: Envelope, sha256: (text: string) => string): string {
+  const { previousHash, sequence, id, receivedAt, bodyHash } = envelope;
+  return sha256(canonicalJson({ previousHash, sequence, id, receivedAt, bodyHash }));
 }
