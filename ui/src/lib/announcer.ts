@@ -51,6 +51,11 @@ export function announce(words: string | (() => string), key?: string): void {
   timer = setTimeout(speak, Math.max(100, spokenAt + interval - readDeviceClock()));
 }
 
+/** Answers the person's own act in the polite region at once: it is what they wait for, whatever else they want to hear. */
+export function announceOwnAct(text: string): void {
+  speakPolitely?.(text);
+}
+
 /** Says an "Act now" at once. For nothing else. */
 export function announceActNow(text: string): void {
   speakAtOnce?.(text);

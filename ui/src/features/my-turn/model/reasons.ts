@@ -1,0 +1,28 @@
+/*
+ * Reasons that stand as buttons, so that gloves need not type. Common practice, no published source; any other reason is
+ * put in words.
+ */
+
+/** Why a step cannot be done. */
+export const cannotDoReasons = [
+  'Waiting for the engineer',
+  'Waiting for the conductor',
+  'Equipment will not answer',
+  'Not safe to go there',
+] as const;
+
+/** Why an entry is taken back before the train has left. */
+export const withdrawReasons = ['Wrong step', 'Wrong train', 'Wrong time'] as const;
+
+/** Why an entry is to be corrected after the train has left. */
+export const correctionReasons = ['Misread', 'Wrong step', 'Wrong train', 'Wrong time'] as const;
+
+/** Why a step written from the radio is not so. */
+export const notSoReasons = ['Not made yet', 'Wrong train', 'Somebody else said it'] as const;
+
+/** Why a set is left with securement open. */
+export const tieUpReasons = [
+  'Mechanical has the set',
+  'Set stays with its next crew',
+  'Handbrake will not hold',
+] as const;
