@@ -10,7 +10,7 @@ export function LockNotice({ lock, onLift }: { lock: ActLock; onLift: () => void
     <section className={styles.said} aria-label="Why the bar is shut">
       <LockWords lock={lock} />
       <button type="button" className={`${styles.button} ${styles.wide}`} onClick={onLift}>
-        It has happened: record it
+        {lock.kind === 'briefing' ? 'Not in the cab: record it' : 'It has happened: record it'}
       </button>
     </section>
   );
@@ -25,6 +25,14 @@ export function LockWords({ lock }: { lock: ActLock }) {
         <p>
           <BlueSignalFlag /> up since {formatClock(lock.since, turn.zone)}, {lock.by}. Only the person or
           craft that put it up takes it down.
+        </p>
+      );
+    case 'briefing':
+      return (
+        <p>
+          <b>The safety briefing comes first.</b> This step is made in the controlling cab: your railroad asks
+          for a briefing with every crew member, and everybody’s agreement, before a device is used there. 49
+          CFR 220.309.
         </p>
       );
     case 'missing':
@@ -52,5 +60,7 @@ export function lockWord(lock: ActLock): string {
       return `waits for: ${lock.labels[0] ?? ''}${lock.labels.length > 1 ? ` and ${lock.labels.length - 1} more` : ''}`;
     case 'too-early':
       return 'too early by the plan';
+    case 'briefing':
+      return 'waits for the briefing';
   }
 }

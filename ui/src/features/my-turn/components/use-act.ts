@@ -15,6 +15,7 @@ import {
 import { handbrakeView, type HandbrakeView } from '../model/handbrake-view';
 import { hasLeft, type NextAct } from '../model/next-act';
 import { useTurnScene } from './turn-context';
+import { useAsksBriefing } from './use-turn-rules';
 
 /** One act on the page: what was put in, what it waits for, what stands in its way. */
 export interface ActOnPage {
@@ -43,6 +44,7 @@ export interface ActOnPage {
 /** The state of one act. The component that calls it is drawn anew for another act, so nothing is carried over. */
 export function useAct(act: NextAct): ActOnPage {
   const { turn, steps, handbrakes, now } = useTurnScene();
+  const asksBriefing = useAsksBriefing();
   const [form, setForm] = useState<ActForm>(emptyForm);
   const [chosenField, setActive] = useState<NumberField | null>(null);
   const [isLockLifted, setLockLifted] = useState(false);
@@ -69,7 +71,7 @@ export function useAct(act: NextAct): ActOnPage {
     setActive,
     reading: readingOf(fields, filled),
     waitsFor: waitsForField ?? (asksTime && earlier === null ? 'waits for the time' : null),
-    lock: lockOf(turn, steps, act, now),
+    lock: lockOf({ turn, steps, act, now, asksBriefing }),
     isLockLifted,
     liftLock: () => setLockLifted(true),
     earlier: asksTime ? earlier : null,

@@ -3,7 +3,7 @@ import { lockOf } from './act-lock';
 
 const { steps } = pushPullPlan;
 const lock = (key: string, turn = aWireTurn(), clock = '17:22:41') =>
-  lockOf(turn, steps, { kind: 'step', step: aWireStep(key) }, ms(clock));
+  lockOf({ turn, steps, act: { kind: 'step', step: aWireStep(key) }, now: ms(clock), asksBriefing: false });
 const tillEnds = { 'handbrake-set': '17:20', 'cab-brake-check': '17:23', 'ends-changed': '17:27' };
 const blue = { blueSignal: { since: at('17:30'), by: 'Marsh' } };
 
@@ -20,7 +20,9 @@ describe('the bar is shut', () => {
       since: at('17:30'),
       by: 'Marsh',
     });
-    expect(lockOf(turn, steps, { kind: 'departure' }, ms('17:40'))?.kind).toBe('blue-signal');
+    expect(
+      lockOf({ turn, steps, act: { kind: 'departure' }, now: ms('17:40'), asksBriefing: false })?.kind,
+    ).toBe('blue-signal');
     expect(lock('handbrake-set', aWireTurn(blue))).toBeNull();
   });
 
@@ -46,7 +48,9 @@ describe('the bar is shut', () => {
 
   it('for a departure while a step the train waits for is open', () => {
     const turn = withDone(aWireTurn(), tillEnds);
-    expect(lockOf(turn, steps, { kind: 'departure' }, ms('17:40'))).toEqual({
+    expect(
+      lockOf({ turn, steps, act: { kind: 'departure' }, now: ms('17:40'), asksBriefing: false }),
+    ).toEqual({
       kind: 'missing',
       labels: ['In leaving cab', 'Handbrake off', 'Air charged', 'Leaving-end test'],
     });

@@ -1,4 +1,4 @@
-import { parseInstant, type Instant, type PlanStep, type WireTurn } from '@stubpost/shared';
+import { isInCab, parseInstant, type Instant, type PlanStep, type WireTurn } from '@stubpost/shared';
 import { hasLeft, missingBefore, type NextAct } from './next-act';
 import { leavesAt } from './turn-times';
 
@@ -6,15 +6,21 @@ import { leavesAt } from './turn-times';
 export type ActLock =
   | { kind: 'blue-signal'; since: string; by: string }
   | { kind: 'missing'; labels: string[] }
-  | { kind: 'too-early'; notBefore: Instant };
+  | { kind: 'too-early'; notBefore: Instant }
+  /** The railroad asks for the safety briefing before anything is recorded from the controlling cab. */
+  | { kind: 'briefing' };
 
-/** What stands in the way of an act before it; null when nothing does. `steps` are those of the turn. */
-export function lockOf(
-  turn: WireTurn,
-  steps: readonly PlanStep[],
-  act: NextAct,
-  now: Instant,
-): ActLock | null {
+/** What an act is held against: `steps` are those of the turn; `asksBriefing` says that this person still owes the briefing. */
+export interface LockQuestion {
+  turn: WireTurn;
+  steps: readonly PlanStep[];
+  act: NextAct;
+  now: Instant;
+  asksBriefing: boolean;
+}
+
+/** What stands in the way of an act before it; null when nothing does. */
+export function lockOf({ turn, steps, act, now, asksBriefing }: LockQuestion): ActLock | null {
   if (act.kind === 'nothing' || act.kind === 'arrival' || hasLeft(turn)) return null;
   const step = act.kind === 'step' ? steps.find((each) => each.key === act.step.key) : undefined;
   const isLeaving = act.kind === 'departure' || step?.anchor === 'departure';
@@ -22,7 +28,8 @@ export function lockOf(
   const labels = act.kind === 'step' ? missingBefore(turn, steps, act.step.key) : openBeforeDeparture(turn);
   if (labels.length > 0) return { kind: 'missing', labels };
   const notBefore = notBeforeOf(turn, step);
-  return notBefore !== null && now < notBefore ? { kind: 'too-early', notBefore } : null;
+  if (notBefore !== null && now < notBefore) return { kind: 'too-early', notBefore };
+  return asksBriefing && step !== undefined && isInCab(step) ? { kind: 'briefing' } : null;
 }
 
 /** Steps the train waits for that are open; asked when somebody records the departure out of order. */
