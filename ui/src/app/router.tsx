@@ -17,6 +17,10 @@ const setupPage = () => import('./routes/setup-page').then(({ SetupPage }) => ({
 const myPage = () => import('./routes/my-page').then(({ MyPage }) => ({ Component: MyPage }));
 const myTurnPage = () =>
   import('./routes/my-turn-page').then(({ MyTurnPage }) => ({ Component: MyTurnPage }));
+const myTieUpPage = () =>
+  import('./routes/my-tie-up-page').then(({ MyTieUpPage }) => ({ Component: MyTieUpPage }));
+const myOutboxPage = () =>
+  import('./routes/my-outbox-page').then(({ MyOutboxPage }) => ({ Component: MyOutboxPage }));
 const peoplePage = () => import('./routes/people-page').then(({ PeoplePage }) => ({ Component: PeoplePage }));
 const mePage = () => import('./routes/me-page').then(({ MePage }) => ({ Component: MePage }));
 const signInPage = () =>
@@ -54,6 +58,8 @@ const phonePages: RouteObject[] = [
     children: [
       { path: '/my', lazy: myPage },
       { path: '/my/turn/:turnId', lazy: myTurnPage },
+      { path: '/my/outbox', lazy: myOutboxPage },
+      { path: '/my/tie-up', lazy: myTieUpPage },
     ],
   },
 ];

@@ -16,14 +16,15 @@ export function isSettled(step: WireStep): boolean {
 export function missingBefore(turn: WireTurn, steps: readonly PlanStep[], key: string): string[] {
   const after = steps.find((step) => step.key === key)?.after ?? [];
   return after.flatMap((before) => {
-    if (before === 'arrival') return needsArrival(turn) ? ['Stopped at marker'] : [];
+    if (before === 'arrival') return missingArrival(turn) ? ['Stopped at marker'] : [];
     if (before === 'departure') return turn.outbound?.actualDepartureAt === null ? ['Departed'] : [];
     const step = turn.steps.find((each) => each.key === before);
     return step === undefined || isSettled(step) ? [] : [step.shortLabel];
   });
 }
 
-const needsArrival = (turn: WireTurn): boolean =>
+/** Whether a train is to come in and has not been recorded as arrived. */
+export const missingArrival = (turn: WireTurn): boolean =>
   turn.inbound !== null && turn.inbound.actualArrivalAt === null;
 /** Whether the departure is recorded. */
 export const hasLeft = (turn: WireTurn): boolean =>
@@ -42,7 +43,7 @@ export function nextAct(turn: WireTurn, steps: readonly PlanStep[]): NextAct {
   const open = turn.steps.filter((step) => !isSettled(step));
   const { afterDeparture } = rolesOf(steps);
   if (hasLeft(turn)) return actAfterDeparture(open, afterDeparture);
-  if (needsArrival(turn)) return { kind: 'arrival' };
+  if (missingArrival(turn)) return { kind: 'arrival' };
   const before = open.filter((step) => !afterDeparture.has(step.key));
   const ready = before
     .filter((step) => missingBefore(turn, steps, step.key).length === 0)
