@@ -50,11 +50,12 @@ export function ActBar({ page, bar, isPicked, ways }: ActBarProps) {
         Nothing open
       </ShutBar>
     );
+  if (lock?.kind === 'briefing' && !page.isLockLifted) return <BriefingBar ways={ways} />;
   if (lock !== null && !page.isLockLifted) return <ShutBar under={lockWord(lock)}>{label}</ShutBar>;
   if (page.waitsFor !== null) return <ShutBar under={page.waitsFor}>{label}</ShutBar>;
   const words = barWords(label, brakes.hand, reading);
   const touch = (): void =>
-    brakes.hand === 'released' ? ways.onSecond(page) : ways.onRecord(draft, words, earlier);
+    brakes.hand === 'released' ? ways.onGo({ kind: 'second', page }) : ways.onRecord(draft, words, earlier);
   const isOwn = isPicked || page.isLockLifted || page.fields.length > 0 || page.asksTime;
   return (
     <RecordBar
@@ -64,6 +65,19 @@ export function ActBar({ page, bar, isPicked, ways }: ActBarProps) {
       onRecord={touch}
     >
       {words}
+    </RecordBar>
+  );
+}
+
+/** The safety briefing with everybody's agreement, recorded in one touch before the step it comes before. */
+function BriefingBar({ ways }: { ways: ActWays }) {
+  return (
+    <RecordBar
+      barKey="briefing"
+      over="Record first"
+      onRecord={() => ways.onRecord({ kind: 'briefing' }, 'Safety briefing, all agreed', null)}
+    >
+      Briefing, all agreed
     </RecordBar>
   );
 }

@@ -1,19 +1,18 @@
-import { SafetyCaution } from '../../../components/caution';
 import { actLabel } from '../model/next-act';
 import { ActInputs } from './act-inputs';
+import { ActLines, SecondaryButtons } from './act-lines';
 import type { ActWays } from './act-ways';
-import { LastEntry } from './last-entry';
+import { AskedOfMe } from './asked-of-me';
+import { Finished } from './finished';
 import { LaterTime } from './later-time';
 import { LockNotice, LockWords } from './lock-notice';
 import { NextStep } from './next-step';
 import { OpenCount } from './open-count';
 import styles from './phone-parts.module.css';
-import { OnwardSign } from './phone-icons';
-import { useTurnScene } from './turn-context';
 import { UnsentNotice } from './unsent-notice';
 import type { ActOnPage } from './use-act';
 
-interface ActBodyProps {
+export interface ActBodyProps {
   page: ActOnPage;
   lead: string;
   isAfter: boolean;
@@ -32,8 +31,12 @@ export function ActBody({ page, lead, isAfter, ways, onGoOn }: ActBodyProps) {
   return (
     <>
       <UnsentNotice />
+      <AskedOfMe ways={ways} />
       {brakes.shortCount !== null && !isAfter && (
-        <OpenCount count={brakes.shortCount} onTellDesk={ways.onTellDesk} />
+        <OpenCount
+          count={brakes.shortCount}
+          onTellDesk={(note) => ways.onRecord({ kind: 'note', note }, 'Sent to desk', null)}
+        />
       )}
       <NextStep
         act={act}
@@ -62,7 +65,7 @@ export function ActBody({ page, lead, isAfter, ways, onGoOn }: ActBodyProps) {
         />
       )}
       {/* Where keys stand above the bar, nothing that takes back stands between them. */}
-      {(isAfter || page.active === null) && <Lines ways={ways} />}
+      {(isAfter || page.active === null) && <ActLines act={act} ways={ways} />}
       <SecondaryButtons page={page} ways={ways} isAfter={isAfter} />
     </>
   );
@@ -80,63 +83,4 @@ function handHint({ brakes }: ActOnPage): string {
   return brakes.cars.length > 0
     ? 'Touch each car where one was released.'
     : 'Count those that were released.';
-}
-
-/** The newest record, and the way to all steps. */
-export function Lines({ ways }: { ways: ActWays }) {
-  const { turn } = useTurnScene();
-  const recorded = turn.steps.filter((step) => step.doneAt !== null).length;
-  return (
-    <div className={styles.lines}>
-      <LastEntry onWithdraw={ways.onWithdraw} />
-      {turn.steps.length > 0 && (
-        <button type="button" className={styles.line} onClick={ways.onSteps}>
-          All steps
-          <span className={styles.push}>
-            {recorded} of {turn.steps.length} recorded
-          </span>
-          <OnwardSign size={22} />
-        </button>
-      )}
-    </div>
-  );
-}
-
-function SecondaryButtons({ page, ways, isAfter }: { page: ActOnPage; ways: ActWays; isAfter: boolean }) {
-  return (
-    <div className={styles.buttons}>
-      {page.act.kind === 'step' && (
-        <button type="button" className={styles.button} onClick={ways.onCannotDo}>
-          Can’t do
-        </button>
-      )}
-      {!isAfter && !page.asksTime && (
-        <button type="button" className={styles.button} onClick={() => page.setAsksTime(true)}>
-          Earlier
-        </button>
-      )}
-      <button type="button" className={styles.button} onClick={ways.onNote}>
-        Desk
-      </button>
-    </div>
-  );
-}
-
-/** Nothing is left to record: says why, with the caution that this is no word about the train. */
-function Finished({ ways }: { ways: ActWays }) {
-  const { turn } = useTurnScene();
-  return (
-    <>
-      <UnsentNotice />
-      <section className={styles.next} aria-label="Next step">
-        <h2>{turn.annulled === null ? 'Nothing left to record' : 'Annulled'}</h2>
-        {turn.annulled !== null && <p>{turn.annulled.reason}</p>}
-      </section>
-      <Lines ways={ways} />
-      <button type="button" className={`${styles.button} ${styles.wide}`} onClick={ways.onNote}>
-        Note to the desk
-      </button>
-      <SafetyCaution />
-    </>
-  );
 }

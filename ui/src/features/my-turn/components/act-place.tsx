@@ -2,7 +2,8 @@ import type { ReactNode } from 'react';
 import { controlsBar } from '../model/controls';
 import { hasLeft, type NextAct } from '../model/next-act';
 import { ActBar } from './act-bar';
-import { ActBody, Lines } from './act-body';
+import { ActBody } from './act-body';
+import { ActLines } from './act-lines';
 import type { ActWays } from './act-ways';
 import { AtTheControls } from './at-the-controls';
 import { Foot } from './foot';
@@ -40,7 +41,7 @@ export function ActPlace(props: ActPlaceProps) {
         {bar !== null && !isAfter ? (
           <>
             <AtTheControls bar={bar} />
-            {bar.kind === 'own-act' && <Lines ways={props} />}
+            {bar.kind === 'own-act' && <ActLines act={act} ways={props} />}
           </>
         ) : (
           <ActBody
@@ -52,9 +53,7 @@ export function ActPlace(props: ActPlaceProps) {
           />
         )}
       </div>
-      <Foot onPhone={props.onPhone}>
-        {doneBar ?? <ActBar page={page} bar={bar} isPicked={isPicked} ways={props} />}
-      </Foot>
+      <Foot>{doneBar ?? <ActBar page={page} bar={bar} isPicked={isPicked} ways={props} />}</Foot>
     </>
   );
 }

@@ -1,22 +1,25 @@
 import type { WireStep } from '@stubpost/shared';
 import { StepMark } from '../../../components/step-mark';
 import { STEP_STATE_WORDS } from '../../../components/words';
-import { formatClock, formatTime } from '../../../lib/time-display';
+import { formatTime } from '../../../lib/time-display';
 import { isSettled } from '../model/next-act';
-import { recordWords } from './last-entry';
+import { recordLine, recordWords } from '../model/record-words';
+import { recordOf } from '../model/turn-records';
 import { OnwardSign } from './phone-icons';
 import styles from './phone-parts.module.css';
+import type { Place } from './place';
 import { useTurnScene } from './turn-context';
 import { useHeadingFocus } from './use-heading-focus';
 
 export interface AllStepsProps {
+  /** Brings an open step under the bar. */
   onPick: (key: string) => void;
-  onBriefing: () => void;
+  onGo: (place: Place) => void;
   onBack: () => void;
 }
 
-/** Every step of the turn with how it stands. Touching one brings it under the bar, also out of order. */
-export function AllSteps({ onPick, onBriefing, onBack }: AllStepsProps) {
+/** Every step of the turn with how it stands. An open one goes under the bar, also out of order; a recorded one opens. */
+export function AllSteps({ onPick, onGo, onBack }: AllStepsProps) {
   const { turn } = useTurnScene();
   const heading = useHeadingFocus();
   const said = turn.steps.flatMap((step) => step.remarks);
@@ -26,24 +29,16 @@ export function AllSteps({ onPick, onBriefing, onBack }: AllStepsProps) {
       <h1 tabIndex={-1} ref={heading}>
         All steps
       </h1>
-      <Briefing onRecord={onBriefing} />
       <ol className={styles.lines}>
+        <MovementItem recordKey="arrival" onGo={onGo} />
         {turn.steps.map((step) => (
-          <li key={step.key}>
-            <button type="button" className={styles.line} onClick={() => onPick(step.key)}>
-              <StepMark kind={step.kind} state={step.state} source={step.source} size={26} />
-              <StepWords step={step} zone={turn.zone} />
-              <span className={styles.push}>
-                <OnwardSign size={22} />
-              </span>
-            </button>
-            {step.remarks.map((remark) => (
-              <p key={remark} className={styles.remark}>
-                {remark}
-              </p>
-            ))}
-          </li>
+          <StepItem
+            key={step.key}
+            step={step}
+            onOpen={() => (isSettled(step) ? onGo({ kind: 'record', key: step.key }) : onPick(step.key))}
+          />
         ))}
+        <MovementItem recordKey="departure" onGo={onGo} />
       </ol>
       {findings.length > 0 && (
         <section className={styles.said} aria-label="What is open about the entries">
@@ -56,6 +51,50 @@ export function AllSteps({ onPick, onBriefing, onBack }: AllStepsProps) {
         Back
       </button>
     </>
+  );
+}
+
+function StepItem({ step, onOpen }: { step: WireStep; onOpen: () => void }) {
+  const { turn } = useTurnScene();
+  return (
+    <li>
+      <button type="button" className={styles.line} onClick={onOpen} disabled={step.state === 'not-needed'}>
+        <StepMark kind={step.kind} state={step.state} source={step.source} size={26} />
+        <StepWords step={step} zone={turn.zone} />
+        <span className={styles.push}>
+          <OnwardSign size={22} />
+        </span>
+      </button>
+      {step.remarks.map((remark) => (
+        <p key={remark} className={styles.remark}>
+          {remark}
+        </p>
+      ))}
+    </li>
+  );
+}
+
+/** The arrival or the departure among the steps, once it is recorded. */
+function MovementItem({
+  recordKey,
+  onGo,
+}: {
+  recordKey: 'arrival' | 'departure';
+  onGo: (place: Place) => void;
+}) {
+  const { turn, entries } = useTurnScene();
+  const record = recordOf(turn, entries, recordKey);
+  if (record === null) return null;
+  return (
+    <li>
+      <button type="button" className={styles.line} onClick={() => onGo({ kind: 'record', key: recordKey })}>
+        <StepMark kind="movement" state="done" source={record.source} size={26} />
+        <span className={styles.stepWords}>{recordLine(record, turn.zone)}</span>
+        <span className={styles.push}>
+          <OnwardSign size={22} />
+        </span>
+      </button>
+    </li>
   );
 }
 
@@ -77,26 +116,5 @@ function StepWords({ step, zone }: { step: WireStep; zone: string }) {
         {step.dueAt !== null && `, by ${formatTime(step.dueAt, zone)}`}
       </span>
     </span>
-  );
-}
-
-/** The safety briefing with everybody's agreement, which comes before a device is used in the controlling cab. */
-function Briefing({ onRecord }: { onRecord: () => void }) {
-  const { entries, turn } = useTurnScene();
-  const briefing = entries.findLast(({ kind }) => kind === 'briefing');
-  return (
-    <div className={styles.lines}>
-      {briefing === undefined ? (
-        <button type="button" className={styles.line} onClick={onRecord}>
-          Safety briefing, all agreed
-          <span className={`${styles.push} ${styles.underlined}`}>Record now</span>
-        </button>
-      ) : (
-        <p className={styles.line}>
-          Safety briefing {formatClock(briefing.observedAt, turn.zone)}
-          <span className={styles.push}>{briefing.by?.name}</span>
-        </p>
-      )}
-    </div>
   );
 }

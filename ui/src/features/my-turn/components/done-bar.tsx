@@ -1,10 +1,11 @@
-import { useEffect, useState } from 'react';
+import { useEffect, useLayoutEffect, useRef, useState } from 'react';
 import { formatClock } from '../../../lib/time-display';
 import { readDeviceClock } from '../../../lib/use-now';
 import { undoState } from '../model/done-window';
 import { UndoSign } from './phone-icons';
 import styles from './phone-foot.module.css';
 import type { Recorded } from './turn-context';
+import { nextHeadingId } from './use-places';
 
 /** How often the seconds on Undo are looked at. */
 const lookMilliseconds = 200;
@@ -24,6 +25,7 @@ export function DoneBar({ done, zone, where, onUndo, onOver }: DoneBarProps) {
   // The device's own clock: only the length of time counts here, and it must not jump when the clock is corrected.
   const [now, setNow] = useState(readDeviceClock);
   const undo = undoState(done.touchedAt, Math.max(now, done.touchedAt));
+  const words = useFocusOfBar();
 
   useEffect(() => {
     const timer = setInterval(() => setNow(readDeviceClock()), lookMilliseconds);
@@ -41,7 +43,7 @@ export function DoneBar({ done, zone, where, onUndo, onOver }: DoneBarProps) {
 
   return (
     <div className={`${styles.bar} ${styles.done}`} role="group" aria-label={done.label}>
-      <div role="status">
+      <div ref={words} tabIndex={-1}>
         <span>{done.label}</span>
         <b>Done {formatClock(done.observedAt, zone)}</b>
         <span>{where}</span>
@@ -53,4 +55,22 @@ export function DoneBar({ done, zone, where, onUndo, onOver }: DoneBarProps) {
       </button>
     </div>
   );
+}
+
+/**
+ * The bar that was touched is gone, and its focus with it: what was done takes it over, so that Undo is one Tab away.
+ * When this bar goes in turn, with the focus in it, the next act takes it.
+ */
+function useFocusOfBar() {
+  const words = useRef<HTMLDivElement>(null);
+  useLayoutEffect(() => {
+    const own = words.current;
+    if (document.activeElement === null || document.activeElement === document.body)
+      own?.focus({ preventScroll: true });
+    return () => {
+      if (own?.parentElement?.contains(document.activeElement) === true)
+        setTimeout(() => document.getElementById(nextHeadingId)?.focus({ preventScroll: true }), 0);
+    };
+  }, []);
+  return words;
 }

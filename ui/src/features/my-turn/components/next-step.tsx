@@ -5,6 +5,7 @@ import { doerLine } from '../model/act-words';
 import { actLabel, type NextAct } from '../model/next-act';
 import styles from './phone-parts.module.css';
 import { useTurnScene } from './turn-context';
+import { nextHeadingId } from './use-places';
 
 export interface NextStepProps {
   act: NextAct;
@@ -28,7 +29,7 @@ export function NextStep({ act, lead, children, hint, isBrief = false }: NextSte
   return (
     <section className={styles.next} aria-label={lead}>
       <p className="muted">{lead}</p>
-      <h2 className={styles.lead}>
+      <h2 className={styles.lead} id={nextHeadingId} tabIndex={-1}>
         {act.kind === 'step' && <StepMark kind={act.step.kind} state="due" size={30} />}
         {act.kind === 'arrival' || act.kind === 'departure' ? (
           <StepMark kind="movement" state="due" size={30} />

@@ -75,6 +75,27 @@ export const LaterSign = ({ size }: SignProps) => (
   </Sign>
 );
 
+/** The railroad's own words: a card with lines. */
+export const CardSign = ({ size }: SignProps) => (
+  <Sign size={size}>
+    <path d="M4 3h16v18H4zM8 8.500h8M8 12.500h8M8 16.500h5" />
+  </Sign>
+);
+
+/** Seen to. */
+export const DoneSign = ({ size }: SignProps) => (
+  <Sign size={size}>
+    <path strokeWidth={3} d="M4 12.500l5.500 5.500L20 6" />
+  </Sign>
+);
+
+/** Not seen to yet. */
+export const HollowSign = ({ size }: SignProps) => (
+  <Sign size={size}>
+    <path d="M4 4h16v16H4z" />
+  </Sign>
+);
+
 /** Something is open and somebody must act: the filled triangle of the board. */
 export const OpenSign = ({ size }: SignProps) => (
   <svg viewBox="0 0 24 24" width={size ?? 24} height={size ?? 24} aria-hidden="true" focusable="false">

@@ -1,9 +1,7 @@
-import { useId, useState } from 'react';
 import styles from './phone-parts.module.css';
+import { ReasonField } from './reason-field';
 import { useHeadingFocus } from './use-heading-focus';
-
-/** Longest reason the log takes. */
-const longestReason = 300;
+import { useReason } from './use-reason';
 
 export interface ReasonPlaceProps {
   title: string;
@@ -11,7 +9,7 @@ export interface ReasonPlaceProps {
   about: string;
   /** Reasons to touch. */
   reasons: readonly string[];
-  /** Words on the button that records: "Record: can’t do". */
+  /** Words on the button that records: "Withdraw it". */
   action: string;
   onReason: (reason: string) => void;
   onBack: () => void;
@@ -19,11 +17,8 @@ export interface ReasonPlaceProps {
 
 /** Asks for a reason: one touch for the usual ones, words for any other. */
 export function ReasonPlace({ title, about, reasons, action, onReason, onBack }: ReasonPlaceProps) {
-  const id = useId();
   const heading = useHeadingFocus();
-  const [chosen, setChosen] = useState<string | null>(null);
-  const [typed, setTyped] = useState('');
-  const reason = (typed.trim() === '' ? chosen : typed.trim()) ?? '';
+  const { reason, field } = useReason();
   return (
     <>
       <div>
@@ -32,33 +27,7 @@ export function ReasonPlace({ title, about, reasons, action, onReason, onBack }:
         </h1>
         <p>{about}</p>
       </div>
-      <div className={styles.choices} role="group" aria-label="Reason">
-        {reasons.map((each) => (
-          <button
-            key={each}
-            type="button"
-            className={`${styles.button} ${styles.wide}`}
-            aria-pressed={each === chosen && typed.trim() === ''}
-            onClick={() => {
-              setChosen(each);
-              setTyped('');
-            }}
-          >
-            {each}
-          </button>
-        ))}
-      </div>
-      <div className={styles.field}>
-        <label htmlFor={id}>Other, in your words</label>
-        <input
-          id={id}
-          maxLength={longestReason}
-          autoComplete="off"
-          className={styles.words}
-          value={typed}
-          onChange={(event) => setTyped(event.target.value)}
-        />
-      </div>
+      <ReasonField reasons={reasons} {...field} />
       <div className={styles.buttons}>
         <button type="button" className={styles.button} onClick={onBack}>
           Back

@@ -1,23 +1,20 @@
 import { useState } from 'react';
-import type { CrewRole } from '@stubpost/shared';
+import type { CrewRole, WireTurn } from '@stubpost/shared';
 import { CREW_WORDS } from '../model/crew-words';
+import { reliefConsequence } from '../model/relief';
+import type { ActWays } from './act-ways';
 import { Foot } from './foot';
 import styles from './phone-parts.module.css';
 import { RecordBar } from './record-bar';
+import { Standing } from './standing';
 import { TrainFacts } from './train-facts';
 import { TurnPicture } from './turn-picture';
 import { useTurnScene } from './turn-context';
 
-/** A turn the person is not on: who has it, and one bar to take it. */
-export function TakeTurn({
-  onTaken,
-  onHelp,
-  onPhone,
-}: {
-  onTaken: (role: CrewRole) => void;
-  onHelp: () => void;
-  onPhone: () => void;
-}) {
+type CrewMember = WireTurn['crew'][number];
+
+/** A turn the person is not on: who has it, and one bar to take it; from somebody else it is a relief, face to face or not. */
+export function TakeTurn({ onRecord, onHelp }: { onRecord: ActWays['onRecord']; onHelp: () => void }) {
   const { turn, me, now, marker } = useTurnScene();
   const [role, setRole] = useState<CrewRole>(me.roles[0] ?? 'conductor');
   const holder = turn.crew.find((member) => member.as === role);
@@ -25,21 +22,8 @@ export function TakeTurn({
     <>
       <div className={styles.main}>
         <TrainFacts turn={turn} now={now} marker={marker} />
-        <TurnPicture turn={turn} now={now} />
-        <section className={styles.next} aria-label="Crew">
-          <p className="muted">Crew of this turn</p>
-          <ul className={styles.lines}>
-            {(['conductor', 'engineer'] as const).map((as) => (
-              <li key={as} className={styles.line}>
-                {CREW_WORDS[as]}
-                <b className={styles.push}>
-                  {turn.crew.find((member) => member.as === as)?.name ?? 'nobody yet'}
-                </b>
-              </li>
-            ))}
-          </ul>
-          {holder !== undefined && <p>Taking it puts you in the place of {holder.name}.</p>}
-        </section>
+        {holder === undefined && <TurnPicture turn={turn} now={now} />}
+        <Crew />
         {me.roles.length > 1 && (
           <div className={styles.buttons} role="group" aria-label="As">
             {me.roles.map((each) => (
@@ -55,20 +39,94 @@ export function TakeTurn({
             ))}
           </div>
         )}
+        {holder !== undefined && (
+          <section className={styles.said} aria-label="Relief">
+            <h2>Take over from {holder.name}?</h2>
+            <p>{reliefConsequence(role)} It counts as face to face once both have said so.</p>
+            <Standing />
+          </section>
+        )}
         <button type="button" className={`${styles.button} ${styles.wide}`} onClick={onHelp}>
           Record an entry without taking it
         </button>
       </div>
-      <Foot onPhone={onPhone}>
-        <RecordBar
-          barKey={`crew:${role}`}
-          isOwnChange={me.roles.length > 1}
-          over={`As ${role}`}
-          onRecord={() => onTaken(role)}
-        >
-          I have this turn
-        </RecordBar>
+      <Foot>
+        {holder === undefined ? (
+          <TakeBar role={role} onRecord={onRecord} />
+        ) : (
+          <ReliefBars role={role} holder={holder} onRecord={onRecord} />
+        )}
       </Foot>
+    </>
+  );
+}
+
+function Crew() {
+  const { turn } = useTurnScene();
+  return (
+    <section className={styles.next} aria-labelledby="crew-of-turn">
+      <h2 id="crew-of-turn" className={styles.small}>
+        Crew of this turn
+      </h2>
+      <dl className={styles.lines}>
+        {(['conductor', 'engineer'] as const).map((as) => (
+          <div key={as} className={styles.line}>
+            <dt>{CREW_WORDS[as]}</dt>
+            <dd className={styles.push}>
+              <b>{turn.crew.find((member) => member.as === as)?.name ?? 'nobody yet'}</b>
+            </dd>
+          </div>
+        ))}
+      </dl>
+    </section>
+  );
+}
+
+interface BarProps {
+  role: CrewRole;
+  onRecord: ActWays['onRecord'];
+}
+
+function TakeBar({ role, onRecord }: BarProps) {
+  const { me } = useTurnScene();
+  return (
+    <RecordBar
+      barKey={`crew:${role}`}
+      isOwnChange={me.roles.length > 1}
+      over={`As ${role}`}
+      onRecord={() => onRecord({ kind: 'crew', person: me.id, as: role }, `I have this turn, ${role}`, null)}
+    >
+      I have this turn
+    </RecordBar>
+  );
+}
+
+function ReliefBars({ role, holder, onRecord }: BarProps & { holder: CrewMember }) {
+  const { me } = useTurnScene();
+  const takeOver = (faceToFace: boolean): void =>
+    onRecord(
+      { kind: 'relief', out: holder.personId, in: me.id, as: role, faceToFace },
+      `Took over from ${holder.name}`,
+      null,
+    );
+  return (
+    <>
+      <RecordBar
+        barKey={`away:${role}`}
+        isOwnChange={me.roles.length > 1}
+        hollow
+        onRecord={() => takeOver(false)}
+      >
+        Not face to face
+      </RecordBar>
+      <RecordBar
+        barKey={`face:${role}`}
+        isOwnChange={me.roles.length > 1}
+        hollow
+        onRecord={() => takeOver(true)}
+      >
+        Face to face
+      </RecordBar>
     </>
   );
 }

@@ -1,21 +1,10 @@
-import { useCallback, useLayoutEffect, useState } from 'react';
+import { useLayoutEffect, useRef, useState } from 'react';
+import type { EntryDraft } from '../model/entry-draft';
 import { actKey, isSettled, nextAct, type NextAct } from '../model/next-act';
 import type { ActWays } from './act-ways';
-import type { EntryToWithdraw } from './last-entry';
-import { useTurnScene, type Recorded } from './turn-context';
-import type { ActOnPage } from './use-act';
-
-/** What is on the page of a turn now. */
-export type Place =
-  | { kind: 'act' }
-  | { kind: 'second'; page: ActOnPage }
-  | { kind: 'steps' }
-  | { kind: 'cannot-do'; step: string; label: string }
-  | { kind: 'note' }
-  | { kind: 'withdraw'; entry: EntryToWithdraw }
-  | { kind: 'phone' };
-
-const undoReason = 'withdrawn by same hand';
+import type { Place } from './place';
+import { useTurnScene, type RecordOptions, type Recorded } from './turn-context';
+import { useDone } from './use-done';
 
 /** Where the person is on the page of a turn, and what each button does there. */
 export interface Places {
@@ -27,21 +16,20 @@ export interface Places {
   done: Recorded | null;
   ways: ActWays;
   toAct: () => void;
+  /** Brings a step under the bar, also out of order. */
   pick: (key: string) => void;
-  cannotDo: (step: string, label: string, reason: string) => void;
-  withdraw: (entry: EntryToWithdraw, reason: string) => void;
-  briefing: () => void;
+  /** Records without a place for Undo: what takes back or corrects is itself taken back by another entry. */
+  recordQuietly: (...acts: (RecordOptions & { draft: EntryDraft })[]) => void;
   undo: () => void;
   endUndo: () => void;
 }
 
 /** Keeps the place, the chosen step and the ten seconds of Undo. */
 export function usePlaces(): Places {
-  const { turn, steps, record } = useTurnScene();
+  const { turn, steps } = useTurnScene();
   const [chosen, setPlace] = useState<Place>({ kind: 'act' });
   const [picked, setPicked] = useState<string | null>(null);
-  const [done, setDone] = useState<Recorded | null>(null);
-  const endUndo = useCallback(() => setDone(null), []);
+  const { done, endUndo, keep, keepQuietly, undo } = useDone();
   const toAct = (): void => setPlace({ kind: 'act' });
 
   const pickedStep = turn.steps.find((step) => step.key === picked && !isSettled(step));
@@ -49,32 +37,17 @@ export function usePlaces(): Places {
   // Somebody else recorded the release meanwhile: there is nothing left for a second touch.
   const isOutdated = chosen.kind === 'second' && actKey(chosen.page.act) !== actKey(act);
   const place: Place = isOutdated ? { kind: 'act' } : chosen;
+  useTopOfPlace(`${place.kind} ${actKey(act)}`);
+  useFocusOnReturn(place);
 
-  const shownKey = `${place.kind} ${actKey(act)}`;
-  // Before the parts of the page look where they stand: a number pad may then bring itself into sight.
-  useLayoutEffect(() => {
-    window.scrollTo({ top: 0 });
-  }, [shownKey]);
-
-  const keep = (recorded: Recorded): void => {
-    setDone(recorded);
-    setPicked(null);
-    toAct();
-  };
-  const tellDesk = (note: string): void =>
-    keep(record({ kind: 'note', note }, { label: 'Note to the desk' }));
   const ways: ActWays = {
-    onRecord: (draft, label, earlier) => keep(record(draft, { label, earlier })),
-    onSecond: (page) => setPlace({ kind: 'second', page }),
-    onSteps: () => setPlace({ kind: 'steps' }),
-    onCannotDo: () => {
-      if (act.kind === 'step')
-        setPlace({ kind: 'cannot-do', step: act.step.key, label: act.step.shortLabel });
+    onRecord: (draft, label, earlier) => {
+      keep(draft, { label, earlier }, () => {
+        setPicked(null);
+        toAct();
+      });
     },
-    onNote: () => setPlace({ kind: 'note' }),
-    onTellDesk: tellDesk,
-    onWithdraw: (entry) => setPlace({ kind: 'withdraw', entry }),
-    onPhone: () => setPlace({ kind: 'phone' }),
+    onGo: setPlace,
   };
 
   return {
@@ -84,26 +57,33 @@ export function usePlaces(): Places {
     done,
     ways,
     toAct,
+    undo,
     endUndo,
     pick: (key) => {
       setPicked(key);
-      setDone(null);
+      endUndo();
       toAct();
     },
-    cannotDo: (step, label, reason) =>
-      keep(record({ kind: 'cannot-do', step, reason }, { label: `Can’t do: ${label}` })),
-    withdraw: ({ entryId, words }, reason) => {
-      record({ kind: 'withdrawn', target: entryId, reason }, { label: `Withdrawn: ${words}` });
-      toAct();
-    },
-    briefing: () => keep(record({ kind: 'briefing' }, { label: 'Safety briefing' })),
-    undo: () => {
-      if (done !== null)
-        record(
-          { kind: 'withdrawn', target: done.entryId, reason: undoReason },
-          { label: `Undo: ${done.label}` },
-        );
-      setDone(null);
-    },
+    recordQuietly: (...acts) => keepQuietly(acts, toAct),
   };
 }
+
+/** Each place begins at its top. Before the parts of the page look where they stand: a number pad may then bring itself into sight. */
+function useTopOfPlace(shownKey: string): void {
+  useLayoutEffect(() => {
+    window.scrollTo({ top: 0 });
+  }, [shownKey]);
+}
+
+/** Back on the act, the focus goes to what is next; without it the keys would begin at the top of the page again. */
+function useFocusOnReturn(place: Place): void {
+  const before = useRef<Place['kind']>('act');
+  useLayoutEffect(() => {
+    const isReturn = place.kind === 'act' && before.current !== 'act';
+    before.current = place.kind;
+    if (isReturn) document.getElementById(nextHeadingId)?.focus({ preventScroll: true });
+  }, [place.kind]);
+}
+
+/** The heading of the next act, where the focus goes when its place comes up again. */
+export const nextHeadingId = 'next-act';
