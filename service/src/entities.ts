@@ -1,6 +1,7 @@
 import { AlertRow } from './alerts/alert.entity';
 import { AlertWatchRow } from './alerts/alert-watch.entity';
 import { StepPlanRow } from './plans/step-plan.entity';
+import { DailyHeadRow } from './records/daily-head.entity';
 import { EntryRow } from './records/entry.entity';
 import { EquipmentSetRow } from './sets/equipment-set.entity';
 import { SetUnitRow } from './sets/set-unit.entity';
@@ -48,6 +49,7 @@ export const ENTITIES: EntityClass[] = [
   SetUnitRow,
   TurnRow,
   EntryRow,
+  DailyHeadRow,
   AlertRow,
   AlertWatchRow,
   // history

@@ -1,15 +1,16 @@
-import { createHash } from 'node:crypto';
 import { Injectable } from '@nestjs/common';
 import {
   type CalendarDate,
   type Instant,
   type SubjectKind,
+  columnsOf,
   noPreviousHash,
   sealEntry,
 } from '@stubpost/shared';
 import { Counters } from '../database/counters';
 import { Reader } from '../database/reader';
 import type { Transaction } from '../database/unit-of-work';
+import { sha256 } from './sha256';
 
 /** An entry on its way into the log. */
 export interface NewEntry {
@@ -48,7 +49,6 @@ interface RawEntry {
 }
 
 const readColumns = 'sequence, id, subject_id, received_at, body, hash';
-const sha256 = (text: string): string => createHash('sha256').update(text, 'utf8').digest('hex');
 
 const loggedFrom = (raw: RawEntry): LoggedEntry => ({
   sequence: raw.sequence,
@@ -68,6 +68,8 @@ export class EntryLog {
   ) {}
 
   async append(transaction: Transaction, entry: NewEntry): Promise<Seal> {
+    const columns = columnsOf(entry.body);
+    if (columns === null) throw new Error(`the body of ${entry.id} does not say what it is about`);
     const sequence = await this.counters.next(transaction, 'entry');
     const [last] = await transaction.query<{ hash: string }[]>('SELECT hash FROM entry WHERE sequence = ?', [
       sequence - 1,
@@ -81,12 +83,12 @@ export class EntryLog {
       [
         sequence,
         id,
-        entry.subject.kind,
-        entry.subject.id,
-        entry.kind,
-        entry.terminalCode,
-        entry.serviceDate,
-        entry.observedAt,
+        columns.subjectKind,
+        columns.subjectId,
+        columns.kind,
+        columns.terminalCode,
+        columns.serviceDate,
+        columns.observedAt,
         receivedAt,
         sealed.body,
         sealed.bodyHash,

@@ -9,6 +9,7 @@ import { instantColumn } from '../database/columns';
 @Unique('entry_id', ['id'])
 @Index('entry_subject', ['subjectId', 'sequence'])
 @Index('entry_day', ['terminalCode', 'serviceDate'])
+@Index('entry_received', ['receivedAt'])
 export class EntryRow {
   @PrimaryColumn({ type: 'integer' })
   sequence: number;

@@ -26,7 +26,8 @@ export interface RouteSpec {
   /** JSON body of the request; for files `multipart`. */
   request?: z.ZodType | 'multipart';
   /** JSON body of the answer; for anything else its media type. Absent where there is none. */
-  response?: z.ZodType | 'text/event-stream' | 'text/html' | 'application/x-ndjson' | 'text/csv';
+  response?:
+    z.ZodType | 'text/event-stream' | 'text/html' | 'application/x-ndjson' | 'text/csv' | 'text/javascript';
   /** Status of the answer that says yes; 200 when absent. */
   status?: 200 | 201 | 202 | 204;
   /** Refusals that callers should expect, by status, beside 400, 401 and 403. */

@@ -1,5 +1,6 @@
 import { accountRoutes } from './account-routes';
 import { historyRoutes } from './history-routes';
+import { recordRoutes } from './record-routes';
 import type { RouteSpec } from './route';
 import { timetableRoutes } from './timetable-routes';
 import { turnAreaRoutes } from './turn-routes';
@@ -13,4 +14,5 @@ export const ROUTES: readonly RouteSpec[] = [
   ...turnAreaRoutes,
   ...historyRoutes,
   ...timetableRoutes,
+  ...recordRoutes,
 ];

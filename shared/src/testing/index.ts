@@ -10,6 +10,8 @@ export {
   fixedZone,
 } from './builders';
 export { seededRandom } from './seeded-random';
+export { aSealedLog } from './sealed-log';
+export type { SealedLog, SealedLogParts } from './sealed-log';
 export { aWireTurn } from './wire-turn';
 export { aFeed, tablesOf } from './feed';
 export type { FeedParts, FeedTexts, FeedTrain } from './feed';

@@ -1,0 +1,66 @@
+import { Injectable, Logger, type OnApplicationBootstrap, type OnModuleDestroy } from '@nestjs/common';
+import { Interval } from '@nestjs/schedule';
+import { Clock } from '../common/clock';
+import { ChainCheck } from './chain-check.service';
+import { DailyHeads } from './daily-heads.service';
+
+/** Names of the timers, by which they can be stopped. */
+export const dailyHeadsTimer = 'daily-heads';
+export const chainCheckTimer = 'chain-check';
+
+const headsEveryMilliseconds = 60_000;
+/** The whole log is checked this often, and at each start. Our choice. */
+const checkEveryMilliseconds = 60 * 60_000;
+
+/** Takes the time and has the daily heads published and the chain checked. */
+@Injectable()
+export class RecordsJob implements OnApplicationBootstrap, OnModuleDestroy {
+  private readonly logger = new Logger(RecordsJob.name);
+  private isStopping = false;
+  private publishing: Promise<void> = Promise.resolve();
+
+  constructor(
+    private readonly heads: DailyHeads,
+    private readonly chain: ChainCheck,
+    private readonly clock: Clock,
+  ) {}
+
+  onApplicationBootstrap(): void {
+    void this.publish();
+    void this.check();
+  }
+
+  /** What is under way is over before the database closes. */
+  async onModuleDestroy(): Promise<void> {
+    this.isStopping = true;
+    await this.publishing;
+    await this.chain.stop();
+  }
+
+  @Interval(dailyHeadsTimer, headsEveryMilliseconds)
+  publish(): Promise<void> {
+    // One after the other: a slow one must not be overtaken by the next.
+    if (!this.isStopping) this.publishing = this.publishing.then(() => this.publishNow());
+    return this.publishing;
+  }
+
+  @Interval(chainCheckTimer, checkEveryMilliseconds)
+  async check(): Promise<void> {
+    try {
+      if (!this.isStopping) await this.chain.run();
+    } catch (error) {
+      this.logger.error(`the log could not be checked: ${stackOf(error)}`);
+    }
+  }
+
+  private async publishNow(): Promise<void> {
+    try {
+      await this.heads.publish(this.clock.now());
+    } catch (error) {
+      this.logger.error(`the daily heads could not be published: ${stackOf(error)}`);
+    }
+  }
+}
+
+const stackOf = (error: unknown): string =>
+  error instanceof Error ? (error.stack ?? error.message) : String(error);
