@@ -7,10 +7,18 @@ import { stage } from './say.mjs';
 import { Stamp } from './stamp.mjs';
 
 const PROJECTS = ['shared', 'service', 'seed'];
-const RESULTS = ['shared/dist/index.js', 'service/dist/main.js', 'seed/dist/index.js', 'ui/dist/index.html'];
+const CHECKER_CONFIG = 'service/vite.checker.config.mjs';
+const RESULTS = [
+  'shared/dist/index.js',
+  'service/dist/main.js',
+  'service/dist/check-log.mjs',
+  'seed/dist/index.js',
+  'ui/dist/index.html',
+];
 const SOURCES = [
   'package-lock.json',
   'tsconfig.base.json',
+  CHECKER_CONFIG,
   ...PROJECTS.flatMap((project) => [`${project}/src`, `${project}/package.json`, `${project}/tsconfig.json`]),
   ...['src', 'public', 'index.html', 'package.json', 'vite.config.ts'].map((path) => `ui/${path}`),
 ];
@@ -34,13 +42,22 @@ function bundle() {
   });
 }
 
+function bundleChecker() {
+  const failure = 'The checker of the log cannot be built.';
+  return runOrFail(packageCommand('vite'), ['build', '--config', CHECKER_CONFIG], {
+    cwd: ROOT,
+    env: childEnvironment(process.env),
+    failure,
+  });
+}
+
 /** Builds the service and the screens when a source has changed since the last build, or when a result is missing. */
 export async function ensureBuilt() {
   const wanted = { sources: digestOf(ROOT, SOURCES) };
   if (isThere() && stamp.matches(wanted)) return;
   stamp.clear();
   await stage('Building the service and the screens', async () => {
-    const results = await Promise.allSettled([compile(), bundle()]);
+    const results = await Promise.allSettled([compile(), bundle(), bundleChecker()]);
     const failed = results.find(({ status }) => status === 'rejected');
     if (failed !== undefined) throw failed.reason;
   });
