@@ -168,7 +168,7 @@ describe('an entry', () => {
 });
 
 describe('taking back', () => {
-  test('an own entry works until the departure', async () => {
+  test('an own entry works until the departure, and then waits for a supervisor', async () => {
     const turn = await open();
     const done = anEntryRequest('step-done', 60, { step: 'handbrake-set', reading: { count: 1 } });
     await post('conductor', turn, done);
@@ -187,8 +187,10 @@ describe('taking back', () => {
       turn,
       anEntryRequest('withdrawn', 905, { target: again.id, reason: 'other' }),
     );
-    expect(late.status).toBe(403);
-    expect(late.body).toMatchObject({ code: 'entry.after_departure' });
+    expect(late.status).toBe(201);
+    const asked = (late.body as EntryReceipt).turn;
+    expect(asked.corrections).toMatchObject([{ what: 'handbrake-set', state: 'waiting' }]);
+    expect(asked.steps.find((each) => each.key === 'handbrake-set')?.doneAt).toBe(at(70));
     const before = await post(
       'conductor',
       turn,
@@ -360,7 +362,8 @@ function permutations(items: number[]): number[][] {
 
 /** A turn without what differs from one telling of the story to the next. */
 function withoutIds(turn: WireTurn): string {
-  return JSON.stringify({ ...turn, id: '', steps: turn.steps.map((step) => ({ ...step, entryId: null })) });
+  const ids = new Set(['id', 'entryId', 'target']);
+  return JSON.stringify(turn, (key, value: unknown) => (ids.has(key) ? null : value));
 }
 
 /** JSON with sorted members, written apart from the code under test. */
