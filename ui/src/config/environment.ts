@@ -10,3 +10,8 @@ const LOCAL_HOSTS = ['localhost', '127.0.0.1', '[::1]'];
 export function pageOrigin(location: Pick<Location, 'protocol' | 'hostname'>): PageOrigin {
   return { isUnencrypted: location.protocol === 'http:' && !LOCAL_HOSTS.includes(location.hostname) };
 }
+
+declare const __BUILD_ID__: string;
+
+/** Names this build of the screens: a digest of their sources. Under test nothing is built, and there is only one. */
+export const buildId: string = typeof __BUILD_ID__ === 'string' ? __BUILD_ID__ : 'unbuilt';

@@ -1,4 +1,4 @@
-import { isErrorCode, type ErrorBody, type ErrorCode } from '@stubpost/shared';
+import { isErrorCode, personHeader, type ErrorBody, type ErrorCode } from '@stubpost/shared';
 import { noteServerTime, readDeviceClock } from './use-now';
 
 /** Codes of what can go wrong before a server of ours has answered. */
@@ -35,6 +35,8 @@ export type QueryValues = Readonly<Record<string, string | number | boolean | un
 export interface RequestOptions {
   signal?: AbortSignal;
   query?: QueryValues;
+  /** The request counts only as this person's: with somebody else signed in it is refused. */
+  asPerson?: string;
 }
 
 function address(path: string, query: QueryValues | undefined): string {
@@ -80,6 +82,7 @@ async function send(
   const askedAt = readDeviceClock();
   const headers: Record<string, string> = { accept: 'application/json' };
   if (options.type !== undefined) headers['content-type'] = options.type;
+  if (options.asPerson !== undefined) headers[personHeader] = options.asPerson;
   let response: Response;
   try {
     response = await fetch(address(path, options.query), {

@@ -17,13 +17,17 @@ const lastInstant = (turn: WireTurn): string =>
 
 const minutesBefore = 20;
 const minutesAfter = 240;
+/** Both ways, for the list of a crew. */
+const crewMinutes = 120;
 
 /** Whether a board list that was asked with `question` would hold the turn. */
 export function belongsTo(question: BoardQuestion, turn: WireTurn, now: number): boolean {
   if (question.terminal !== turn.terminal) return false;
   if (question.serviceDate !== undefined) return question.serviceDate === turn.serviceDate;
-  const from = question.from === undefined ? now - minutesBefore * 60_000 : Date.parse(question.from);
-  const to = question.to === undefined ? now + minutesAfter * 60_000 : Date.parse(question.to);
+  const [before, after] =
+    question.span === 'crew' ? [crewMinutes, crewMinutes] : [minutesBefore, minutesAfter];
+  const from = question.from === undefined ? now - before * 60_000 : Date.parse(question.from);
+  const to = question.to === undefined ? now + after * 60_000 : Date.parse(question.to);
   return Date.parse(firstInstant(turn)) < to && Date.parse(lastInstant(turn)) >= from;
 }
 

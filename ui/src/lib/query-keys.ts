@@ -4,6 +4,8 @@ export interface BoardQuestion {
   serviceDate?: string;
   from?: string;
   to?: string;
+  /** The span round now that a crew looks at; it moves with the clock, the list stays one. */
+  span?: 'crew';
 }
 
 /** What an alert list is asked for; `state` is `standing` when absent. */

@@ -8,7 +8,33 @@ import type { Instant } from '@stubpost/shared';
 let deviceClock = (): Instant => Date.now();
 
 /** What may be added to the device's clock: somewhere between these two. Unknown at first. */
-let bounds = { low: Number.NEGATIVE_INFINITY, high: Number.POSITIVE_INFINITY };
+const UNKNOWN = { low: Number.NEGATIVE_INFINITY, high: Number.POSITIVE_INFINITY };
+let bounds = UNKNOWN;
+
+/** Where the correction found last is kept, so that a phone started without a signal does not fall back to its wrong clock. */
+const place = 'stubpost.clock';
+/** Corrections nearer together than this are not written anew. */
+const worthKeepingMilliseconds = 250;
+let remembered = readKept();
+
+function readKept(): number | null {
+  try {
+    const kept = Number(localStorage.getItem(place) ?? Number.NaN);
+    return Number.isFinite(kept) ? kept : null;
+  } catch {
+    return null;
+  }
+}
+
+function keep(offset: number): void {
+  if (remembered !== null && Math.abs(remembered - offset) < worthKeepingMilliseconds) return;
+  remembered = offset;
+  try {
+    localStorage.setItem(place, String(Math.round(offset)));
+  } catch {
+    // Nothing is kept; the next start begins with the device's own clock.
+  }
+}
 
 /** The device's own clock, uncorrected: for measuring how long something took. */
 export function readDeviceClock(): Instant {
@@ -19,11 +45,16 @@ export function readDeviceClock(): Instant {
 export function replaceDeviceClock(read: () => Instant): () => void {
   const before = deviceClock;
   deviceClock = read;
-  bounds = { low: Number.NEGATIVE_INFINITY, high: Number.POSITIVE_INFINITY };
+  forgetClock();
   return () => {
     deviceClock = before;
-    bounds = { low: Number.NEGATIVE_INFINITY, high: Number.POSITIVE_INFINITY };
+    forgetClock();
   };
+}
+
+function forgetClock(): void {
+  bounds = UNKNOWN;
+  remembered = null;
 }
 
 /**
@@ -34,16 +65,31 @@ export function noteServerTime(hint: { earliest: number; latest: number }): void
   const low = Math.max(bounds.low, hint.earliest);
   const high = Math.min(bounds.high, hint.latest);
   bounds = low <= high ? { low, high } : { low: hint.earliest, high: hint.latest };
+  keep(clockOffsetMilliseconds());
 }
 
-/** Milliseconds by which the server's clock is ahead of the device's: the smallest correction the hints allow. */
+/** Whether the device's clock was compared with the server's since the page was opened. */
+export function isClockCompared(): boolean {
+  return bounds !== UNKNOWN;
+}
+
+/**
+ * Milliseconds by which the server's clock is ahead of the device's: the smallest correction the hints allow; before the
+ * first hint, the correction of the last visit.
+ */
 export function clockOffsetMilliseconds(): number {
+  if (!isClockCompared()) return remembered ?? 0;
   return Math.min(Math.max(0, bounds.low), bounds.high);
 }
 
 /** Now by the server's clock, as well as we know it. */
 export function readNow(): Instant {
   return deviceClock() + clockOffsetMilliseconds();
+}
+
+/** A moment of the device's clock, by the server's clock as well as we know it. */
+export function toServerTime(deviceTime: Instant): Instant {
+  return deviceTime + clockOffsetMilliseconds();
 }
 
 const millisecondsInTick = 1000;

@@ -1,5 +1,7 @@
 import '@testing-library/jest-dom/vitest';
+import 'fake-indexeddb/auto';
 import { cleanup, configure } from '@testing-library/react';
+import { IDBFactory } from 'fake-indexeddb';
 import { afterEach, beforeEach } from 'vitest';
 import { forgetPreferences } from '../lib/preferences';
 import { FakeEventSource } from './fake-event-source';
@@ -44,6 +46,8 @@ configure({ asyncUtilTimeout: 10_000 });
 
 beforeEach(() => {
   localStorage.clear();
+  // An empty phone for each test.
+  globalThis.indexedDB = new IDBFactory();
   forgetPreferences();
   FakeEventSource.all.length = 0;
 });

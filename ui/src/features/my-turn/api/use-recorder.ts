@@ -1,9 +1,12 @@
-import { parseInstant, type Instant } from '@stubpost/shared';
+import type { Instant } from '@stubpost/shared';
+import { useQueryClient } from '@tanstack/react-query';
 import { useCallback } from 'react';
 import { v4 as makeId } from 'uuid';
-import { clockOffsetMilliseconds, readDeviceClock, readNow } from '../../../lib/use-now';
+import type { Outbox } from '../../../lib/outbox/outbox';
+import { usePerson } from '../../../lib/session';
+import { clockOffsetMilliseconds, isClockCompared, readDeviceClock, readNow } from '../../../lib/use-now';
+import { aboutTurn } from './about-turn';
 import { requestOf, type EntryDraft } from '../model/entry-draft';
-import type { EntryQueue } from '../model/entry-queue';
 
 /** What was recorded: its id, its words, its time. */
 interface Made {
@@ -19,26 +22,45 @@ function pulse(): void {
   if ('vibrate' in navigator) navigator.vibrate(40);
 }
 
-/** Records on a turn: the entry is kept on the phone at once, with an id of its own and the time of the touch. */
-export function useRecorder(queue: EntryQueue, turnId: string) {
+/**
+ * Records on a turn: an entry with an id of its own and the time of the touch. Settles when the phone has kept it; the
+ * bar changes after that and never before.
+ */
+export function useRecorder({ add }: Pick<Outbox, 'add'>, turnId: string) {
+  const client = useQueryClient();
+  const personId = usePerson().id;
   return useCallback(
-    (draft: EntryDraft, { label, earlier = null }: { label: string; earlier?: Instant | null }): Made => {
-      const recording = {
+    async (
+      draft: EntryDraft,
+      { label, earlier = null }: { label: string; earlier?: Instant | null },
+    ): Promise<Made> => {
+      const deviceTime = readDeviceClock();
+      const now = readNow();
+      const payload = requestOf(draft, {
         id: makeId(),
-        now: readNow(),
+        now,
         earlier,
         serverAheadMilliseconds: clockOffsetMilliseconds(),
-      };
-      const request = requestOf(draft, recording);
-      queue.add({ turnId, request, label });
+      });
+      await add({
+        personId,
+        turn: turnId,
+        label,
+        about: aboutTurn(client, turnId),
+        payload,
+        deviceTime,
+        clockOffset: payload.clockOffsetMilliseconds ?? 0,
+        clockBasis: isClockCompared() ? 'compared' : 'remembered',
+        tzOffset: new Date(deviceTime).getTimezoneOffset(),
+      });
       pulse();
       return {
-        entryId: request.id,
+        entryId: payload.id,
         label,
-        observedAt: parseInstant(request.observedAt) ?? recording.now,
+        observedAt: earlier ?? now,
         touchedAt: readDeviceClock(),
       };
     },
-    [queue, turnId],
+    [add, client, personId, turnId],
   );
 }

@@ -5,7 +5,7 @@ import { stepsFor } from '@stubpost/shared';
 import { formatTimeAndRelative, toInstant } from '../../../lib/time-display';
 import { useNow } from '../../../lib/use-now';
 import { planQuery } from '../api/turn-queries';
-import type { QueueState } from '../model/entry-queue';
+import type { OutboxState } from '../../../lib/outbox/outbox';
 import { actLabel, nextAct } from '../model/next-act';
 import styles from './phone-foot.module.css';
 import { sentState } from '../model/sent-state';
@@ -16,17 +16,15 @@ export function MyTurnsFoot({
   hand,
   state,
   zone,
-  onPhone,
 }: {
   hand: WireTurn | null;
-  state: QueueState;
+  state: OutboxState;
   zone: string;
-  onPhone: () => void;
 }) {
   return (
     <div className={styles.foot}>
       {hand !== null && <OpenTurn turn={hand} />}
-      <SentStrip state={sentState(state, null)} zone={zone} onOpen={onPhone} />
+      <SentStrip state={sentState(state, null)} zone={zone} />
     </div>
   );
 }

@@ -1,14 +1,12 @@
 import type { CrewRole, SignedInPerson, WireTerminal, WireTurn } from '@stubpost/shared';
-import { useState } from 'react';
 import { Today } from '../../../components/clock';
 import { ErrorState, LoadingRows } from '../../../components/page-states';
 import { usePerson } from '../../../lib/session';
 import { dateAt, formatServiceDate } from '../../../lib/time-display';
 import { useNow } from '../../../lib/use-now';
-import { useEntryQueue } from '../api/use-entry-queue';
+import { useOutbox } from '../../../lib/outbox/use-outbox';
 import { useRecorder } from '../api/use-recorder';
 import { crewRolesAt, roleOnTurn, turnAtHand, type MyTurns } from '../model/my-turns';
-import { EntriesOnPhone } from './entries-on-phone';
 import { MyTurnsFoot } from './my-turns-foot';
 import listStyles from './my-turns.module.css';
 import styles from './phone-parts.module.css';
@@ -19,18 +17,8 @@ import { useMyTurns } from './use-my-turns';
 export function MyTurnsScreen() {
   const person = usePerson();
   const { terminals, turns, isLoading, error, retry } = useMyTurns();
-  const queue = useEntryQueue();
-  const [showsPhone, setShowsPhone] = useState(false);
+  const { state } = useOutbox();
   const zone = terminals[0]?.zone ?? 'UTC';
-  if (showsPhone) {
-    return (
-      <div className={styles.page}>
-        <div className={styles.main}>
-          <EntriesOnPhone queue={queue} state={queue.state} zone={zone} onBack={() => setShowsPhone(false)} />
-        </div>
-      </div>
-    );
-  }
   const hand = turnAtHand(turns.mine);
   return (
     <div className={styles.page}>
@@ -50,7 +38,7 @@ export function MyTurnsScreen() {
           hand={hand}
         />
       </div>
-      <MyTurnsFoot hand={hand} state={queue.state} zone={zone} onPhone={() => setShowsPhone(true)} />
+      <MyTurnsFoot hand={hand} state={state} zone={zone} />
     </div>
   );
 }
@@ -166,13 +154,13 @@ function crewNote(turn: WireTurn): string {
 /** "I have this turn" in one touch, in each job the person may have there that nobody has yet. */
 function TakeButtons({ turn }: { turn: WireTurn }) {
   const person = usePerson();
-  const record = useRecorder(useEntryQueue(), turn.id);
+  const record = useRecorder(useOutbox(), turn.id);
   const roles = crewRolesAt(person, turn.terminal).filter(
     (role) => !turn.crew.some((member) => member.as === role),
   );
   if (roleOnTurn(turn, person.id) !== null || roles.length === 0) return null;
   const take = (role: CrewRole): void => {
-    record({ kind: 'crew', person: person.id, as: role }, { label: `I have this turn, ${role}` });
+    void record({ kind: 'crew', person: person.id, as: role }, { label: `I have this turn, ${role}` });
   };
   const train = turn.outbound?.train ?? turn.inbound?.train ?? '';
   return (

@@ -1,19 +1,29 @@
+import { Link } from 'react-router-dom';
 import { formatClock } from '../../../lib/time-display';
 import type { SentState } from '../model/sent-state';
 import { OnPhoneSign, OnwardSign, OpenSign, SeenSign, SentSign } from './phone-icons';
 import styles from './phone-foot.module.css';
 
 /** Where the entries are: on the phone, sent, or seen by the desk. Neutral, never a colour: being without a signal is no fault. */
-export function SentStrip({ state, zone, onOpen }: { state: SentState; zone: string; onOpen: () => void }) {
-  const { sign, words, isWeighty } = stripWords(state, zone);
+export function SentStrip({ state, zone }: { state: SentState; zone: string }) {
   return (
-    <button type="button" className={styles.sent} onClick={onOpen}>
-      {sign}
-      {isWeighty ? <b>{words}</b> : <span>{words}</span>}
+    <Link className={styles.sent} to="/my/outbox">
+      <SentWords state={state} zone={zone} />
       <span className={styles.push}>
         <OnwardSign size={22} />
       </span>
-    </button>
+    </Link>
+  );
+}
+
+/** The sign and the words of the strip. */
+export function SentWords({ state, zone }: { state: SentState; zone: string }) {
+  const { sign, words, isWeighty } = stripWords(state, zone);
+  return (
+    <>
+      {sign}
+      {isWeighty ? <b>{words}</b> : <span>{words}</span>}
+    </>
   );
 }
 

@@ -43,7 +43,10 @@ export interface TurnScene {
   marker: string | null;
   /** When a later train with this person as its engineer came in; null when none has. */
   nextArrivalAt: Instant | null;
-  record: (draft: EntryDraft, options: RecordOptions) => Recorded;
+  /** When the service last told this turn. */
+  toldAt: Instant;
+  /** Settles when the entry is kept on the phone, not when it is sent. */
+  record: (draft: EntryDraft, options: RecordOptions) => Promise<Recorded>;
 }
 
 export const TurnSceneContext = createContext<TurnScene | null>(null);

@@ -1,11 +1,18 @@
 import { latenessSettingsOf, shippedThresholds } from '@stubpost/shared';
-import { useQuery } from '@tanstack/react-query';
+import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useEffect, useMemo } from 'react';
 import { rememberTerminal, terminalsQuery } from '../../../lib/terminal-choice';
 import { usePerson } from '../../../lib/session';
-import { useNow } from '../../../lib/use-now';
-import { entriesQuery, myBoardQuery, planQuery, settingsQuery, turnQuery } from '../api/turn-queries';
-import { useEntryQueue } from '../api/use-entry-queue';
+import { toServerTime, useNow } from '../../../lib/use-now';
+import {
+  entriesQuery,
+  myBoardQuery,
+  planQuery,
+  settingsQuery,
+  turnOnBoards,
+  turnQuery,
+} from '../api/turn-queries';
+import { useOutbox } from '../../../lib/outbox/use-outbox';
 import { useRecorder } from '../api/use-recorder';
 import { nextArrivalAsEngineer } from '../model/controls';
 import { knownTurn } from '../model/known-turn';
@@ -26,14 +33,15 @@ const noEntries: TurnScene['entries'] = [];
 export function useTurnSceneOf(turnId: string): SceneState {
   const person = usePerson();
   const now = useNow();
-  const queue = useEntryQueue();
+  const queue = useOutbox();
   const record = useRecorder(queue, turnId);
-  const turnResult = useQuery(turnQuery(turnId));
+  const client = useQueryClient();
+  const turnResult = useQuery({ ...turnQuery(turnId), ...turnOnBoards(client, turnId) });
   const told = turnResult.data;
   const planResult = useQuery({ ...planQuery(told?.planId ?? ''), enabled: told !== undefined });
   const entries = useQuery(entriesQuery(turnId)).data;
   const terminals = useQuery(terminalsQuery).data;
-  const mine = useQuery({ ...myBoardQuery(told?.terminal ?? '', now), enabled: told !== undefined }).data;
+  const mine = useQuery({ ...myBoardQuery(told?.terminal ?? ''), enabled: told !== undefined }).data;
   const thresholds = useQuery({ ...settingsQuery(told?.terminal ?? ''), enabled: told !== undefined }).data
     ?.thresholds;
   const { waiting } = queue.state;
@@ -47,12 +55,12 @@ export function useTurnSceneOf(turnId: string): SceneState {
 
   const known = useMemo(() => {
     if (told === undefined || plan === undefined) return null;
-    const own = waiting.filter((entry) => entry.turnId === turnId && entry.refusal === null);
+    const own = waiting.filter((entry) => entry.turn === turnId && entry.refusal === null);
     return knownTurn({
       turn: told,
       plan,
       entries,
-      waiting: own.map((entry) => entry.request),
+      waiting: own.map((entry) => entry.payload),
       writer: person,
     });
   }, [told, plan, entries, waiting, turnId, person]);
@@ -87,6 +95,7 @@ export function useTurnSceneOf(turnId: string): SceneState {
       me,
       marker,
       nextArrivalAt,
+      toldAt: toServerTime(turnResult.dataUpdatedAt),
       record,
     },
   };

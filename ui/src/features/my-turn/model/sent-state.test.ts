@@ -1,21 +1,10 @@
+import type { OutboxEntry } from '../../../lib/outbox/outbox-entry';
 import type { WireAlert, WireEntry } from '@stubpost/shared';
 import { at, aWireTurn, ms } from '../testing/a-wire-turn';
-import type { QueueState, WaitingEntry } from './entry-queue';
+import { anOutboxEntry, anOutboxState as queue } from '../../../testing/an-outbox';
 import { seenByDeskAt, sentState } from './sent-state';
 
-const waiting = (refusal: WaitingEntry['refusal']): WaitingEntry => ({
-  turnId: 't',
-  request: { id: 'a', kind: 'briefing', observedAt: at('17:20'), source: 'by-hand' },
-  label: 'Briefing',
-  tries: 0,
-  refusal,
-});
-const queue = (change: Partial<QueueState>): QueueState => ({
-  waiting: [],
-  failingSince: null,
-  sentAt: null,
-  ...change,
-});
+const waiting = (refusal: OutboxEntry['refusal']): OutboxEntry => anOutboxEntry({ refusal });
 const entry = (personId: string, receivedAt: string): WireEntry => ({
   sequence: 1,
   hash: 'h',

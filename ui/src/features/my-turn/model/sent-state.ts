@@ -1,5 +1,5 @@
 import { parseInstant, type Instant, type WireEntry, type WireTurn } from '@stubpost/shared';
-import type { QueueState } from './entry-queue';
+import type { OutboxState } from '../../../lib/outbox/outbox';
 
 /** The states an entry passes through, as one strip shows them for all entries of this phone. */
 export type SentState =
@@ -10,7 +10,7 @@ export type SentState =
   | { kind: 'none' };
 
 /** The one thing to say about the entries of this phone: what needs the person first, then what is not sent, then the newest. */
-export function sentState(state: QueueState, seenAt: Instant | null): SentState {
+export function sentState(state: Pick<OutboxState, 'waiting' | 'sentAt'>, seenAt: Instant | null): SentState {
   const refused = state.waiting.filter((entry) => entry.refusal !== null).length;
   if (refused > 0) return { kind: 'refused', count: refused };
   if (state.waiting.length > 0) return { kind: 'on-phone', count: state.waiting.length };
