@@ -5,6 +5,7 @@ import { PassportModule } from '@nestjs/passport';
 import { Config } from '../config/config';
 import { LinksController } from './links.controller';
 import { OneTimeLinks } from './one-time-links.service';
+import { OwnPin } from './own-pin.service';
 import { OwnSessionsReadModel } from './own-sessions.read-model';
 import { Passwords } from './passwords';
 import { SessionCache } from './session-cache';
@@ -27,6 +28,7 @@ import { SignInThrottle } from './sign-in-throttle';
     { provide: SESSION_KEY, inject: [Config], useFactory: loadSessionKey },
     { provide: APP_GUARD, useClass: SessionGuard },
     OneTimeLinks,
+    OwnPin,
     OwnSessionsReadModel,
     Passwords,
     SessionCache,

@@ -2,6 +2,9 @@ import { Body, Controller, Delete, Get, HttpCode, Param, Post, Put, Req, Res } f
 import {
   type ChangePasswordRequest,
   changePasswordSchema,
+  type ChangePinRequest,
+  changePinSchema,
+  type OwnBadge,
   type OwnSession,
   type SessionAnswer,
   type SignInRequest,
@@ -13,6 +16,7 @@ import { Refusal } from '../common/refusal';
 import type { CurrentPersonFacts } from '../common/signed-in';
 import { visitorOf } from '../common/visitor';
 import { ZodPipe } from '../common/zod.pipe';
+import { OwnPin } from './own-pin.service';
 import { OwnSessionsReadModel } from './own-sessions.read-model';
 import { SessionCookie } from './session-cookie';
 import { SessionTokens } from './session-tokens';
@@ -26,6 +30,7 @@ export class SessionController {
     private readonly signIns: SignInService,
     private readonly sessions: SessionsService,
     private readonly ownSessions: OwnSessionsReadModel,
+    private readonly ownPin: OwnPin,
     private readonly cookie: SessionCookie,
     private readonly tokens: SessionTokens,
   ) {}
@@ -73,6 +78,24 @@ export class SessionController {
   ): Promise<void> {
     const { address } = visitorOf(request);
     await this.signIns.changePassword({ personId: person.id, sessionId: person.sessionId, address }, body);
+  }
+
+  @Get('pin')
+  @Permit('session')
+  badge(@CurrentPerson() person: CurrentPersonFacts): Promise<OwnBadge> {
+    return this.ownPin.look(person.id);
+  }
+
+  @Put('pin')
+  @Permit('session')
+  @HttpCode(204)
+  async changePin(
+    @CurrentPerson() person: CurrentPersonFacts,
+    @Body(new ZodPipe(changePinSchema)) body: ChangePinRequest,
+    @Req() request: Request,
+  ): Promise<void> {
+    const { address } = visitorOf(request);
+    await this.ownPin.change({ personId: person.id, address }, body);
   }
 
   @Get('list')

@@ -1,6 +1,7 @@
 import { type ExecutionContext, Injectable } from '@nestjs/common';
 import { Reflector } from '@nestjs/core';
 import { AuthGuard } from '@nestjs/passport';
+import { personHeader } from '@stubpost/shared';
 import type { Request } from 'express';
 import { Access } from '../common/access';
 import { PERMITTED_ROUTE, PUBLIC_ROUTE, type RouteRule, type TerminalSource } from '../common/decorators';
@@ -27,6 +28,7 @@ export class SessionGuard extends AuthGuard(SESSION_STRATEGY) {
     }
     await super.canActivate(context);
     const request = context.switchToHttp().getRequest<Request & { user: CurrentPersonFacts }>();
+    requireSamePerson(request);
     this.access.require(request.user, rule.permission, terminalIn(request, rule.terminal));
     return true;
   }
@@ -36,6 +38,13 @@ export class SessionGuard extends AuthGuard(SESSION_STRATEGY) {
     if (!person) throw new Refusal({ code: 'session.missing', message: 'nobody is signed in' });
     return person;
   }
+}
+
+/** A request that says whose it is must come with that person's session, not with the next one's on a shared phone. */
+function requireSamePerson(request: Request & { user: CurrentPersonFacts }): void {
+  const expected = request.get(personHeader);
+  if (expected === undefined || expected === request.user.id) return;
+  throw new Refusal({ code: 'session.other_person', message: 'somebody else is signed in' });
 }
 
 /** The terminal's code where the rule says it stands; a request without one is refused by its parser, not here. */

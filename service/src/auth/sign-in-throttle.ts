@@ -21,7 +21,8 @@ const memory = 60 * minute;
 
 /** Who tries, and from where. */
 export interface SignInTry {
-  email: string;
+  /** The name as it was typed: an address, or `badge ` and the badge. */
+  account: string;
   address: string;
 }
 
@@ -98,7 +99,7 @@ function waitAfter(failed: number, rule: ThrottleRule): number {
 }
 
 function accountKey(attempt: SignInTry): string {
-  return hashed(`account ${attempt.email.toLowerCase()}`);
+  return hashed(`account ${attempt.account.toLowerCase()}`);
 }
 
 function addressKey(attempt: SignInTry): string {

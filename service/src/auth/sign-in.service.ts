@@ -1,5 +1,5 @@
 import { Injectable, Logger } from '@nestjs/common';
-import type { Role, SignedInPerson } from '@stubpost/shared';
+import type { Role, SignedInPerson, SignInRequest } from '@stubpost/shared';
 import { Refusal } from '../common/refusal';
 import type { Visitor } from '../common/visitor';
 import { Reader } from '../database/reader';
@@ -18,10 +18,11 @@ interface AccountRow {
   email: string;
   name: string;
   password_hash: string | null;
+  pin_hash: string | null;
   active: number | boolean;
 }
 
-/** Lets people in by address and password, and lets them change it. */
+/** Lets people in, by address or badge with a password or PIN, and lets them change the password. */
 @Injectable()
 export class SignInService {
   /** Who came in is told by id, never by name or address. */
@@ -35,14 +36,18 @@ export class SignInService {
     private readonly sessions: SessionsService,
   ) {}
 
-  async signIn(credentials: { email: string; password: string }, visitor: Visitor): Promise<SignedIn> {
-    const email = credentials.email.toLowerCase();
-    const attempt = { email, address: visitor.address };
+  async signIn(credentials: SignInRequest, visitor: Visitor): Promise<SignedIn> {
+    const name = signInNameOf(credentials);
+    const attempt = { account: name.account, address: visitor.address };
     await this.throttle.admit(attempt);
-    const [account] = await this.accountsWhere('email', email);
-    const matches = await this.passwords.verify(account?.password_hash ?? null, credentials.password);
+    const [account] = await this.accountsWhere(name.column, name.value);
+    const [kept, given] =
+      'pin' in credentials
+        ? [account?.pin_hash, credentials.pin]
+        : [account?.password_hash, credentials.password];
+    const matches = await this.passwords.verify(kept ?? null, given);
     if (account === undefined || !matches || !account.active) {
-      throw new Refusal({ code: 'session.wrong_credentials', message: 'address or password is wrong' });
+      throw new Refusal({ code: 'session.wrong_credentials', message: 'the two do not fit together' });
     }
     this.logger.log(`person ${account.id} signed in`);
     return this.unitOfWork.run(async (transaction) => {
@@ -66,7 +71,7 @@ export class SignInService {
   ): Promise<void> {
     const [account] = await this.accountsWhere('id', who.personId);
     if (account === undefined) throw new Refusal({ code: 'session.missing', message: 'nobody is signed in' });
-    const attempt = { email: account.email, address: who.address };
+    const attempt = { account: account.email, address: who.address };
     await this.throttle.admit(attempt);
     if (!(await this.passwords.verify(account.password_hash, change.current))) {
       throw new Refusal({ code: 'session.wrong_password', message: 'the current password is wrong' });
@@ -84,9 +89,9 @@ export class SignInService {
     this.logger.log(`person ${who.personId} changed their password`);
   }
 
-  private accountsWhere(column: 'id' | 'email', value: string): Promise<AccountRow[]> {
+  private accountsWhere(column: 'id' | 'email' | 'badge', value: string): Promise<AccountRow[]> {
     return this.reader.query<AccountRow>(
-      `SELECT id, email, name, password_hash, active FROM person WHERE ${column} = ?`,
+      `SELECT id, email, name, password_hash, pin_hash, active FROM person WHERE ${column} = ?`,
       [value],
     );
   }
@@ -101,4 +106,18 @@ export class SignInService {
     );
     return { id: personId, name: rows[0]?.name ?? '', roles };
   }
+}
+
+/** The name somebody signs in with: the column it is looked for in, and what its failed tries are counted under. */
+function signInNameOf(credentials: SignInRequest): {
+  column: 'email' | 'badge';
+  value: string;
+  account: string;
+} {
+  if ('email' in credentials) {
+    const email = credentials.email.toLowerCase();
+    return { column: 'email', value: email, account: email };
+  }
+  const badge = credentials.badge.toUpperCase();
+  return { column: 'badge', value: badge, account: `badge ${badge}` };
 }

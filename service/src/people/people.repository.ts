@@ -13,6 +13,7 @@ export interface NewPerson {
   email: string;
   name: string;
   passwordHash: string | null;
+  badge: string | null;
   roles: readonly RoleGrant[];
 }
 
@@ -43,6 +44,12 @@ export class PeopleRepository {
     return transaction.manager.existsBy(PersonRow, { email });
   }
 
+  /** Whether somebody else has that badge. */
+  async isBadgeTaken(transaction: Transaction, badge: string, exceptId: string | null): Promise<boolean> {
+    const holder = await transaction.manager.findOneBy(PersonRow, { badge });
+    return holder !== null && holder.id !== exceptId;
+  }
+
   isAnybodyThere(transaction: Transaction): Promise<boolean> {
     return transaction.manager.exists(PersonRow);
   }
@@ -69,6 +76,8 @@ export class PeopleRepository {
       email: person.email,
       name: person.name,
       passwordHash: person.passwordHash,
+      badge: person.badge,
+      pinHash: null,
       active: true,
       createdAt: this.clock.now(),
     });
@@ -82,6 +91,9 @@ export class PeopleRepository {
       {
         name: change.name ?? person.name,
         active: change.active ?? person.active,
+        badge: change.badge === undefined ? person.badge : change.badge,
+        // A PIN without a badge opens nothing, and one that waits for the next badge would surprise.
+        pinHash: change.badge === null ? null : person.pinHash,
         version: person.version + 1,
       },
     );

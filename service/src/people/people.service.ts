@@ -68,6 +68,7 @@ export class PeopleService {
         throw new Refusal({ code: 'people.changed', message: 'somebody changed this person meanwhile' });
       }
       if (request.roles !== undefined) await this.requireTerminals(transaction, request.roles);
+      await this.requireFreeBadge(transaction, request.badge, id);
       await this.people.update(transaction, person, request);
       await this.requireAnAdministrator(transaction);
       this.sessions.personChanges(transaction, id);
@@ -137,15 +138,31 @@ export class PeopleService {
       });
     }
     await this.requireTerminals(transaction, request.roles);
+    await this.requireFreeBadge(transaction, request.badge, null);
     const id = randomUUID();
     await this.people.insert(transaction, {
       id,
       email: request.email,
       name: request.name,
       passwordHash,
+      badge: request.badge ?? null,
       roles: request.roles,
     });
     return id;
+  }
+
+  private async requireFreeBadge(
+    transaction: Transaction,
+    badge: string | null | undefined,
+    exceptId: string | null,
+  ): Promise<void> {
+    if (badge === undefined || badge === null) return;
+    if (!(await this.people.isBadgeTaken(transaction, badge, exceptId))) return;
+    throw new Refusal({
+      code: 'people.badge_taken',
+      message: 'somebody else has this badge',
+      facts: { badge },
+    });
   }
 
   private async requireTerminals(transaction: Transaction, roles: readonly RoleGrant[]): Promise<void> {

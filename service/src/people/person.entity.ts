@@ -1,9 +1,10 @@
-import { Column, Entity, PrimaryColumn, Unique } from 'typeorm';
+import { Column, Entity, Index, PrimaryColumn, Unique } from 'typeorm';
 import { instantColumn } from '../database/columns';
 
 /** Somebody who can sign in. */
 @Entity('person')
 @Unique('person_email', ['email'])
+@Index('person_badge', ['badge'], { unique: true })
 export class PersonRow {
   @PrimaryColumn({ type: 'text' })
   id: string;
@@ -20,6 +21,13 @@ export class PersonRow {
 
   @Column({ name: 'password_hash', type: 'text', nullable: true })
   passwordHash: string | null;
+
+  /** In large letters. */
+  @Column({ type: 'text', nullable: true })
+  badge: string | null;
+
+  @Column({ name: 'pin_hash', type: 'text', nullable: true })
+  pinHash: string | null;
 
   @Column({ type: 'boolean' })
   active: boolean;

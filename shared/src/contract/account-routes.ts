@@ -13,8 +13,10 @@ import { terminalQuerySchema } from './terminals';
 import type { RouteSpec } from './route';
 import {
   changePasswordSchema,
+  changePinSchema,
   firstAdministratorSchema,
   linkSchema,
+  ownBadgeSchema,
   ownSessionSchema,
   sessionSchema,
   setupSchema,
@@ -65,6 +67,24 @@ const sessionRoutes: RouteSpec[] = [
     request: changePasswordSchema,
     status: 204,
     refusals: [429],
+  },
+  {
+    method: 'GET',
+    path: '/api/session/pin',
+    permission: 'session',
+    area: 'Signing in',
+    summary: "One's own badge, and whether there is a PIN",
+    response: ownBadgeSchema,
+  },
+  {
+    method: 'PUT',
+    path: '/api/session/pin',
+    permission: 'session',
+    area: 'Signing in',
+    summary: "Set or take away one's own PIN",
+    request: changePinSchema,
+    status: 204,
+    refusals: [409, 429],
   },
   {
     method: 'GET',

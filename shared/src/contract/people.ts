@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { ROLES } from '../access/roles';
 import { textSchema } from './primitives';
-import { emailSchema, passwordTextSchema, roleGrantSchema } from './session';
+import { badgeSchema, emailSchema, passwordTextSchema, roleGrantSchema } from './session';
 
 /** A person as an administrator sees them. */
 export const personSchema = z.object({
@@ -11,6 +11,9 @@ export const personSchema = z.object({
   name: z.string(),
   active: z.boolean(),
   hasPassword: z.boolean(),
+  /** Number to sign in with on shared phones; null where none was given out. */
+  badge: z.string().nullable(),
+  hasPin: z.boolean(),
   roles: z.array(z.object({ role: z.enum(ROLES), terminal: z.string() })),
   /** Sessions that stand now. */
   sessions: z.number().int(),
@@ -27,6 +30,7 @@ export const createPersonSchema = z.strictObject({
   email: emailSchema,
   name: textSchema(80),
   password: passwordTextSchema.optional(),
+  badge: badgeSchema.optional(),
   roles: z.array(roleGrantSchema).max(200),
 });
 export type CreatePersonRequest = z.infer<typeof createPersonSchema>;
@@ -40,6 +44,8 @@ export const updatePersonSchema = z.strictObject({
   version: z.number().int().optional(),
   name: textSchema(80).optional(),
   active: z.boolean().optional(),
+  /** Null takes the badge away, and the PIN with it. */
+  badge: badgeSchema.nullable().optional(),
   roles: z.array(roleGrantSchema).max(200).optional(),
 });
 export type UpdatePersonRequest = z.infer<typeof updatePersonSchema>;

@@ -19,12 +19,46 @@ export const emailSchema = z
   .transform((text) => text.toLowerCase())
   .pipe(z.email());
 
+/**
+ * Number on a person's badge: 2 to 12 letters, digits or dashes; small letters count as large ones. Length is our choice.
+ * Example: `c-4471` is read as `C-4471`.
+ */
+export const badgeSchema = z
+  .string()
+  .trim()
+  .transform((text) => text.toUpperCase())
+  .pipe(z.string().regex(/^[A-Z0-9][A-Z0-9-]{1,11}$/));
+
+/** Shortest and longest PIN, in digits. Our choice. */
+export const pinShortest = 4;
+export const pinLongest = 8;
+
+/** A PIN as it is typed: digits only. Whether it is too simple is judged by `judgePin`. */
+export const pinSchema = z.string().regex(new RegExp(`^\\d{${pinShortest},${pinLongest}}$`));
+
+/** Something typed where a PIN belongs; a wrong one is answered as any other wrong pair. */
+const typedPinSchema = z.string().min(1).max(40);
+const typedBadgeSchema = z.string().trim().min(1).max(40);
+
 /** Signing in. The address need not look like one: a wrong one is answered as any other wrong pair. */
-export const signInSchema = z.strictObject({
+const signInByEmailSchema = z.strictObject({
   email: z.string().trim().min(1).max(254),
   password: passwordTextSchema,
 });
+
+/** Signing in by address and password, or by badge with PIN or password, as on phones that a crew shares. */
+export const signInSchema = z.union([
+  signInByEmailSchema,
+  z.strictObject({ badge: typedBadgeSchema, pin: typedPinSchema }),
+  z.strictObject({ badge: typedBadgeSchema, password: passwordTextSchema }),
+]);
 export type SignInRequest = z.infer<typeof signInSchema>;
+
+/**
+ * Header by which a request says whose it is, as a person's id. With somebody else signed in it is refused (401
+ * `session.other_person`): an entry kept on a shared phone must never be recorded as the act of the next person.
+ */
+export const personHeader = 'stubpost-person';
 
 /** Who is signed in. */
 export const signedInPersonSchema = z.object({
@@ -44,6 +78,21 @@ export const changePasswordSchema = z.strictObject({
   password: passwordTextSchema,
 });
 export type ChangePasswordRequest = z.infer<typeof changePasswordSchema>;
+
+/** A PIN of one's own, or none; the password shows who is there. Absent for a person who has no password. */
+export const changePinSchema = z.strictObject({
+  current: passwordTextSchema.optional(),
+  pin: pinSchema.nullable(),
+});
+export type ChangePinRequest = z.infer<typeof changePinSchema>;
+
+/** One's own badge, and whether there is a PIN to go with it. */
+export const ownBadgeSchema = z.object({
+  badge: z.string().nullable(),
+  hasPin: z.boolean(),
+  hasPassword: z.boolean(),
+});
+export type OwnBadge = z.infer<typeof ownBadgeSchema>;
 
 /** One of a person's own sessions. */
 export const ownSessionSchema = z.object({

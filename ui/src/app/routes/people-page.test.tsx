@@ -18,6 +18,8 @@ function aPerson(change: Partial<WirePerson> = {}): WirePerson {
     name: 'A. Marlow',
     active: true,
     hasPassword: true,
+    badge: null,
+    hasPin: false,
     roles: [{ role: 'conductor', terminal: 'HBR' }],
     sessions: 2,
     lastSeenAt: null,

@@ -38,6 +38,8 @@ describe('finding people', () => {
     name,
     active: true,
     hasPassword: true,
+    badge: null,
+    hasPin: false,
     roles: [{ role, terminal: 'HBR' }],
     sessions: 0,
     lastSeenAt: null,
