@@ -63,6 +63,18 @@ describe('step plans of a terminal', () => {
     ]);
   });
 
+  test('carry the railroad’s own words on a step, plain and not endless', async () => {
+    const [first, ...rest] = defaultStepPlanSteps;
+    const steps = (instruction: string) => [{ ...first, instruction, inCab: true }, ...rest];
+    const answer = await put({ steps: steps('Count aloud.\nSay the cars.') });
+    expect(answer.status).toBe(201);
+    expect((answer.body as WireStepPlan).steps[0]).toMatchObject({
+      instruction: 'Count aloud.\nSay the cars.',
+      inCab: true,
+    });
+    expect((await put({ steps: steps('x'.repeat(2001)) })).status).toBe(400);
+  });
+
   test('are refused when they cannot be carried out, and to all but supervisors', async () => {
     const [first, ...rest] = defaultStepPlanSteps;
     const circle = [{ ...first, after: ['running-test'] }, ...rest];

@@ -100,6 +100,7 @@ describe('settings of a terminal', () => {
       terminal: 'HBR',
       version: 0,
       thresholds: shippedThresholds,
+      briefingRequired: false,
       changedAt: null,
       changedBy: null,
     });
@@ -120,6 +121,22 @@ describe('settings of a terminal', () => {
       changedBy: expect.stringMatching('supervisor') as string,
     });
     expect(await booted.app.get(TerminalsReadModel).thresholdsOf('HBR')).toEqual(thresholds);
+  });
+
+  test('keep the briefing that is asked for until somebody says otherwise', async () => {
+    const supervisor = await signIn(booted.app, 'supervisor', 'HBR');
+    const put = async (body: object): Promise<WireTerminalSettings> =>
+      (await supervisor.put('/api/terminals/HBR/settings').send(body).expect(200))
+        .body as WireTerminalSettings;
+    const thresholds = shippedThresholds;
+    expect(await put({ version: 0, thresholds, briefingRequired: true })).toMatchObject({
+      thresholds,
+      briefingRequired: true,
+    });
+    expect(await put({ version: 1, thresholds })).toMatchObject({ briefingRequired: true });
+    expect(await put({ version: 2, thresholds, briefingRequired: false })).toMatchObject({
+      briefingRequired: false,
+    });
   });
 
   test('changed by two at once keep the first', async () => {

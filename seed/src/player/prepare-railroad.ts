@@ -5,6 +5,7 @@ import path from 'node:path';
 import type { INestApplicationContext } from '@nestjs/common';
 import {
   Clock,
+  PlansService,
   Reader,
   SetsService,
   TerminalsService,
@@ -12,9 +13,17 @@ import {
   TimetableDays,
   TimetableImports,
 } from '@stubpost/service';
-import { addDays, railRouteTypes, type CalendarDate, type PutSetRequest } from '@stubpost/shared';
+import {
+  addDays,
+  defaultStepPlanKey,
+  defaultStepPlanName,
+  railRouteTypes,
+  type CalendarDate,
+  type PutSetRequest,
+} from '@stubpost/shared';
 import { zipSync } from 'fflate';
 import { demoTerminals, demoZone, type DemoTerminal } from '../railroad/geography';
+import { demoPlanSteps } from '../railroad/instructions';
 import { demoSets } from '../railroad/sets';
 import { demoTimetableFiles } from '../railroad/timetable-files';
 import type { Cast } from './cast';
@@ -54,6 +63,7 @@ export async function prepareRailroad(
   await describeSets(app);
   const orders = await app.get(Reader).query('SELECT 1 FROM timetable_activation LIMIT 1');
   if (orders.length > 0) return;
+  await writeInstructions(app, cast, calendar.firstDay);
   const administrator = cast.withRole('administrator')[0];
   if (administrator === undefined) throw new Error('the demo has no administrator');
   const timetableId = await importTimetable(app, calendar, administrator.name);
@@ -65,6 +75,29 @@ export async function prepareRailroad(
   await app
     .get(TimetableActivations)
     .activate(timetableId, { from: calendar.firstDay, terminals }, administrator);
+}
+
+/** Puts the railroad's own words on the steps of its plans, where nobody has made a version yet. */
+async function writeInstructions(
+  app: INestApplicationContext,
+  cast: Cast,
+  effectiveFrom: CalendarDate,
+): Promise<void> {
+  const plans = app.get(PlansService);
+  const now = app.get(Clock).now();
+  const authorName = cast.withRole('supervisor')[0]?.name;
+  if (authorName === undefined) throw new Error('the demo has no supervisor');
+  for (const { code } of demoTerminals) {
+    const known = await plans.listAt(code, now);
+    if (known.some((plan) => plan.createdBy !== null)) continue;
+    const request = {
+      key: defaultStepPlanKey,
+      name: defaultStepPlanName,
+      effectiveFrom,
+      steps: demoPlanSteps,
+    };
+    await plans.create({ terminalCode: code, request, authorName, now });
+  }
 }
 
 /** Stopping markers for trains of four cars up to what the platform holds; an example, labelled by the cars. */

@@ -1,6 +1,5 @@
 import type {
   CreateTerminalRequest,
-  TerminalThresholds,
   UpdateTerminalSettingsRequest,
   WireTerminal,
   WireTerminalSettings,
@@ -43,10 +42,8 @@ export function useChangeSettings(code: string) {
   const again = (): Promise<void> =>
     client.invalidateQueries({ queryKey: queryKeys.terminals.settings(code) });
   return useMutation({
-    mutationFn: ({ version, thresholds }: { version: number; thresholds: TerminalThresholds }) => {
-      const request: UpdateTerminalSettingsRequest = { version, thresholds };
-      return api.put<WireTerminalSettings>(at(code, 'settings'), request);
-    },
+    mutationFn: (request: UpdateTerminalSettingsRequest) =>
+      api.put<WireTerminalSettings>(at(code, 'settings'), request),
     onSuccess: again,
     onError: (problem) => (isRefusal(problem, 'settings.changed') ? again() : undefined),
   });

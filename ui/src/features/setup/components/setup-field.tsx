@@ -1,4 +1,4 @@
-import { FormGroup, HTMLSelect, InputGroup, type HTMLInputProps } from '@blueprintjs/core';
+import { FormGroup, HTMLSelect, InputGroup, TextArea, type HTMLInputProps } from '@blueprintjs/core';
 import type { ReactNode } from 'react';
 import styles from './setup.module.css';
 
@@ -73,6 +73,28 @@ export function TextField({
         {...(inputMode === undefined ? {} : { inputMode })}
         {...(type === undefined ? {} : { type })}
         {...(maxLength === undefined ? {} : { maxLength })}
+      />
+    </SetupField>
+  );
+}
+
+interface LongTextProps extends Omit<FieldProps, 'children'> {
+  value: string;
+  onChange: (text: string) => void;
+}
+
+/** Several lines of plain text. */
+export function LongTextField({ id, label, hint, problem, value, onChange }: LongTextProps) {
+  return (
+    <SetupField id={id} label={label} problem={problem} {...(hint === undefined ? {} : { hint })}>
+      <TextArea
+        id={id}
+        fill
+        rows={5}
+        value={value}
+        aria-invalid={problem !== undefined}
+        aria-describedby={`${id}-help`}
+        onChange={(event) => onChange(event.currentTarget.value)}
       />
     </SetupField>
   );

@@ -52,6 +52,7 @@ function open(person: SignedInPerson, path: string, server = new FakeServer()) {
       terminal: 'HBR',
       version: 0,
       thresholds: shippedThresholds,
+      briefingRequired: false,
       changedAt: null,
       changedBy: null,
     });
@@ -183,11 +184,13 @@ describe('thresholds', () => {
     const field = await screen.findByLabelText('No word after');
     await user.clear(field);
     await user.type(field, '5');
+    await user.click(screen.getByRole('checkbox', { name: /asks for the safety briefing/ }));
     await user.click(screen.getByRole('button', { name: 'Save' }));
     expect(await screen.findByText(/Somebody changed these settings meanwhile/)).toBeVisible();
     expect(server.sent('PUT', '/api/terminals/:code/settings')[0]?.body).toEqual({
       version: 0,
       thresholds: { ...shippedThresholds, noWordMinutes: 5 },
+      briefingRequired: true,
     });
   });
 });

@@ -1,8 +1,8 @@
 import { Button, Checkbox } from '@blueprintjs/core';
-import type { ReadingKey } from '@stubpost/shared';
+import { isInCab, longestInstruction, type ReadingKey } from '@stubpost/shared';
 import { keyFromName, type DraftProblem, type StepDraft, type StepField } from '../model/plan-draft';
 import { ANCHOR_WORDS, DOER_WORDS, KIND_WORDS, PLACE_WORDS, READING_WORDS, optionsOf } from './plan-words';
-import { SelectField, TextField } from './setup-field';
+import { LongTextField, SelectField, TextField } from './setup-field';
 import styles from './setup.module.css';
 
 export interface StepFormProps {
@@ -74,7 +74,7 @@ export function StepForm({ draft, others, problems, onChange, onMove, onRemove }
           label="Where"
           value={draft.place}
           options={optionsOf(PLACE_WORDS)}
-          onChange={(place) => onChange({ place })}
+          onChange={(place) => onChange({ place, inCab: isInCab({ place }) })}
         />
       </div>
       <div className={styles.row}>
@@ -145,7 +145,20 @@ export function StepForm({ draft, others, problems, onChange, onMove, onRemove }
       {at('holdsDeparture').problem !== undefined && (
         <p className={styles.wrong}>{at('holdsDeparture').problem}</p>
       )}
+      <Checkbox
+        id={stepFieldId(draft.id, 'inCab')}
+        checked={draft.inCab}
+        label="Recorded in the controlling cab: the briefing comes first where it is asked for"
+        onChange={() => onChange({ inCab: !draft.inCab })}
+      />
       <ReadingChoice draft={draft} onChange={(reads) => onChange({ reads })} />
+      <LongTextField
+        {...at('instruction')}
+        label="Instruction"
+        hint={`The railroad’s own words, shown on the phone with the plan’s version. Plain text, at most ${longestInstruction.toLocaleString('en-US')} characters.`}
+        value={draft.instruction}
+        onChange={(instruction) => onChange({ instruction })}
+      />
       <div className="sp-actions">
         <Button onClick={() => onMove(-1)}>Move up</Button>
         <Button onClick={() => onMove(1)}>Move down</Button>

@@ -11,7 +11,7 @@ import { draftOfThresholds, readThresholds, thresholdFields } from '../model/thr
 import { TextField } from './setup-field';
 import styles from './setup.module.css';
 
-/** What a terminal counts as late and silent. */
+/** What a terminal counts as late and silent, and what its phones ask for first. */
 export function ThresholdPart({ terminal }: { terminal: WireTerminal }) {
   const { data, error, refetch } = useQuery(settingsQuery(terminal.code));
   const [isSaved, setSaved] = useState(false);
@@ -33,6 +33,7 @@ interface FormProps {
 
 function ThresholdForm({ terminal, settings, onSaved }: FormProps) {
   const [draft, setDraft] = useState(() => draftOfThresholds(settings.thresholds));
+  const [briefingRequired, setBriefingRequired] = useState(settings.briefingRequired);
   const [summary, setSummary] = useState<FieldProblem[]>([]);
   const change = useChangeSettings(terminal.code);
   const { thresholds, problems } = readThresholds(draft);
@@ -40,7 +41,7 @@ function ThresholdForm({ terminal, settings, onSaved }: FormProps) {
     event.preventDefault();
     setSummary(problems.map(({ field, words }) => ({ fieldId: field, words })));
     if (problems.length === 0)
-      change.mutate({ version: settings.version, thresholds }, { onSuccess: onSaved });
+      change.mutate({ version: settings.version, thresholds, briefingRequired }, { onSuccess: onSaved });
   };
   return (
     <form className={`sp-panel ${styles.form}`} onSubmit={submit} noValidate aria-labelledby="thresholds">
@@ -73,6 +74,11 @@ function ThresholdForm({ terminal, settings, onSaved }: FormProps) {
         checked={draft.onTimeInclusive}
         label="A departure exactly at the threshold is on time"
         onChange={() => setDraft({ ...draft, onTimeInclusive: !draft.onTimeInclusive })}
+      />
+      <Checkbox
+        checked={briefingRequired}
+        label="The phone asks for the safety briefing before what is recorded in the controlling cab"
+        onChange={() => setBriefingRequired(!briefingRequired)}
       />
       <div className="sp-actions">
         <Button type="submit" intent="primary" loading={change.isPending}>

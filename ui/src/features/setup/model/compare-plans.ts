@@ -1,4 +1,4 @@
-import type { PlanStep, WireStepPlan } from '@stubpost/shared';
+import { isInCab, type PlanStep, type WireStepPlan } from '@stubpost/shared';
 import { formatAnchored, formatMinutes } from './minutes-text';
 
 /** One thing that differs between two versions. */
@@ -33,6 +33,8 @@ export function stepFacts(step: PlanStep): [what: string, value: string][] {
     ['Tolerance', formatMinutes(step.toleranceSeconds)],
     ['Holds the departure', yesNo(step.holdsDeparture)],
     ['Reads off', list(step.reads)],
+    ['In the controlling cab', yesNo(isInCab(step))],
+    ['Instruction', step.instruction ?? 'none'],
   ];
 }
 

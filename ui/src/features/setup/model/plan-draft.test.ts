@@ -37,6 +37,16 @@ describe('a plan being edited', () => {
     );
   });
 
+  it('keeps the railroad’s own words, and where the step is recorded only when the place does not say it', () => {
+    const [first] = readPlan(edited('handbrake-set', { instruction: ' Count aloud. ', inCab: true })).steps;
+    expect(first).toMatchObject({ instruction: 'Count aloud.', inCab: true });
+    expect(planStepSchema.safeParse(first).success).toBe(true);
+    expect(readPlan(edited('handbrake-set', { inCab: false })).steps[0]).not.toHaveProperty('inCab');
+    expect(words(edited('handbrake-set', { instruction: 'x'.repeat(2001) }))).toEqual([
+      'instruction: Instruction: at most 2000 characters.',
+    ]);
+  });
+
   it('puts each finding of the core beside its field', () => {
     expect(readPlan(edited('handbrake-set', { after: ['ends-changed'] })).problems[0]?.field).toBe('after');
     expect(readPlan(edited('handbrake-set', { short: '2:00' })).problems[0]?.field).toBe('typical');

@@ -1,5 +1,7 @@
 import {
   checkPlan,
+  isInCab,
+  longestInstruction,
   type Anchor,
   type Doer,
   type Place,
@@ -31,6 +33,10 @@ export interface StepDraft {
   tolerance: string;
   holdsDeparture: boolean;
   reads: ReadingKey[];
+  /** Recorded from the controlling cab. */
+  inCab: boolean;
+  /** Empty where the railroad has written nothing about the step. */
+  instruction: string;
 }
 
 export type StepField = Exclude<keyof StepDraft, 'id'>;
@@ -58,6 +64,8 @@ export function draftOfStep(step: PlanStep, id: string): StepDraft {
     id,
     after: [...step.after],
     reads: [...step.reads],
+    inCab: isInCab(step),
+    instruction: step.instruction ?? '',
     offset: formatMinutes(offsetSeconds),
     short: formatMinutes(shortSeconds),
     typical: formatMinutes(typicalSeconds),
@@ -87,6 +95,8 @@ export function newStepDraft(id: string): StepDraft {
     tolerance: '1:00',
     holdsDeparture: true,
     reads: [],
+    inCab: true,
+    instruction: '',
   };
 }
 
@@ -116,6 +126,8 @@ function textProblems(draft: StepDraft): DraftProblem[] {
   if (draft.shortLabel.trim() === '') problems.push(problem('shortLabel', 'Short name is missing.'));
   if (draft.shortLabel.trim().length > 30)
     problems.push(problem('shortLabel', 'Short name: at most 30 characters.'));
+  if (draft.instruction.trim().length > longestInstruction)
+    problems.push(problem('instruction', `Instruction: at most ${longestInstruction} characters.`));
   if (!keyForm.test(draft.key))
     problems.push(problem('key', 'Key: small letters, digits and dashes, a letter first.'));
   return problems;
@@ -150,7 +162,8 @@ function readTimes(draft: StepDraft): { times: Times; problems: DraftProblem[] }
 
 /** The step as it stands; where a time cannot be read it is 0, and a problem says so. */
 function stepOfDraft(draft: StepDraft, times: Times): PlanStep {
-  const { key, label, shortLabel, kind, doer, place, anchor, after, holdsDeparture, reads } = draft;
+  const { key, label, shortLabel, kind, doer, place, anchor, after, holdsDeparture, reads, inCab } = draft;
+  const instruction = draft.instruction.trim();
   return {
     key,
     label: label.trim(),
@@ -163,6 +176,8 @@ function stepOfDraft(draft: StepDraft, times: Times): PlanStep {
     holdsDeparture,
     reads,
     ...times,
+    ...(inCab === isInCab({ place }) ? {} : { inCab }),
+    ...(instruction === '' ? {} : { instruction }),
   };
 }
 
@@ -191,7 +206,9 @@ export function readPlan(drafts: readonly StepDraft[]): ReadPlan {
   const steps = read.map(({ draft, times }) => stepOfDraft(draft, times));
   const typed = read.flatMap(({ draft, problems }) => [...textProblems(draft), ...problems]);
   const unread = new Set(
-    typed.filter(({ field }) => field !== 'label' && field !== 'shortLabel').map(({ stepId }) => stepId),
+    typed
+      .filter(({ field }) => !['label', 'shortLabel', 'instruction'].includes(field ?? ''))
+      .map(({ stepId }) => stepId),
   );
   const checked = checkPlan(steps).flatMap((problem): DraftProblem[] => {
     const stepId = drafts.find((draft) => draft.key === problem.step)?.id ?? null;
