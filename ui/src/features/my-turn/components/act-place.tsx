@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { asksFrom } from '../model/asks-from';
 import { controlsBar } from '../model/controls';
 import { hasLeft, type NextAct } from '../model/next-act';
 import { ActBar } from './act-bar';
@@ -31,13 +32,17 @@ export function ActPlace(props: ActPlaceProps) {
   const page = useAct(act);
   const bar = controlsBar({ turn, steps, personId: me.id, act, now, nextArrivalAt });
   const isAfter = doneBar !== null;
+  // What others wait for stands first; the picture makes room for it.
+  const isAsked = asksFrom(turn, me.id).length > 0;
   const isShut = page.lock !== null && !page.isLockLifted;
   const hasInputs = page.fields.length > 0 && !isAfter && !isShut;
   return (
     <>
       <div className={styles.main}>
         <TrainFacts turn={turn} now={now} marker={marker} />
-        {bar === null || bar.kind === 'own-act' ? <Standing isCompact={hasInputs || page.asksTime} /> : null}
+        {bar === null || bar.kind === 'own-act' ? (
+          <Standing isCompact={hasInputs || page.asksTime || isAsked} />
+        ) : null}
         {bar !== null && !isAfter ? (
           <>
             <AtTheControls bar={bar} />

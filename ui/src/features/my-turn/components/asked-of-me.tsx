@@ -1,29 +1,28 @@
+import { asksFrom } from '../model/asks-from';
 import { labelOf } from '../model/turn-records';
 import type { ActWays } from './act-ways';
+import { OnwardSign, OpenSign } from './phone-icons';
+import styles from './phone-parts.module.css';
 import { RadioAsk } from './radio-ask';
 import { ReliefAsk } from './relief-ask';
-import { OpenSign, OnwardSign } from './phone-icons';
-import styles from './phone-parts.module.css';
 import { useTurnScene } from './turn-context';
 
-/** What others wait for this person to say: yes to a step from the radio, yes to a relief; and what is in question. */
+/** What others wait for this person to say: yes to a relief, yes to a step from the radio; and what is in question. */
 export function AskedOfMe({ ways }: { ways: ActWays }) {
   const { turn, me } = useTurnScene();
-  const isCrew = me.role !== null;
-  const asked = isCrew ? (turn.asksAgreement ?? []) : [];
-  const reliefs = (turn.reliefs ?? []).filter(({ awaits }) => awaits === me.id);
   const questions = turn.inQuestion ?? [];
   return (
     <>
-      {reliefs.map((relief) => (
-        <ReliefAsk key={relief.entryId} relief={relief} ways={ways} />
-      ))}
-      {asked.map((each) => (
-        <RadioAsk key={each.entryId} asked={each} ways={ways} />
-      ))}
+      {asksFrom(turn, me.id).map((ask) =>
+        ask.kind === 'relief' ? (
+          <ReliefAsk key={ask.relief.entryId} relief={ask.relief} ways={ways} />
+        ) : (
+          <RadioAsk key={ask.asked.entryId} asked={ask.asked} ways={ways} />
+        ),
+      )}
       {questions.length > 0 && (
         <div className={styles.lines}>
-          {questions.map(({ step, accounts }) => (
+          {questions.map(({ step }) => (
             <button
               key={step}
               type="button"
@@ -31,10 +30,7 @@ export function AskedOfMe({ ways }: { ways: ActWays }) {
               onClick={() => ways.onGo({ kind: 'record', key: step })}
             >
               <OpenSign size={22} />
-              <span className={styles.grows}>
-                {labelOf(turn, step)}: {accounts.length === 2 ? 'two times' : `${accounts.length} times`}, in
-                question
-              </span>
+              <span className={styles.grows}>{labelOf(turn, step)}: in question</span>
               <OnwardSign size={22} />
             </button>
           ))}

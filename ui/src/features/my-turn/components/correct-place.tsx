@@ -53,7 +53,9 @@ export function CorrectPlace({ record, onAsk, onBack }: CorrectPlaceProps) {
         <p>{recordLine(record, turn.zone)}. It stays in the log; a supervisor decides what counts.</p>
       </div>
       <section className={styles.choices} aria-labelledby="should-be">
-        <h2 id="should-be">What it should be</h2>
+        <h2 id="should-be" className={styles.part}>
+          What it should be
+        </h2>
         {!isNone && <ClockField label="Made at, if the time is wrong" onMoment={setMoment} />}
         {!isNone && fields.length > 0 && (
           <CorrectReading

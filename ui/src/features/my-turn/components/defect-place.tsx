@@ -12,7 +12,7 @@ import { useHeadingFocus } from './use-heading-focus';
 /** Longest note of a defect the log takes. */
 const longestNote = 1000;
 /** Stands among the cars for what is wrong with no single car. */
-const wholeSet = 'whole set';
+const wholeSet = 'Whole set';
 
 /** A bad-order report in three touches: the car, the cause, send. Words are extra. */
 export function DefectPlace({ ways, onBack }: { ways: ActWays; onBack: () => void }) {
@@ -31,7 +31,9 @@ export function DefectPlace({ ways, onBack }: { ways: ActWays; onBack: () => voi
           <p>Goes to the desk and stays with the set. What is dangerous is said by radio first.</p>
         </div>
         <section className={styles.choices} aria-labelledby="defect-car">
-          <h2 id="defect-car">Which car</h2>
+          <h2 id="defect-car" className={styles.part}>
+            Which car
+          </h2>
           <CarBoxes
             name="Cars"
             boxes={[...turn.cars, wholeSet].map((each) => ({
@@ -45,7 +47,9 @@ export function DefectPlace({ ways, onBack }: { ways: ActWays; onBack: () => voi
           />
         </section>
         <section className={styles.choices} aria-labelledby="defect-cause">
-          <h2 id="defect-cause">What is wrong</h2>
+          <h2 id="defect-cause" className={styles.part}>
+            What is wrong
+          </h2>
           <div className={styles.buttons} role="group" aria-labelledby="defect-cause">
             {DEFECT_CAUSES.map((each) => (
               <button

@@ -30,9 +30,9 @@ export function RecordPlace({ recordKey, onGo }: { recordKey: string; onGo: (pla
       </h1>
       {record === null ? <p>Nothing stands recorded here.</p> : <Facts record={record} />}
       <InQuestion step={recordKey} />
-      {step?.remarks.map((remark) => (
-        <p key={remark}>{remark}</p>
-      ))}
+      {step !== undefined &&
+        step.state !== 'in-question' &&
+        step.remarks.map((remark) => <p key={remark}>{remark}</p>)}
       <RecordCorrections recordKey={recordKey} />
       <CardLine recordKey={recordKey} onGo={onGo} />
       {record !== null && <WayBackButton record={record} onGo={onGo} />}

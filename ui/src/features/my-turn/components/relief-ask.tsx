@@ -25,10 +25,10 @@ export function ReliefAsk({
         It counts as face to face once both have said so.
       </p>
       {isIncoming && <Standing />}
-      <div className={styles.pairs}>
+      <div className={styles.choices}>
         <button
           type="button"
-          className={styles.button}
+          className={`${styles.button} ${styles.wide}`}
           onClick={() =>
             ways.onRecord({ kind: 'agreed', target: relief.entryId }, `Face to face with ${other}`, null)
           }
@@ -37,7 +37,7 @@ export function ReliefAsk({
         </button>
         <button
           type="button"
-          className={styles.button}
+          className={`${styles.button} ${styles.wide}`}
           onClick={() =>
             ways.onRecord(
               { kind: 'disagreed', target: relief.entryId, reason: 'Not face to face' },
@@ -46,7 +46,7 @@ export function ReliefAsk({
             )
           }
         >
-          No
+          No, not face to face
         </button>
       </div>
     </section>

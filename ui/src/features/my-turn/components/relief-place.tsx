@@ -85,7 +85,9 @@ function WhoTakesOver({ role, onChosen }: { role: CrewRole; onChosen: (person: C
   const found = whoFits(data ?? [], { role, typed, notId: me.id });
   return (
     <section className={styles.choices} aria-labelledby={`${id}-who`}>
-      <h2 id={`${id}-who`}>Who takes over</h2>
+      <h2 id={`${id}-who`} className={styles.part}>
+        Who takes over
+      </h2>
       <div className={styles.field}>
         <label htmlFor={id}>Name or badge</label>
         <input

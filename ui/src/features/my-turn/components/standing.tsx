@@ -19,7 +19,7 @@ export function Standing() {
       {turn.blueSignal !== null && (
         <Row name="Blue signal">up since {formatClock(turn.blueSignal.since, turn.zone)}</Row>
       )}
-      <Row name="Open">{open.length === 0 ? 'no step' : open.map((step) => step.shortLabel).join(', ')}</Row>
+      <Row name="Open">{openWords(open.map((step) => step.shortLabel))}</Row>
     </dl>
   );
 }
@@ -31,6 +31,13 @@ function Row({ name, children }: { name: string; children: ReactNode }) {
       <dd className={styles.push}>{children}</dd>
     </div>
   );
+}
+
+/** The next two open steps by name, the others by number: "Ends changed, In leaving cab and 5 more". */
+function openWords(labels: readonly string[]): string {
+  if (labels.length === 0) return 'no step';
+  const named = labels.slice(0, 2).join(', ');
+  return labels.length > 2 ? `${named} and ${labels.length - 2} more` : named;
 }
 
 /** "2 set, cars 1408 and 1412", "2 set, 1 released, car 1412 still set", "none recorded". */

@@ -25,7 +25,9 @@ export function TieUpHandbrakes({ form, onForm }: PartProps) {
   };
   return (
     <section className={styles.next} aria-labelledby="tie-up-handbrakes">
-      <h2 id="tie-up-handbrakes">Handbrakes left set</h2>
+      <h2 id="tie-up-handbrakes" className={styles.part}>
+        Handbrakes left set
+      </h2>
       <p>{recorded === null ? 'None on record.' : `On record: ${leftWords(recorded)}.`}</p>
       {turn.cars.length > 0 ? <Cars form={form} onForm={onForm} /> : <Count form={form} onForm={onForm} />}
       <div className={styles.pairs}>

@@ -54,7 +54,9 @@ export function TieUpChecks({ form, onForm }: PartProps) {
     });
   return (
     <section className={styles.next} aria-labelledby="tie-up-checks">
-      <h2 id="tie-up-checks">Seen to</h2>
+      <h2 id="tie-up-checks" className={styles.part}>
+        Seen to
+      </h2>
       <div className={styles.pairs} role="group" aria-labelledby="tie-up-checks">
         {TIE_UP_CHECKS.map((check) => {
           const isSeenTo = form.checks.includes(check);
@@ -82,7 +84,9 @@ export function TieUpDefects({ onDefect }: { onDefect: () => void }) {
   const defects = turn.defects ?? [];
   return (
     <section className={styles.next} aria-labelledby="tie-up-defects">
-      <h2 id="tie-up-defects">Defects: {defects.length === 0 ? 'none reported' : defects.length}</h2>
+      <h2 id="tie-up-defects" className={styles.part}>
+        Defects: {defects.length === 0 ? 'none reported' : defects.length}
+      </h2>
       {defects.length > 0 && (
         <ul>
           {defects.map((defect) => (
@@ -104,7 +108,9 @@ export function TieUpDefects({ onDefect }: { onDefect: () => void }) {
 export function TieUpAir({ form, onForm }: PartProps) {
   return (
     <section className={styles.next} aria-labelledby="tie-up-air">
-      <h2 id="tie-up-air">Air</h2>
+      <h2 id="tie-up-air" className={styles.part}>
+        Air
+      </h2>
       <div className={styles.pairs} role="group" aria-labelledby="tie-up-air">
         <button
           type="button"

@@ -55,7 +55,7 @@ function Facts({ tiedUp }: { tiedUp: TiedUpFacts }) {
   ];
   return (
     <>
-      <h2>
+      <h2 className={styles.part}>
         Tied up {formatClock(tiedUp.at, turn.zone)}
         {tiedUp.by === null ? '' : `, ${tiedUp.by}`}
       </h2>

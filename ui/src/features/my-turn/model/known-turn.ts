@@ -14,6 +14,7 @@ import {
   type WireStep,
   type WireTurn,
 } from '@stubpost/shared';
+import { withCrewUnderWay, withMatters } from './known-matters';
 import { asWireEntry, toEntries, type Writer } from './wire-entries';
 
 /** A turn as this phone knows it: what the service told, with the entries that are still under way put in. */
@@ -71,11 +72,11 @@ export function knownTurn({ turn, plan, entries, waiting, writer }: TurnSources)
   );
   const before = turnFrom(planned, steps, told);
   const after = own.length === 0 ? before : turnFrom(planned, steps, [...told, ...own]);
+  const facts = own.length === 0 ? turn : withFacts(turn, before, after);
+  const settled =
+    own.length === 0 || entries === undefined ? facts : withMatters(facts, after, waiting, writer);
   return {
-    turn:
-      own.length === 0
-        ? withCrew(turn, waiting, writer)
-        : withCrew(withFacts(turn, before, after), waiting, writer),
+    turn: withCrewUnderWay(settled, waiting, writer),
     steps,
     planSteps: plan.steps,
     handbrakes: entries === undefined ? null : after.handbrakes,
@@ -129,12 +130,4 @@ function withAccount(step: WireStep, before: Account | undefined, after: Account
     reading: after.reading,
     entryId: after.entryId,
   };
-}
-
-function withCrew(turn: WireTurn, waiting: readonly RecordEntryRequest[], writer: Writer): WireTurn {
-  return waiting.reduce((known, request) => {
-    if (request.kind !== 'crew' || request.person !== writer.id) return known;
-    const others = known.crew.filter((member) => member.as !== request.as);
-    return { ...known, crew: [...others, { as: request.as, personId: writer.id, name: writer.name }] };
-  }, turn);
 }

@@ -34,5 +34,5 @@ const textOf = (person: CrewMember & { badge?: string | null }): string =>
 export function reliefConsequence(role: CrewRole): string {
   return role === 'engineer'
     ? 'Not face to face asks for a Class II brake test: 49 CFR 238.317(a)(5).'
-    : 'Not face to face leaves the train without its conductor until the other one is there.';
+    : 'The relief of a conductor asks for no brake test.';
 }

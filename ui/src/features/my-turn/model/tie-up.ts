@@ -1,5 +1,5 @@
 import { rolesOf, type PlanStep, type TieUpCheck, type WireTurn } from '@stubpost/shared';
-import { carList } from './act-form';
+import { handbrakeWords } from './act-form';
 import { hasLeft, missingArrival } from './next-act';
 
 /** What the person has put in about a set that is left. Nothing stands in it before the first touch. */
@@ -59,11 +59,9 @@ export function tieUpWaitsFor(form: TieUpForm, gaps: readonly string[], reason: 
   return gaps.length > 0 && reason === '' ? 'waits for the reason' : null;
 }
 
-/** "2 handbrakes: 1408 and 1412", "1 handbrake", "no handbrake". */
-export function leftWords({ count, cars }: { count: number; cars: readonly string[] }): string {
-  if (count === 0) return 'no handbrake';
-  const words = `${count} ${count === 1 ? 'handbrake' : 'handbrakes'}`;
-  return cars.length === 0 ? words : `${words}: ${carList(cars)}`;
+/** "2 handbrakes, cars 1408 and 1412", "1 handbrake", "no handbrake". */
+export function leftWords(left: { count: number; cars: string[] }): string {
+  return left.count === 0 ? 'no handbrake' : handbrakeWords(left);
 }
 
 /**
