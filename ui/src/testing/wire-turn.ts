@@ -13,6 +13,7 @@ import {
   stepsFor,
   stepStateOf,
   turnFrom,
+  turnMattersOf,
   wireSecurementOf,
   type Entry,
   type EntryKind,
@@ -132,6 +133,7 @@ export function aWireTurn(parts: WireTurnParts, now: Instant): WireTurn {
     lastHeardAt: textOf(facts.lastHeardAt),
     findings: facts.findings.map((finding) => formatEntryFinding(finding, facts.steps, clock)),
     noteCount: facts.notes.length,
+    ...turnMattersOf(facts),
     computedAt: formatInstant(now),
   };
 }

@@ -31,6 +31,7 @@ const settings = {
     clearHoldSeconds: 10,
     clearSlackSeconds: 60,
   },
+  briefingRequired: false,
   changedAt: null,
   changedBy: null,
 };
@@ -164,23 +165,49 @@ describe('the board as a table', () => {
 });
 
 describe('acts of the desk', () => {
-  it('relay a step by radio in five keystrokes, with speaker and time', async () => {
+  it.each([
+    ['the table', '/board/VAR?view=table', () => row('1742')],
+    ['the picture', '/board/VAR', () => row('1742')],
+    [
+      'the panel',
+      '/turns/turn-1?terminal=VAR&view=table',
+      () => screen.findByRole('heading', { name: /Train 1742/ }),
+    ],
+  ])('relay a step by radio from %s in at most five keystrokes', async (_place, path, start) => {
+    const server = serverOf(world());
+    const { user } = open(server, { path });
+    const pressed: string[] = [];
+    const count = (event: KeyboardEvent): number => pressed.push(event.key);
+    document.addEventListener('keydown', count, true);
+    onTestFinished(() => document.removeEventListener('keydown', count, true));
+    (await start()).focus();
+    await user.keyboard('r');
+    const when = await screen.findByLabelText('When it happened');
+    await waitFor(() => expect(when).toHaveFocus());
+    expect(when).toHaveValue('');
+    await user.keyboard('2{Enter}');
+    await waitFor(() => expect(sentEntries(server)).toHaveLength(1));
+    expect(pressed.length).toBeLessThanOrEqual(5);
+    expect(sentEntries(server)[0]).toMatchObject({
+      kind: 'step-done',
+      step: 'cab-brake-check',
+      source: 'by-radio',
+      saidBy: 'M. Tolland',
+      observedAt: '2026-03-03T22:08:00.000Z',
+    });
+    expect(await screen.findByText(/recorded, no. 48,231/)).toBeVisible();
+    expect(screen.queryByRole('dialog', { name: 'Relay a step' })).not.toBeInTheDocument();
+  });
+
+  it('relay what happened just now with R and Enter alone', async () => {
     const server = serverOf(world());
     const { user } = open(server);
     (await row('1742')).focus();
     await user.keyboard('r');
     await waitFor(() => expect(screen.getByLabelText('When it happened')).toHaveFocus());
-    await user.keyboard('2{Enter}');
+    await user.keyboard('{Enter}');
     await waitFor(() => expect(sentEntries(server)).toHaveLength(1));
-    expect(sentEntries(server)[0]).toMatchObject({
-      kind: 'step-done',
-      step: 'cab-brake-check',
-      source: 'by-radio',
-      saidBy: 'P. Varga',
-      observedAt: '2026-03-03T22:08:00.000Z',
-    });
-    expect(await screen.findByText(/recorded, no. 48,231/)).toBeVisible();
-    expect(screen.queryByRole('dialog', { name: 'Relay a step' })).not.toBeInTheDocument();
+    expect(sentEntries(server)[0]).toMatchObject({ observedAt: new Date(now).toISOString() });
   });
 
   it('send an entry again with the same id when no answer came', async () => {
@@ -315,6 +342,47 @@ describe('the panel of a turn', () => {
     client.setQueryData(['turns', 'detail', 'turn-1'], later);
     await waitFor(() => expect(within(panel).getByText('17:08:00')).toBeInTheDocument());
     expect(screen.getByRole('textbox', { name: 'Note' })).toHaveValue('half a sen');
+  });
+
+  it('shows two accounts side by side, and records which one counts', async () => {
+    const radio = entryAt('step-done', '17:08:00', {
+      ...{ step: 'cab-brake-check', source: 'by-radio', saidBy: 'P. Varga' },
+    });
+    const twice = [...secured, entryAt('step-done', '17:06:10', { step: 'cab-brake-check' }), radio];
+    const server = serverOf(world(twice));
+    const { user } = open(server, { path: '/turns/turn-1?terminal=VAR&view=table' });
+    const block = await screen.findByRole('region', { name: 'In question' });
+    expect(block).toHaveTextContent(
+      'Two times for cab brake check: 17:06:10 by hand (M. Tolland), 17:08:00 by radio (P. Varga). Which one?',
+    );
+    await user.click(within(block).getByRole('button', { name: /17:08:00 by radio/ }));
+    await waitFor(() => expect(sentEntries(server)).toHaveLength(1));
+    expect(sentEntries(server)[0]).toMatchObject({
+      kind: 'ruled',
+      target: radio.id,
+      considered: [twice[2]?.id, radio.id],
+    });
+    expect(await screen.findByText(/Ruling recorded/)).toBeVisible();
+  });
+
+  it('asks for a correction once the train has left, old beside new', async () => {
+    const check = entryAt('step-done', '17:06:10', { step: 'cab-brake-check' });
+    const server = serverOf(world([...secured, check, entryAt('departure', '17:09:30')]));
+    const { user } = open(server, { path: '/turns/turn-1?terminal=VAR&view=table' });
+    await user.click(await screen.findByRole('button', { name: /Cab brake check, ask for correction/ }));
+    const form = await screen.findByRole('dialog', { name: 'Ask for a correction' });
+    expect(within(form).getByText('17:06:10')).toBeVisible();
+    await user.type(within(form).getByLabelText('Should be'), '1705');
+    await user.selectOptions(within(form).getByLabelText('Reason'), 'wrong time');
+    await user.click(within(form).getByRole('button', { name: 'Record' }));
+    await waitFor(() => expect(sentEntries(server)).toHaveLength(1));
+    expect(sentEntries(server)[0]).toMatchObject({
+      kind: 'corrected',
+      target: check.id,
+      observedAt: '2026-03-03T22:05:00.000Z',
+      madeAt: new Date(now).toISOString(),
+      reason: 'wrong time',
+    });
   });
 
   it('never has a time in a form when it opens', async () => {

@@ -94,6 +94,7 @@ function TerminalBoard({ terminal }: { terminal: WireTerminal }) {
             isPage={isFull}
             alerts={(turn) => <TurnAlertBar turn={turn} onSetAside={desk.onSetAside} />}
             onAct={desk.onEntry}
+            onRecorded={desk.onRecorded}
             onFullPage={() => void navigate(fullPageAddress(turnId, terminal.code), { state })}
             onClose={close}
           />

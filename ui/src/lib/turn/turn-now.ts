@@ -14,6 +14,7 @@ import {
   type WireReading,
   type WireStep,
   type WireTurn,
+  type WireTurnMatters,
 } from '@stubpost/shared';
 
 /** One step as the board draws it. */
@@ -88,6 +89,8 @@ export interface TurnNow {
   lastHeardAt: Instant | null;
   findings: readonly string[];
   noteCount: number;
+  /** What people still have to settle about the turn, and what they reported. */
+  matters: WireTurnMatters;
 }
 
 const instant = (text: string | null | undefined): Instant | null =>
@@ -154,7 +157,13 @@ export function readTurn(turn: WireTurn): TurnNow {
     lastHeardAt: instant(turn.lastHeardAt),
     findings: turn.findings,
     noteCount: turn.noteCount,
+    matters: mattersOf(turn),
   };
+}
+
+function mattersOf(turn: WireTurn): WireTurnMatters {
+  const { inQuestion, asksAgreement, corrections, defects, tiedUp, briefedBy, reliefs } = turn;
+  return { inQuestion, asksAgreement, corrections, defects, tiedUp, briefedBy, reliefs };
 }
 
 function readTimes(turn: WireTurn) {

@@ -4,41 +4,39 @@ import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { ErrorState, LoadingRows } from '../../../components/page-states';
 import { usePerson } from '../../../lib/session';
-import { clockText } from '../../../lib/turn/time-text';
 import type { TurnNow } from '../../../lib/turn/turn-now';
 import { entriesQuery } from '../../../lib/turn/turn-queries';
-import { entryWords, knownWords, withdrawnIds } from '../model/entry-words';
+import { knownWords } from '../model/entry-words';
+import { logLines, type LogLine } from '../model/log-lines';
+import { isSettled, type ChangeAct } from '../model/may-change';
+import type { EntryToChange } from './steps-table';
 import styles from './turn-panel.module.css';
 
 export interface EntryLogProps {
   turn: TurnNow;
-  /** Opens the form to take an entry back; absent for people who may not. */
-  onWithdraw?: ((entryId: string, words: string) => void) | undefined;
+  /** Opens the form to take an entry back, or to ask for its correction; absent for people who may not. */
+  onTakeBack?: ((entry: EntryToChange, act: ChangeAct) => void) | undefined;
 }
 
 const fewest = 4;
 const numbers = new Intl.NumberFormat('en-US');
 
-/** Every entry about the turn with its number in the sealed log, the latest first. What was taken back stays, struck. */
-export function EntryLog({ turn, onWithdraw }: EntryLogProps) {
+/**
+ * Every entry about the turn with its number in the sealed log, the latest first. What was taken back or corrected
+ * stays in sight, struck, beside what counts.
+ */
+export function EntryLog({ turn, onTakeBack }: EntryLogProps) {
   const { data, error, isPending, refetch } = useQuery(entriesQuery(turn.id));
   const [isWhole, setWhole] = useState(false);
-  const person = usePerson();
   const labels = new Map(turn.steps.map((step) => [step.key, step.shortLabel]));
-  const entries = [...(data ?? [])].sort((a, b) => b.sequence - a.sequence);
-  const withdrawn = withdrawnIds(entries);
-  const shown = isWhole ? entries : entries.slice(0, fewest);
-  const reach = withdrawalReach(person, turn.terminal);
-  const mayTake = (entry: WireEntry): boolean =>
-    onWithdraw !== undefined &&
-    entry.kind !== 'withdrawn' &&
-    !withdrawn.has(entry.id) &&
-    (reach === 'anyone' || (reach === 'own' && entry.by?.id === person.id));
+  const { corrections = [] } = turn.matters;
+  const lines = logLines(data ?? [], { labels, zone: turn.zone, corrections });
+  const shown = isWhole ? lines : lines.slice(0, fewest);
   return (
     <section aria-label="Log">
       <h3 className={styles.heading}>
-        Log <span className={styles.plain}>{countWords(shown.length, entries.length)}</span>
-        {entries.length > fewest && (
+        Log <span className={styles.plain}>{countWords(shown.length, lines.length)}</span>
+        {lines.length > fewest && (
           <Button
             size="small"
             className={styles.push ?? ''}
@@ -51,7 +49,7 @@ export function EntryLog({ turn, onWithdraw }: EntryLogProps) {
       </h3>
       {isPending && <LoadingRows what="entries" rows={3} rowHeight={20} />}
       {error !== null && data === undefined && <ErrorState error={error} onRetry={() => void refetch()} />}
-      {entries.length > 0 && (
+      {lines.length > 0 && (
         <table className={styles.log}>
           <caption className="unseen">Entries of this turn, the latest first</caption>
           <colgroup>
@@ -71,32 +69,70 @@ export function EntryLog({ turn, onWithdraw }: EntryLogProps) {
             </tr>
           </thead>
           <tbody>
-            {shown.map((entry) => {
-              const words = entryWords(entry, labels, turn.zone);
-              return (
-                <tr key={entry.id} className={withdrawn.has(entry.id) ? styles.struck : undefined}>
-                  <td>{clockText(Date.parse(entry.observedAt), turn.zone)}</td>
-                  <td title={words}>
-                    {words}
-                    {withdrawn.has(entry.id) && <span className="unseen">, withdrawn</span>}
-                  </td>
-                  <td title={knownWords(entry)}>{knownWords(entry)}</td>
-                  <td className={styles.number}>{numbers.format(entry.sequence)}</td>
-                  <td className={styles.take}>
-                    {mayTake(entry) && (
-                      <button type="button" onClick={() => onWithdraw?.(entry.id, words)}>
-                        Withdraw<span className="unseen"> {words}</span>
-                      </button>
-                    )}
-                  </td>
-                </tr>
-              );
-            })}
+            {shown.map((line) => (
+              <LogRow key={line.entry.id} line={line} turn={turn} onTakeBack={onTakeBack} />
+            ))}
           </tbody>
         </table>
       )}
     </section>
   );
+}
+
+function LogRow({ line, turn, onTakeBack }: EntryLogProps & { line: LogLine }) {
+  const { entry, words, isWithdrawn } = line;
+  return (
+    <tr className={isWithdrawn ? styles.struck : undefined}>
+      <td>
+        {line.time}
+        {line.replaced.map((time) => (
+          <del key={time} className={styles.replaced}>
+            <span className="unseen">, before </span>
+            {time}
+          </del>
+        ))}
+      </td>
+      <td>
+        {words}
+        {isWithdrawn && <span className="unseen">, withdrawn</span>}
+        {line.remarks.map((remark) => (
+          <span key={remark} className={styles.since}>
+            {remark}
+          </span>
+        ))}
+      </td>
+      <td title={knownWords(entry)}>{knownWords(entry)}</td>
+      <td className={styles.number}>{numbers.format(entry.sequence)}</td>
+      <td className={styles.take}>
+        <TakeBack line={line} turn={turn} onTakeBack={onTakeBack} />
+      </td>
+    </tr>
+  );
+}
+
+function TakeBack({ line, turn, onTakeBack }: EntryLogProps & { line: LogLine }) {
+  const person = usePerson();
+  const { entry, words } = line;
+  if (onTakeBack === undefined || line.isWithdrawn || isSettled(entry.kind)) return null;
+  const asks = turn.departedAt !== null && entry.kind !== 'departure';
+  const reach = withdrawalReach(person, turn.terminal);
+  const isOwn = entry.by?.id === person.id;
+  if (!asks && reach !== 'anyone' && !(reach === 'own' && isOwn)) return null;
+  const { entryId, at, reading } = changeOf(entry);
+  return (
+    <button
+      type="button"
+      onClick={() => onTakeBack({ entryId, words, at, reading }, asks ? 'corrected' : 'withdrawn')}
+    >
+      {asks ? 'Correct' : 'Withdraw'}
+      <span className="unseen"> {words}</span>
+    </button>
+  );
+}
+
+function changeOf(entry: WireEntry) {
+  const at = Date.parse(entry.observedAt ?? entry.receivedAt);
+  return { entryId: entry.id, at, reading: entry.reading ?? null };
 }
 
 function countWords(shown: number, all: number): string {

@@ -2,7 +2,6 @@ import { Checkbox, HTMLSelect, SegmentedControl } from '@blueprintjs/core';
 import { asksForCount } from '../model/entry-draft';
 import styles from './entry-dialog.module.css';
 import { Field, TextField, type EntryFieldsProps } from './entry-field';
-import { speakerOf } from './use-entry-form';
 
 /** Which step, whether it was done, and what it asks to be counted or read off. */
 export function StepFields(props: EntryFieldsProps) {
@@ -10,8 +9,7 @@ export function StepFields(props: EntryFieldsProps) {
   const plan = steps.find((step) => step.key === draft.step);
   const reads = draft.cannot ? [] : (plan?.reads ?? []);
   const isCounted = reads.includes('count') || reads.includes('cars');
-  const choose = (key: string): void =>
-    onChange({ step: key, cars: [], count: '', saidBy: speakerOf(turn, props.target, key) });
+  const choose = (key: string): void => onChange({ step: key, cars: [], count: '' });
   return (
     <>
       <Field {...props} field="step" label="Step">

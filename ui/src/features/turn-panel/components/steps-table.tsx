@@ -1,3 +1,4 @@
+import type { Instant, WireReading } from '@stubpost/shared';
 import { Fragment } from 'react';
 import { StepMark } from '../../../components/step-mark';
 import { stepWords } from '../../../lib/turn/step-words';
@@ -9,17 +10,25 @@ export interface StepsTableProps {
   turn: TurnNow;
   /** Opens the form for an open step; absent for people who may not record. */
   onRelay?: ((stepKey: string) => void) | undefined;
-  /** Opens the form to take a record back; absent for people who may not. */
-  onWithdraw?: ((entryId: string, words: string) => void) | undefined;
+  /** Opens the form to take a record back or to ask for its correction; absent for people who may not. */
+  onTakeBack?: ((entry: EntryToChange) => void) | undefined;
+}
+
+/** An entry that a form is to take back or to correct. */
+export interface EntryToChange {
+  entryId: string;
+  words: string;
+  at: Instant;
+  reading: WireReading | null;
 }
 
 /** Steps of the turn: due, latest, done, how known. The name of a step opens what can be done about it. */
-export function StepsTable({ turn, onRelay, onWithdraw }: StepsTableProps) {
+export function StepsTable({ turn, onRelay, onTakeBack }: StepsTableProps) {
   const act = (row: StepRow): (() => void) | undefined => {
     const { step } = row;
-    const { entryId } = step;
-    if (step.doneAt !== null && entryId !== null && onWithdraw !== undefined) {
-      return () => onWithdraw(entryId, stepWords(step, turn.zone));
+    const { entryId, doneAt: at, reading } = step;
+    if (at !== null && entryId !== null && onTakeBack !== undefined) {
+      return () => onTakeBack({ entryId, words: stepWords(step, turn.zone), at, reading });
     }
     if (step.doneAt !== null || onRelay === undefined || turn.annulled !== null) return undefined;
     return () => onRelay(step.key);
@@ -58,7 +67,7 @@ export function StepsTable({ turn, onRelay, onWithdraw }: StepsTableProps) {
           </tr>
           {group.rows.map((row) => (
             <Fragment key={row.step.key}>
-              <StepTableRow row={row} onAct={act(row)} />
+              <StepTableRow row={row} hasLeft={turn.departedAt !== null} onAct={act(row)} />
               {row.remarks.map((remark) => (
                 <tr key={remark} className={styles.remark}>
                   <td colSpan={5}>{remark}</td>
@@ -72,9 +81,17 @@ export function StepsTable({ turn, onRelay, onWithdraw }: StepsTableProps) {
   );
 }
 
-function StepTableRow({ row, onAct }: { row: StepRow; onAct: (() => void) | undefined }) {
+interface RowProps {
+  row: StepRow;
+  /** The train has left, so that its record changes only with a supervisor's yes. */
+  hasLeft: boolean;
+  onAct: (() => void) | undefined;
+}
+
+function StepTableRow({ row, hasLeft, onAct }: RowProps) {
   const { step } = row;
-  const verb = step.doneAt === null ? 'Relay' : 'Withdraw';
+  const takeBack = hasLeft ? 'Ask for correction' : 'Withdraw';
+  const verb = step.doneAt === null ? 'Relay' : takeBack;
   return (
     <tr className={row.isNext ? styles.next : undefined}>
       <th scope="row">

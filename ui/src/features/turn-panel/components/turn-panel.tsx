@@ -1,5 +1,5 @@
 import { Button } from '@blueprintjs/core';
-import type { WireTerminal } from '@stubpost/shared';
+import { mayRecord, type EntryKind, type WireTerminal } from '@stubpost/shared';
 import { useQuery } from '@tanstack/react-query';
 import { useEffect, useId, useRef, type KeyboardEvent, type ReactNode } from 'react';
 import { SafetyCaution } from '../../../components/caution';
@@ -18,9 +18,12 @@ import { EntryLog } from './entry-log';
 import { PanelHead } from './panel-head';
 import { SqueezePicture } from './squeeze-picture';
 import { StandPicture } from './stand-picture';
-import { StepsTable } from './steps-table';
+import { QuestionBlock } from './question-block';
+import { Reported } from './reported';
+import { StepsTable, type EntryToChange } from './steps-table';
 import { ForecastWords, TurnFacts } from './turn-facts';
 import styles from './turn-panel.module.css';
+import type { Recorded } from './use-entry-form';
 
 export interface TurnPanelProps {
   turnId: string;
@@ -30,6 +33,8 @@ export interface TurnPanelProps {
   /** Standing alerts of the turn, as another part of the page draws them. */
   alerts?: (turn: TurnNow) => ReactNode;
   onAct: (target: ActTarget) => void;
+  /** A ruling was recorded. */
+  onRecorded: (recorded: Recorded) => void;
   onFullPage: () => void;
   onClose: () => void;
 }
@@ -91,15 +96,21 @@ function PanelBody(props: TurnPanelProps & { turn: TurnNow; titleId: string }) {
   const now = useNow();
   const person = usePerson();
   const acts = actsOf(person, terminal.code);
+  const may = (kind: EntryKind): boolean => mayRecord(person, kind, terminal.code);
   const { data: plan } = useQuery(planQuery(turn.planId));
   const typicalOf = (key: string): number =>
     plan?.steps.find((step) => step.key === key)?.typicalSeconds ?? 0;
   const squeeze = plan === undefined ? null : squeezeOf(turn, typicalOf, now);
   const open = (act: EntryAct, rest: Partial<ActTarget> = {}): void =>
     props.onAct({ act, turnId: turn.id, ...rest });
-  const withdraw = acts.has('withdrawn')
-    ? (entryId: string, entryWords: string) => open('withdrawn', { entryId, entryWords })
-    : undefined;
+  const takeBack = (entry: EntryToChange, act: 'withdrawn' | 'corrected'): void =>
+    open(act, {
+      entryId: entry.entryId,
+      entryWords: entry.words,
+      entryAt: entry.at,
+      entryReading: entry.reading,
+    });
+  const mayChange = acts.has('withdrawn') && acts.has('corrected');
   return (
     <>
       <PanelHead
@@ -110,6 +121,7 @@ function PanelBody(props: TurnPanelProps & { turn: TurnNow; titleId: string }) {
         onClose={props.onClose}
       />
       {props.alerts?.(turn)}
+      <QuestionBlock turn={turn} mayRule={may('ruled')} onRecorded={props.onRecorded} />
       <div className={styles.body}>
         <div className={styles.left}>
           {squeeze !== null && (
@@ -143,16 +155,21 @@ function PanelBody(props: TurnPanelProps & { turn: TurnNow; titleId: string }) {
               <StepsTable
                 turn={turn}
                 onRelay={acts.has('step') ? (step) => open('step', { step }) : undefined}
-                onWithdraw={withdraw}
+                onTakeBack={
+                  mayChange
+                    ? (entry) => takeBack(entry, turn.departedAt === null ? 'withdrawn' : 'corrected')
+                    : undefined
+                }
               />
             )}
           </section>
-          <EntryLog turn={turn} onWithdraw={withdraw} />
+          <EntryLog turn={turn} onTakeBack={mayChange ? takeBack : undefined} />
         </div>
         <div className={styles.right}>
           <ForecastWords turn={turn} now={now} />
           <TurnFacts turn={turn} now={now} acts={acts} onAct={open} />
-          <Findings findings={turn.findings} />
+          <Reported turn={turn} />
+          <Findings findings={turn.findings.filter(isFinding)} />
         </div>
       </div>
       <footer className={styles.foot}>
@@ -164,6 +181,9 @@ function PanelBody(props: TurnPanelProps & { turn: TurnNow; titleId: string }) {
     </>
   );
 }
+
+/** What is in question stands in a block of its own, with the choice. */
+const isFinding = (finding: string): boolean => !finding.endsWith('Which one?');
 
 /** What is wrong with the entries, in words. Nothing where nothing is. */
 function Findings({ findings }: { findings: readonly string[] }) {

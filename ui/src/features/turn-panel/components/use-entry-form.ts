@@ -86,19 +86,12 @@ function firstDraft(target: ActTarget, turn: TurnNow, person: ReturnType<typeof 
   const as = target.as ?? 'conductor';
   const source = usualSource(person, turn.terminal, target.act);
   const holder = turn.crew.find((member) => member.as === as);
-  const draft = emptyDraft(
-    { ...target, step },
-    source,
-    isWitnessed(target.act) ? speakerOf(turn, target, step) : '',
-  );
+  const draft = emptyDraft({ ...target, step }, source, isWitnessed(target.act) ? speakerOf(turn) : '');
   return { ...draft, as, out: target.act === 'relief' ? (holder?.personId ?? '') : '' };
 }
 
-/** Who most likely speaks on the radio: the one who does the step, else the conductor. It can be changed. */
-export function speakerOf(turn: TurnNow, target: Pick<ActTarget, 'act'>, stepKey: string | null): string {
-  const step = target.act === 'step' ? turn.steps.find((one) => one.key === stepKey) : undefined;
-  const speaker =
-    turn.crew.find((member) => member.as === step?.doer) ??
-    turn.crew.find((member) => member.as === 'conductor');
-  return speaker?.name ?? turn.crew[0]?.name ?? '';
+/** Who most likely speaks on the radio: the conductor, who tells of everybody's steps. It can be changed. */
+export function speakerOf(turn: TurnNow): string {
+  const conductor = turn.crew.find((member) => member.as === 'conductor');
+  return conductor?.name ?? turn.crew[0]?.name ?? '';
 }

@@ -34,7 +34,7 @@ export function SourceFields(props: EntryFieldsProps) {
 
 const sentence = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 
-const namedFirst = ['expected-arrival', 'hold', 'track', 'set', 'crew', 'relief', 'annulled', 'withdrawn'];
+const namedFirst = ['expected-arrival', 'hold', 'track', 'set', 'crew', 'relief', 'annulled'];
 
 /** When it happened, on the terminal's clock. Empty means now; no time stands in it by itself. */
 export function WhenField(props: EntryFieldsProps) {

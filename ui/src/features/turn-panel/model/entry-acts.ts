@@ -3,7 +3,9 @@ import {
   rolesAt,
   type EntryKind,
   type EntrySource,
+  type Instant,
   type PersonAccess,
+  type WireReading,
 } from '@stubpost/shared';
 
 /** What can be entered about a turn; each has a form. */
@@ -21,6 +23,7 @@ export const ENTRY_ACTS = [
   'blue-signal-down',
   'annulled',
   'withdrawn',
+  'corrected',
   'note',
 ] as const;
 export type EntryAct = (typeof ENTRY_ACTS)[number];
@@ -31,9 +34,11 @@ export interface ActTarget {
   turnId: string;
   /** Step that is chosen at first. */
   step?: string | null;
-  /** Entry to take back, and what it says. */
+  /** Entry to take back or to correct, what it says, when it was and what was read off. */
   entryId?: string;
   entryWords?: string;
+  entryAt?: Instant;
+  entryReading?: WireReading | null;
   /** Job whose holder changes. */
   as?: 'conductor' | 'engineer';
 }
@@ -52,6 +57,7 @@ export const actTitles: Record<EntryAct, string> = {
   'blue-signal-down': 'Take down blue signal',
   annulled: 'Annul the turn',
   withdrawn: 'Withdraw an entry',
+  corrected: 'Ask for a correction',
   note: 'Note',
 };
 
@@ -74,6 +80,13 @@ export const entryNouns: Record<EntryKind, string> = {
   'blue-signal-up': 'Blue signal up',
   'blue-signal-down': 'Blue signal down',
   note: 'Note',
+  agreed: 'Agreement',
+  disagreed: 'Objection',
+  ruled: 'Ruling',
+  'correction-approved': 'Approval',
+  'correction-declined': 'Refusal',
+  defect: 'Bad-order report',
+  'tied-up': 'Tie-up',
 };
 
 const kindsOfAct: Record<EntryAct, readonly EntryKind[]> = {
@@ -90,6 +103,7 @@ const kindsOfAct: Record<EntryAct, readonly EntryKind[]> = {
   'blue-signal-down': ['blue-signal-down'],
   annulled: ['annulled'],
   withdrawn: ['withdrawn'],
+  corrected: ['corrected'],
   note: ['note'],
 };
 

@@ -42,7 +42,20 @@ const good: [ActTarget['act'], Partial<EntryDraft>, object][] = [
   ['blue-signal-up', {}, { kind: 'blue-signal-up' }],
   ['blue-signal-down', {}, { kind: 'blue-signal-down' }],
   ['note', { note: 'door 3 slow' }, { note: 'door 3 slow' }],
-  ['withdrawn', { reason: 'wrong train' }, { kind: 'withdrawn', reason: 'wrong train' }],
+  ['withdrawn', { why: 'wrong train' }, { kind: 'withdrawn', reason: 'wrong train' }],
+  ['withdrawn', { why: 'other', reason: 'not ours' }, { reason: 'not ours' }],
+  [
+    'corrected',
+    { newTime: '17:22:10', why: 'wrong time', reason: 'misread' },
+    {
+      kind: 'corrected',
+      observedAt: iso('17:22:10'),
+      madeAt: iso('17:26:40'),
+      reason: 'wrong time: misread',
+    },
+  ],
+  ['corrected', { count: '2', why: 'other', reason: 'counted again' }, { reading: { count: 2 } }],
+  ['corrected', { takesBack: true, why: 'wrong step' }, { kind: 'withdrawn', reason: 'wrong step' }],
 ];
 
 describe('a form read into an entry', () => {
@@ -72,6 +85,11 @@ describe('a form read into an entry', () => {
     ['annulled', { reason: '  ' }, ['reason']],
     ['relief', {}, ['out']],
     ['note', {}, ['note']],
+    ['withdrawn', {}, ['why']],
+    ['withdrawn', { why: 'other' }, ['reason']],
+    ['corrected', { why: 'wrong time' }, ['newTime']],
+    ['corrected', { why: 'wrong time', newTime: 'soon' }, ['newTime']],
+    ['corrected', { why: 'wrong time', newTime: '17:40' }, ['newTime']],
   ])('of %s %j asks for %j', (act, change, fields) => {
     const result = read(act, change);
     expect(result.ok ? [] : result.faults.map((fault) => fault.field)).toEqual(fields);
@@ -79,6 +97,6 @@ describe('a form read into an entry', () => {
 
   it('opens with no time in it', () => {
     const draft = emptyDraft({ act: 'arrival', turnId: 't' }, 'by-radio', '');
-    expect([draft.when, draft.ahead]).toEqual(['', '']);
+    expect([draft.when, draft.ahead, draft.newTime]).toEqual(['', '', '']);
   });
 });

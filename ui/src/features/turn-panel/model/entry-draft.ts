@@ -6,7 +6,9 @@ import {
   type RecordEntryRequest,
   type WireReading,
 } from '@stubpost/shared';
+import { nearestInstantOfTime, readTimeOfDay } from '../../../lib/time-entry';
 import type { ActTarget, EntryAct } from './entry-acts';
+import { reasonText, type Why } from './why';
 import { readAhead, readWhen } from './when';
 
 /** Fields of the forms, as typed. Each form shows some of them. No time in it comes from the plan. */
@@ -34,6 +36,12 @@ export interface EntryDraft {
   out: string;
   faceToFace: boolean;
   note: string;
+  /** Why an entry is taken back or corrected; `reason` holds further words. */
+  why: Why | '';
+  /** A correction takes the entry back, instead of saying what it should have said. */
+  takesBack: boolean;
+  /** The time that should have been recorded. */
+  newTime: string;
 }
 
 export type DraftField = keyof EntryDraft;
@@ -82,6 +90,9 @@ export function emptyDraft(target: ActTarget, source: EntrySource, saidBy: strin
     out: '',
     faceToFace: false,
     note: '',
+    why: '',
+    takesBack: false,
+    newTime: '',
   };
 }
 
@@ -94,14 +105,19 @@ export function readDraft(draft: EntryDraft, context: DraftContext): DraftResult
   if (faults.length > 0 || content === null || !when.ok) return { ok: false, faults };
   const saidBy = draft.saidBy.trim();
   const base = {
-    observedAt: formatInstant(when.at),
     source: draft.source,
     ...(draft.source === 'by-radio' && saidBy !== '' ? { saidBy } : {}),
   };
-  return { ok: true, body: { ...base, ...content } };
+  const at = formatInstant(when.at);
+  if (content.kind === 'corrected') return { ok: true, body: { ...base, madeAt: at, ...content } };
+  return { ok: true, body: { ...base, observedAt: at, ...content } };
 }
 
-type Content = DistributiveOmit<EntryBody, 'observedAt' | 'source' | 'saidBy' | 'clockOffsetMilliseconds'>;
+type Common = 'source' | 'saidBy' | 'clockOffsetMilliseconds';
+type Correction = Extract<EntryBody, { kind: 'corrected' }>;
+type Content =
+  | DistributiveOmit<Exclude<EntryBody, Correction>, Common | 'observedAt'>
+  | Omit<Correction, Common | 'madeAt'>;
 
 function contentOf(draft: EntryDraft, context: DraftContext, faults: DraftFault[]): Content | null {
   const asked = (field: DraftField, text: string, words: string): string => {
@@ -133,7 +149,9 @@ function contentOf(draft: EntryDraft, context: DraftContext, faults: DraftFault[
     case 'annulled':
       return { kind: 'annulled', reason: reason() };
     case 'withdrawn':
-      return { kind: 'withdrawn', target: context.target.entryId ?? '', reason: reason() };
+      return { kind: 'withdrawn', target: context.target.entryId ?? '', reason: whyOf(draft, faults) };
+    case 'corrected':
+      return correctionContent(draft, context, faults);
     case 'note':
       return { kind: 'note', note: asked('note', draft.note, 'Write the note') };
     case 'crew':
@@ -147,6 +165,49 @@ function contentOf(draft: EntryDraft, context: DraftContext, faults: DraftFault[
         faceToFace: draft.person.trim() !== '' && draft.faceToFace,
       };
   }
+}
+
+/** The reason chosen, with the words that go with it; *other* says nothing without words. */
+function whyOf({ why, reason }: EntryDraft, faults: DraftFault[]): string {
+  if (why === '') faults.push({ field: 'why', words: 'Choose the reason' });
+  else if (why === 'other' && reason.trim() === '') faults.push({ field: 'reason', words: 'Say why' });
+  return why === '' ? '' : reasonText(why, reason);
+}
+
+/** What should have been recorded: another time, another count, or nothing at all. */
+function correctionContent(draft: EntryDraft, context: DraftContext, faults: DraftFault[]): Content {
+  const { entryId: target = '', entryAt, entryReading } = context.target;
+  const reason = whyOf(draft, faults);
+  if (draft.takesBack) return { kind: 'withdrawn', target, reason };
+  const at = newTimeOf(draft, entryAt ?? context.now, context, faults);
+  const count = numberIn(draft, 'count', faults, true);
+  if (at === null && count === null && faults.length === 0) {
+    faults.push({ field: 'newTime', words: 'Give what should have been recorded' });
+  }
+  return {
+    kind: 'corrected',
+    target,
+    ...(at === null ? {} : { observedAt: formatInstant(at) }),
+    ...(count === null ? {} : { reading: { ...entryReading, count } }),
+    reason,
+  };
+}
+
+function newTimeOf(
+  { newTime }: EntryDraft,
+  near: Instant,
+  { zone, now }: DraftContext,
+  faults: DraftFault[],
+): Instant | null {
+  if (newTime.trim() === '') return null;
+  const seconds = readTimeOfDay(newTime);
+  if (seconds === null) {
+    faults.push({ field: 'newTime', words: 'Give a time as 17:24 or 17:24:05' });
+    return null;
+  }
+  const at = nearestInstantOfTime(seconds, zone, near);
+  if (at > now) faults.push({ field: 'newTime', words: 'That lies ahead' });
+  return at;
 }
 
 function stepContent(draft: EntryDraft, { steps }: DraftContext, faults: DraftFault[]): Content | null {

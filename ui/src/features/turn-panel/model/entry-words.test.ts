@@ -1,5 +1,5 @@
 import type { WireEntry } from '@stubpost/shared';
-import { entryWords, knownWords, withdrawnIds } from './entry-words';
+import { entryWords, knownWords } from './entry-words';
 
 const labels = new Map([
   ['handbrake-set', 'Handbrake set'],
@@ -53,11 +53,5 @@ describe('an entry in words', () => {
     ).toBe('by radio, P. Varga (R. Hallam)');
     expect(knownWords(entry({ source: 'by-feed', by: null }))).toBe('by feed');
     expect(knownWords(entry({}))).toBe('by hand, M. Tolland');
-  });
-
-  it('knows which entries were taken back', () => {
-    expect([...withdrawnIds([entry({}), entry({ id: 'e-2', kind: 'withdrawn', target: 'e-1' })])]).toEqual([
-      'e-1',
-    ]);
   });
 });

@@ -1,4 +1,5 @@
 import type { WireEntry } from '@stubpost/shared';
+import { clockText } from '../../../lib/turn/time-text';
 import { SOURCE_WORDS } from '../../../components/words';
 import { formatTime } from '../../../lib/time-display';
 
@@ -17,7 +18,13 @@ const nameOf = (entry: WireEntry, field: string): string => {
 };
 
 /** What an entry says, in words: "Handbrake set, 2: 2235, 4107". */
-export function entryWords(entry: WireEntry, labels: StepLabels, zone: string): string {
+export function entryWords(
+  entry: WireEntry,
+  labels: StepLabels,
+  zone: string,
+  byId: ReadonlyMap<string, WireEntry> = new Map(),
+): string {
+  const target = (): string => targetWords(entry, labels, zone, byId);
   const step = labels.get(entry.step ?? '') ?? entry.step ?? '';
   const time = (field: string): string => {
     const text = textOf(entry, field);
@@ -35,9 +42,9 @@ export function entryWords(entry: WireEntry, labels: StepLabels, zone: string): 
     case 'cannot-do':
       return `${step} cannot be done: ${entry.reason ?? ''}`;
     case 'withdrawn':
-      return `Withdrawn: ${entry.reason ?? ''}`;
+      return `Takes back ${target()}: ${entry.reason ?? ''}`;
     case 'corrected':
-      return `Corrected: ${entry.reason ?? ''}`;
+      return `Corrects ${target()}${newWords(entry, zone)}: ${entry.reason ?? ''}`;
     case 'crew':
       return `${nameOf(entry, 'person')} as ${textOf(entry, 'as')}`;
     case 'relief':
@@ -58,9 +65,66 @@ export function entryWords(entry: WireEntry, labels: StepLabels, zone: string): 
       return 'Blue signal down';
     case 'note':
       return `Note: ${entry.note ?? ''}`;
+    case 'agreed':
+      return `Agrees with ${target()}`;
+    case 'disagreed':
+      return `Does not agree with ${target()}: ${entry.reason ?? ''}`;
+    case 'ruled':
+      return `Ruled: ${target()} counts`;
+    case 'correction-approved':
+      return `Approves: ${target()}`;
+    case 'correction-declined':
+      return `Declines: ${target()}. Reason: ${entry.reason ?? ''}`;
+    case 'defect':
+      return defectWords(entry);
+    case 'tied-up':
+      return tieUpWords(entry);
     default:
       return entry.kind;
   }
+}
+
+/** The entry that another speaks of: "handbrake set, 2 of 17:20:45 by hand". */
+function targetWords(
+  entry: WireEntry,
+  labels: StepLabels,
+  zone: string,
+  byId: ReadonlyMap<string, WireEntry>,
+): string {
+  const target = byId.get(entry.target ?? '');
+  if (target === undefined) return 'an entry that is not here';
+  const rest = new Map([...byId].filter(([id]) => id !== entry.id));
+  const words = lowerFirst(entryWords(target, labels, zone, rest));
+  if (target.kind === 'corrected' || target.kind === 'withdrawn') return words;
+  const at = target.observedAt === undefined ? '' : ` of ${clockText(Date.parse(target.observedAt), zone)}`;
+  return `${words}${at} ${SOURCE_WORDS[target.source]}`;
+}
+
+const lowerFirst = (text: string): string => text.charAt(0).toLowerCase() + text.slice(1);
+
+/** What a correction says instead: " to 17:22:41", " to 17:22:41, 2". */
+export function newWords({ observedAt, reading }: WireEntry, zone: string): string {
+  const time = observedAt === undefined ? '' : ` to ${clockText(Date.parse(observedAt), zone)}`;
+  const read = reading === undefined ? '' : readingWords({ reading });
+  return time === '' && read !== '' ? ` to ${read.slice(2)}` : `${time}${read}`;
+}
+
+function defectWords(entry: WireEntry): string {
+  const car = textOf(entry, 'car');
+  const note = entry.note === undefined ? '' : `: ${entry.note}`;
+  return `Bad order, ${car === '' ? 'the set' : `car ${car}`}, ${textOf(entry, 'cause')}${note}`;
+}
+
+function tieUpWords(entry: WireEntry): string {
+  const { count = 0, cars = [] } = (entry['handbrakes'] ?? {}) as { count?: number; cars?: string[] };
+  const checks = (entry['checks'] ?? []) as string[];
+  const parts = [
+    `Tied up, ${count} ${count === 1 ? 'handbrake' : 'handbrakes'} set${cars.length === 0 ? '' : `: ${cars.join(', ')}`}`,
+    checks.length === 0 ? '' : `looked after: ${checks.join(', ')}`,
+    entry['offAir'] === true ? 'cut off from air' : '',
+    entry.reason === undefined ? '' : `reason: ${entry.reason}`,
+  ];
+  return parts.filter(Boolean).join('; ');
 }
 
 function reliefWords(entry: WireEntry): string {
@@ -70,7 +134,7 @@ function reliefWords(entry: WireEntry): string {
   return comes === '' ? `${goes}, nobody took over` : `${goes} by ${comes}${face}`;
 }
 
-function readingWords({ reading }: WireEntry): string {
+function readingWords({ reading }: Pick<WireEntry, 'reading'>): string {
   if (reading === undefined) return '';
   const cars = reading.cars === undefined || reading.cars.length === 0 ? '' : `: ${reading.cars.join(', ')}`;
   const parts = [
@@ -89,13 +153,4 @@ export function knownWords(entry: Pick<WireEntry, 'source' | 'saidBy' | 'by'>): 
   if (entry.saidBy !== undefined)
     return `${how}, ${entry.saidBy}${writer === undefined ? '' : ` (${writer})`}`;
   return writer === undefined ? how : `${how}, ${writer}`;
-}
-
-/** Ids of the entries that a later entry takes back. */
-export function withdrawnIds(entries: readonly WireEntry[]): ReadonlySet<string> {
-  return new Set(
-    entries.flatMap((entry) =>
-      entry.kind === 'withdrawn' && entry.target !== undefined ? [entry.target] : [],
-    ),
-  );
 }
