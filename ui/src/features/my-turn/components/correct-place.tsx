@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import type { Instant } from '@stubpost/shared';
-import { emptyForm, fieldsOf, NUMBER_FIELDS, readingOf, type ActForm } from '../model/act-form';
+import { emptyForm, fieldsOf, NUMBER_FIELDS, readingOf, withNone, type ActForm } from '../model/act-form';
 import type { EntryDraft } from '../model/entry-draft';
 import { correctionReasons } from '../model/reasons';
 import { recordLine } from '../model/record-words';
@@ -29,7 +29,8 @@ export function CorrectPlace({ record, onAsk, onBack }: CorrectPlaceProps) {
   const [form, setForm] = useState<ActForm>(emptyForm);
   const step = steps.find(({ key }) => key === record.key);
   const fields = step === undefined ? [] : fieldsOf(step, turn.cars);
-  const reading = readingOf(fields, form);
+  // Cars that were not touched stay as they were.
+  const reading = readingOf(fields, form.cars.length === 0 ? withNone(form, 'cars') : form);
   const says = isNone || moment !== null || reading !== undefined;
   const ask = (): void => {
     const target = record.entryId;

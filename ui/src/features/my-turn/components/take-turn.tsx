@@ -2,7 +2,6 @@ import { useState } from 'react';
 import type { CrewRole, WireTurn } from '@stubpost/shared';
 import { CREW_WORDS } from '../model/crew-words';
 import { reliefConsequence } from '../model/relief';
-import type { ActWays } from './act-ways';
 import { Foot } from './foot';
 import styles from './phone-parts.module.css';
 import { RecordBar } from './record-bar';
@@ -10,11 +9,19 @@ import { Standing } from './standing';
 import { TrainFacts } from './train-facts';
 import { TurnPicture } from './turn-picture';
 import { useTurnScene } from './turn-context';
+import type { Places } from './use-places';
 
 type CrewMember = WireTurn['crew'][number];
 
 /** A turn the person is not on: who has it, and one bar to take it; from somebody else it is a relief, face to face or not. */
-export function TakeTurn({ onRecord, onHelp }: { onRecord: ActWays['onRecord']; onHelp: () => void }) {
+export function TakeTurn({
+  onTaken,
+  onHelp,
+}: {
+  /** Without a place for Undo: the first step may be due at once. */
+  onTaken: Places['recordQuietly'];
+  onHelp: () => void;
+}) {
   const { turn, me, now, marker } = useTurnScene();
   const [role, setRole] = useState<CrewRole>(me.roles[0] ?? 'conductor');
   const holder = turn.crew.find((member) => member.as === role);
@@ -52,9 +59,9 @@ export function TakeTurn({ onRecord, onHelp }: { onRecord: ActWays['onRecord']; 
       </div>
       <Foot>
         {holder === undefined ? (
-          <TakeBar role={role} onRecord={onRecord} />
+          <TakeBar role={role} onTaken={onTaken} />
         ) : (
-          <ReliefBars role={role} holder={holder} onRecord={onRecord} />
+          <ReliefBars role={role} holder={holder} onTaken={onTaken} />
         )}
       </Foot>
     </>
@@ -84,31 +91,32 @@ function Crew() {
 
 interface BarProps {
   role: CrewRole;
-  onRecord: ActWays['onRecord'];
+  onTaken: Places['recordQuietly'];
 }
 
-function TakeBar({ role, onRecord }: BarProps) {
+function TakeBar({ role, onTaken }: BarProps) {
   const { me } = useTurnScene();
   return (
     <RecordBar
       barKey={`crew:${role}`}
       isOwnChange={me.roles.length > 1}
       over={`As ${role}`}
-      onRecord={() => onRecord({ kind: 'crew', person: me.id, as: role }, `I have this turn, ${role}`, null)}
+      onRecord={() =>
+        onTaken({ draft: { kind: 'crew', person: me.id, as: role }, label: `I have this turn, ${role}` })
+      }
     >
       I have this turn
     </RecordBar>
   );
 }
 
-function ReliefBars({ role, holder, onRecord }: BarProps & { holder: CrewMember }) {
+function ReliefBars({ role, holder, onTaken }: BarProps & { holder: CrewMember }) {
   const { me } = useTurnScene();
   const takeOver = (faceToFace: boolean): void =>
-    onRecord(
-      { kind: 'relief', out: holder.personId, in: me.id, as: role, faceToFace },
-      `Took over from ${holder.name}`,
-      null,
-    );
+    onTaken({
+      draft: { kind: 'relief', out: holder.personId, in: me.id, as: role, faceToFace },
+      label: `Took over from ${holder.name}`,
+    });
   return (
     <>
       <RecordBar

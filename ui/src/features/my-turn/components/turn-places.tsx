@@ -25,7 +25,7 @@ export function TurnPlaces() {
   if (me.roles.length === 0) return <NotCrew />;
   const isOutside = me.role === null && !isHelping && turn.annulled === null && places.done === null;
   if (isOutside && places.place.kind === 'act') {
-    return <TakeTurn onRecord={places.ways.onRecord} onHelp={() => setHelping(true)} />;
+    return <TakeTurn onTaken={places.recordQuietly} onHelp={() => setHelping(true)} />;
   }
   if (places.place.kind === 'act') return <ActNow places={places} />;
   if (places.place.kind === 'second') return <SecondPlace places={places} />;
