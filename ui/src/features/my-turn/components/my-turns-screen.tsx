@@ -1,4 +1,5 @@
 import type { CrewRole, SignedInPerson, WireTerminal, WireTurn } from '@stubpost/shared';
+import { Link } from 'react-router-dom';
 import { Today } from '../../../components/clock';
 import { ErrorState, LoadingRows } from '../../../components/page-states';
 import { usePerson } from '../../../lib/session';
@@ -7,6 +8,7 @@ import { useNow } from '../../../lib/use-now';
 import { useOutbox } from '../../../lib/outbox/use-outbox';
 import { useRecorder } from '../api/use-recorder';
 import { crewRolesAt, roleOnTurn, turnAtHand, type MyTurns } from '../model/my-turns';
+import { turnsToTieUp } from '../model/tie-up';
 import { MyTurnsFoot } from './my-turns-foot';
 import listStyles from './my-turns.module.css';
 import styles from './phone-parts.module.css';
@@ -74,7 +76,10 @@ function Lists({ isLoading, error, retry, turns, terminals, hand }: ListsProps) 
     <>
       {error !== null && <p className={styles.said}>Not up to date. Trying again by itself.</p>}
       {turns.mine.length + turns.mineOver.length > 0 ? (
-        <OwnTurns turns={turns} hand={hand} terminals={terminals} />
+        <>
+          <OwnTurns turns={turns} hand={hand} terminals={terminals} />
+          <TieUpLine turns={turns} />
+        </>
       ) : (
         <p>You have no turn yet. Take one below.</p>
       )}
@@ -117,6 +122,21 @@ function OwnTurns({
         </li>
       ))}
     </ol>
+  );
+}
+
+/** The way to leave a set for the day, once one of one's own stands here. */
+function TieUpLine({ turns }: { turns: MyTurns }) {
+  const [first] = turnsToTieUp([...turns.mine, ...turns.mineOver]);
+  if (first === undefined) return null;
+  const isPlanned = first.kind === 'tie-up' && (first.tiedUp ?? null) === null;
+  return (
+    <Link
+      className={`${styles.button} ${styles.wide}`}
+      to={isPlanned ? `/my/tie-up?turn=${first.id}` : '/my/tie-up'}
+    >
+      {isPlanned && first.set !== null ? `Tie up set ${first.set}` : 'Tie up a set'}
+    </Link>
   );
 }
 
