@@ -5,5 +5,6 @@ process.env['TZ'] = 'UTC';
 
 export default defineConfig({
   // Generous: simulations and properties are counted in rounds, and a busy machine is no failure.
-  test: { environment: 'node', include: ['src/**/*.test.ts'], testTimeout: 60_000 },
+  // Pure functions leave nothing behind, so files share one loading of the modules.
+  test: { environment: 'node', isolate: false, include: ['src/**/*.test.ts'], testTimeout: 60_000 },
 });

@@ -3,6 +3,9 @@ import { fileURLToPath } from 'node:url';
 import react from '@vitejs/plugin-react';
 import type { Plugin } from 'vite';
 import { defineConfig } from 'vitest/config';
+import { buildIdOf } from './bundle/build-id.ts';
+import { keepOldAssets } from './bundle/keep-old-assets.ts';
+import { webApp } from './bundle/web-app.ts';
 import { recolorBlueprint } from './src/styles/recolor-blueprint.ts';
 
 process.env['TZ'] = 'UTC';
@@ -47,11 +50,18 @@ const recoloredBlueprint: Plugin = {
     /@blueprintjs[\\/].*\.css$/.test(id.split('?')[0] ?? '') ? recolorBlueprint(code) : null,
 };
 
+const root = fileURLToPath(new URL('.', import.meta.url));
+const buildId = buildIdOf([`${root}src`, `${root}public`, inShared('')]);
+
 const service = `http://127.0.0.1:${process.env['PORT'] ?? '4600'}`;
 
 export default defineConfig({
-  plugins: [recoloredBlueprint, react()],
-  define: { __ZONES__: JSON.stringify(ZONES.map(packedZone)) },
+  plugins: [
+    recoloredBlueprint,
+    react(),
+    ...(process.env['VITEST'] === undefined ? [webApp(), keepOldAssets()] : []),
+  ],
+  define: { __ZONES__: JSON.stringify(ZONES.map(packedZone)), __BUILD_ID__: JSON.stringify(buildId) },
   resolve: {
     // Regular expressions on purpose: a plain string would also catch the testing entry point.
     alias: [
@@ -66,15 +76,18 @@ export default defineConfig({
     // The service takes requests of its own pages only: in development those come through here, under its name.
     proxy: { '/api': { target: service, changeOrigin: true, headers: { origin: service } } },
   },
-  build: { manifest: true },
+  // The folder is not emptied: files of earlier builds stay for a while, see keep-old-assets.ts.
+  build: { manifest: true, emptyOutDir: false },
   test: {
     environment: 'jsdom',
     globals: true,
     css: false,
     setupFiles: ['./src/testing/setup.ts'],
+    // Files share one page and its modules: loading them anew for each took seven times as long as all the tests.
+    isolate: false,
     // Deadlines, not waits: whole pages are drawn, also on a busy machine.
     testTimeout: 30_000,
     hookTimeout: 30_000,
-    include: ['src/**/*.test.{ts,tsx}'],
+    include: ['{src,bundle}/**/*.test.{ts,tsx}'],
   },
 });

@@ -63,36 +63,45 @@ function nodeTests() {
   return runTests({ command: process.execPath, args, cwd: ROOT, report, count: countTap });
 }
 
-const browserTestFiles = () =>
-  readdirSync(inRoot('ui/e2e'), { recursive: true }).filter((name) => name.endsWith('.e2e.test.ts'));
+const BROWSER_TEST = '.e2e.test.ts';
+/** Browser tests that hold the product to its seconds; the others can bear a busy machine. */
+const TO_THE_SECOND = ['turnaround', 'offline'];
+
+const browserTestNames = () =>
+  readdirSync(inRoot('ui/e2e'))
+    .filter((file) => file.endsWith(BROWSER_TEST))
+    .map((file) => file.slice(0, -BROWSER_TEST.length));
 
 /** Without a browser its tests are skipped on a desk and failed where CI=true, since there nobody would see it. */
-function withoutBrowser() {
+function withoutBrowser(names) {
   const reason = 'no Chromium found: install it (on Debian: apt-get install chromium) or set CHROMIUM_PATH';
   const isFailure = process.env.CI === 'true';
-  const files = Math.max(1, browserTestFiles().length);
   return {
-    counts: { passed: 0, failed: isFailure ? 1 : 0, skipped: isFailure ? 0 : files },
+    counts: { passed: 0, failed: isFailure ? 1 : 0, skipped: isFailure ? 0 : Math.max(1, names.length) },
     output: '',
     reason,
   };
 }
 
-function browserTests(browser) {
-  if (browser === undefined) return withoutBrowser;
-  const options = {
-    args: ['--config', 'e2e/vitest.config.ts'],
-    extraEnvironment: { CHROMIUM_PATH: browser },
-  };
-  return vitest('browser', 'ui', options);
+function browserTests(name, names, browser) {
+  if (browser === undefined) return () => withoutBrowser(names);
+  const files = names.map((each) => `${each}${BROWSER_TEST}`);
+  const args = ['--config', 'e2e/vitest.config.ts', ...files];
+  return vitest(name, 'ui', { args, extraEnvironment: { CHROMIUM_PATH: browser } });
 }
 
 /** Every test runner of the repository as a task, the longest first; `browser` is the path of Chromium, if there is one. */
-export const runnerTasks = (browser) => [
-  { name: 'service (jest)', run: jest },
-  { name: 'shared (vitest)', run: vitest('shared', 'shared') },
-  { name: 'ui (vitest)', run: vitest('ui', 'ui') },
-  { name: 'seed (vitest)', run: vitest('seed', 'seed') },
-  { name: 'scripts (node)', run: nodeTests },
-  { name: 'browser (vitest)', run: browserTests(browser), alone: true },
-];
+export function runnerTasks(browser) {
+  const names = browserTestNames();
+  const pages = names.filter((name) => !TO_THE_SECOND.includes(name));
+  const toTheSecond = names.filter((name) => TO_THE_SECOND.includes(name));
+  return [
+    { name: 'service (jest)', run: jest },
+    { name: 'shared (vitest)', run: vitest('shared', 'shared') },
+    { name: 'ui (vitest)', run: vitest('ui', 'ui') },
+    { name: 'seed (vitest)', run: vitest('seed', 'seed') },
+    { name: 'scripts (node)', run: nodeTests },
+    { name: 'browser: pages', run: browserTests('browser-pages', pages, browser) },
+    { name: 'browser: live', run: browserTests('browser-live', toTheSecond, browser), alone: true },
+  ];
+}
