@@ -20,7 +20,7 @@ const SOURCES = [
   'tsconfig.base.json',
   CHECKER_CONFIG,
   ...PROJECTS.flatMap((project) => [`${project}/src`, `${project}/package.json`, `${project}/tsconfig.json`]),
-  ...['src', 'public', 'index.html', 'package.json', 'vite.config.ts'].map((path) => `ui/${path}`),
+  ...['src', 'public', 'bundle', 'index.html', 'package.json', 'vite.config.ts'].map((path) => `ui/${path}`),
 ];
 
 const stamp = new Stamp(STAMP_FOLDER, 'build');
