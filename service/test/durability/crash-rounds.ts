@@ -41,6 +41,12 @@ export function buildPowerCutLibrary(folder: string): string {
   return library;
 }
 
+/** What a process is started with so that it leaves behind only what a power cut would. */
+export function powerCutVariables(round: Pick<CrashRound, 'folder' | 'powerCutLibrary'>): NodeJS.ProcessEnv {
+  const { folder, powerCutLibrary } = round;
+  return powerCutLibrary === undefined ? {} : { LD_PRELOAD: powerCutLibrary, POWER_CUT_FOLDER: folder };
+}
+
 /** One round: write, crash, lose what a crash of that kind loses, open again and look. */
 export async function crashOnce(round: CrashRound): Promise<AfterCrash> {
   if (round.powerCutLibrary !== undefined) keepWhatIsThere(round.folder);
@@ -56,9 +62,7 @@ function writeUntilKilled(round: CrashRound): Promise<number[]> {
     stdio: ['ignore', 'pipe', 'inherit'],
     env: {
       ...process.env,
-      ...(round.powerCutLibrary === undefined
-        ? {}
-        : { LD_PRELOAD: round.powerCutLibrary, POWER_CUT_FOLDER: round.folder }),
+      ...powerCutVariables(round),
     },
   });
   const acknowledged: number[] = [];
@@ -78,19 +82,21 @@ function writeUntilKilled(round: CrashRound): Promise<number[]> {
 
 const isOurs = (name: string) => name.endsWith('.so') || name.endsWith('.synced');
 
+/** Files that a crash of this kind can harm: everything that lies in the folder itself but what the trial puts there. */
+function filesIn(folder: string): string[] {
+  return readdirSync(folder, { withFileTypes: true })
+    .filter((entry) => entry.isFile() && !isOurs(entry.name))
+    .map(({ name }) => path.join(folder, name));
+}
+
 /** What lies on the disk before a round is synced already. */
-function keepWhatIsThere(folder: string): void {
-  for (const name of readdirSync(folder)) {
-    const file = path.join(folder, name);
-    if (!isOurs(name)) copyFileSync(file, `${file}.synced`);
-  }
+export function keepWhatIsThere(folder: string): void {
+  for (const file of filesIn(folder)) copyFileSync(file, `${file}.synced`);
 }
 
 /** Puts what was synced in the place of what was written; what never was synced is gone. */
-function cutPower(folder: string): void {
-  for (const name of readdirSync(folder)) {
-    if (isOurs(name)) continue;
-    const file = path.join(folder, name);
+export function cutPower(folder: string): void {
+  for (const file of filesIn(folder)) {
     rmSync(file);
     if (existsSync(`${file}.synced`)) renameSync(`${file}.synced`, file);
   }

@@ -1,5 +1,6 @@
+import { noteSoak } from '../support/soak-report';
 import { temporaryFolder } from '../support/temporary-folder';
-import { buildPowerCutLibrary, crashOnce } from './crash-rounds';
+import { type AfterCrash, buildPowerCutLibrary, crashOnce } from './crash-rounds';
 
 /** Rounds of each kind; a nightly run asks for more. Each round kills after another number of acknowledgements. */
 const rounds = Number(process.env.CRASH_ROUNDS ?? 5);
@@ -13,8 +14,21 @@ beforeEach(() => {
 });
 afterEach(() => temporary.remove());
 
+function noteRounds(part: string, found: readonly AfterCrash[]): void {
+  const sum = (of: (each: AfterCrash) => number) => found.reduce((total, each) => total + of(each), 0);
+  noteSoak({
+    part,
+    rounds: found.length,
+    acknowledged: sum(({ acknowledged }) => acknowledged),
+    lost: sum(({ lost }) => lost.length),
+    doubled: 0,
+    chain: 'not kept here',
+  });
+}
+
 describe('what was acknowledged', () => {
   test('outlives kill -9 at any moment, whole and in a sound database', async () => {
+    const found: AfterCrash[] = [];
     for (let round = 0; round < rounds; round += 1) {
       const after = await crashOnce({
         folder: temporary.folder,
@@ -23,11 +37,14 @@ describe('what was acknowledged', () => {
       });
       expect(after).toMatchObject({ lost: [], integrity: 'ok', isHalfApplied: false });
       expect(after.acknowledged).toBeGreaterThanOrEqual(acknowledgementsOf(round));
+      found.push(after);
     }
+    noteRounds('store, kill -9', found);
   });
 
   test('outlives a power cut in which everything not synced is lost', async () => {
     const powerCutLibrary = buildPowerCutLibrary(temporary.folder);
+    const found: AfterCrash[] = [];
     for (let round = 0; round < rounds; round += 1) {
       const after = await crashOnce({
         folder: temporary.folder,
@@ -36,7 +53,9 @@ describe('what was acknowledged', () => {
         powerCutLibrary,
       });
       expect(after).toMatchObject({ lost: [], integrity: 'ok', isHalfApplied: false });
+      found.push(after);
     }
+    noteRounds('store, power cut', found);
   });
 
   test('is lost in the same power cut without synchronous=FULL: the trial bites', async () => {
