@@ -11,6 +11,8 @@ const boardPage = () => import('./routes/board-page').then(({ BoardPage }) => ({
 const alertsPage = () => import('./routes/alerts-page').then(({ AlertsPage }) => ({ Component: AlertsPage }));
 const historyPage = () =>
   import('./routes/history-page').then(({ HistoryPage }) => ({ Component: HistoryPage }));
+const correctionsPage = () =>
+  import('./routes/corrections-page').then(({ CorrectionsPage }) => ({ Component: CorrectionsPage }));
 const timetablesPage = () =>
   import('./routes/timetables-page').then(({ TimetablesPage }) => ({ Component: TimetablesPage }));
 const setupPage = () => import('./routes/setup-page').then(({ SetupPage }) => ({ Component: SetupPage }));
@@ -44,6 +46,10 @@ const deskPages: RouteObject[] = [
   },
   { element: <Permitted permission="alerts.read" />, children: [{ path: '/alerts', lazy: alertsPage }] },
   { element: <Permitted permission="history.read" />, children: [{ path: '/history', lazy: historyPage }] },
+  {
+    element: <Permitted permission="corrections.read" />,
+    children: [{ path: '/records/corrections', lazy: correctionsPage }],
+  },
   {
     element: <Permitted permission="timetables.read" />,
     children: [{ path: '/timetables/*', lazy: timetablesPage }],

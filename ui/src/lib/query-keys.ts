@@ -42,6 +42,10 @@ export const queryKeys = {
     lists: ['alerts', 'list'] as const,
     list: (question: AlertQuestion) => ['alerts', 'list', question] as const,
   },
+  corrections: {
+    all: ['corrections'] as const,
+    list: (question: { terminal: string; state: string }) => ['corrections', 'list', question] as const,
+  },
   plans: { all: ['plans'] as const, detail: (planId: string) => ['plans', 'detail', planId] as const },
   sets: { all: ['sets'] as const },
   timetables: { all: ['timetables'] as const },
