@@ -12,6 +12,7 @@ import {
   formatStamp,
   formatTime,
   formatTimeAndRelative,
+  formatTimeWithDay,
 } from './time-display';
 
 const newYork = 'America/New_York';
@@ -22,6 +23,12 @@ describe('a time at the terminal', () => {
     expect(formatClock('2026-03-03T22:22:41Z', newYork)).toBe('17:22:41');
     expect(formatStamp('2026-03-03T22:22:41Z', newYork)).toBe('Tue 3 Mar 17:22:41 EST');
     expect(formatStamp('2026-07-03T21:22:41Z', newYork)).toBe('Fri 3 Jul 17:22:41 EDT');
+  });
+
+  test('of another day of the terminal names its weekday', () => {
+    const now = at('2026-03-03T22:22:41Z');
+    expect(formatTimeWithDay('2026-03-03T05:00:00Z', newYork, now)).toBe('00:00');
+    expect(formatTimeWithDay('2026-03-03T04:59:59Z', newYork, now)).toBe('Mon 23:59');
   });
 
   test('of plan or forecast has its seconds cut off, not rounded', () => {

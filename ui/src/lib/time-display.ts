@@ -111,6 +111,14 @@ export function dateAt(moment: Moment, zone: string): CalendarDate {
   return wallTime(moment, zone).date;
 }
 
+/** A time that may lie days back: "17:40" on the day of `now`, else with its weekday, "Mon 17:40". */
+export function formatTimeWithDay(moment: Moment, zone: string, now: Instant): string {
+  const time = formatTime(moment, zone);
+  const date = dateAt(moment, zone);
+  if (date === dateAt(now, zone)) return time;
+  return `${formatter('UTC', { weekday: 'short' }).format(calendarDay(date))} ${time}`;
+}
+
 /** A plan time with its service day: "17:40", and after midnight "00:40 (Tue night)". */
 export function formatServiceTime(moment: Moment, zone: string, serviceDate: CalendarDate): string {
   const time = formatTime(moment, zone);

@@ -1,7 +1,7 @@
 import { Button } from '@blueprintjs/core';
 import type { WireAlert } from '@stubpost/shared';
 import { PriorityMark } from '../../../components/flags';
-import { formatTime } from '../../../lib/time-display';
+import { formatTime, formatTimeWithDay } from '../../../lib/time-display';
 import { useTurnAt } from '../../../lib/turn/use-turn-at';
 import { useNow } from '../../../lib/use-now';
 import { holderWords } from '../model/alert-words';
@@ -25,6 +25,7 @@ export interface AlertRowProps {
 export function AlertRow(props: AlertRowProps) {
   const { alert, zone, isPicked } = props;
   const isOver = alert.state === 'cleared' || alert.state === 'closed';
+  const raised = formatTimeWithDay(alert.raisedAt, zone, useNow());
   const { who, small } = holderWords(alert, zone, props.me);
   const looks = [
     alert.state === 'raised' && styles.untaken,
@@ -37,13 +38,13 @@ export function AlertRow(props: AlertRowProps) {
       data-alert={alert.id}
       tabIndex={props.hasTabStop ? 0 : -1}
       aria-selected={isPicked}
-      aria-label={rowWords(alert, zone, who)}
+      aria-label={rowWords(alert, raised, who)}
       onClick={props.onPick}
     >
       <td className={styles.first}>
         <PriorityMark priority={alert.priority} over={isOver} />
       </td>
-      <td>{formatTime(alert.raisedAt, zone)}</td>
+      <td>{raised}</td>
       <td>
         {alert.subject}
         {!isOver && alert.turnId !== null && <Standing turnId={alert.turnId} />}
@@ -91,7 +92,7 @@ function overWords(alert: WireAlert, zone: string): string {
   return alert.closedCause === null ? cleared : `${cleared} Cause: ${alert.closedCause}.`.trim();
 }
 
-function rowWords(alert: WireAlert, zone: string, who: string): string {
+function rowWords(alert: WireAlert, raised: string, who: string): string {
   const priority = { 'act-now': 'Act now', 'act-soon': 'Act soon', watch: 'Watch' }[alert.priority];
   const holder = {
     raised: 'nobody has it',
@@ -100,7 +101,7 @@ function rowWords(alert: WireAlert, zone: string, who: string): string {
     cleared: 'cleared, waits for a cause',
     closed: 'closed',
   };
-  return `${priority}, ${formatTime(alert.raisedAt, zone)}, ${alert.subject}. ${alert.text}. ${alert.action} ${alert.actor}. ${holder[alert.state]}.`;
+  return `${priority}, ${raised}, ${alert.subject}. ${alert.text}. ${alert.action} ${alert.actor}. ${holder[alert.state]}.`;
 }
 
 function RowAct({ alert, mayAct, onTake, onOpen, onName }: AlertRowProps) {

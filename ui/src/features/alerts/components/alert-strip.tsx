@@ -6,7 +6,7 @@ import { PriorityMark } from '../../../components/flags';
 import { errorText } from '../../../lib/error-texts';
 import { useMay, usePerson } from '../../../lib/session';
 import { standingAlertsQuery } from '../../../lib/standing-alerts';
-import { formatTime } from '../../../lib/time-display';
+import { formatTimeWithDay } from '../../../lib/time-display';
 import { useTurnAt } from '../../../lib/turn/use-turn-at';
 import { useNow } from '../../../lib/use-now';
 import { useTakeAlert } from '../api/alert-acts';
@@ -66,7 +66,7 @@ function Foremost({ alert, terminal, isHalf, onOpen }: AlertStripProps & { alert
     <div className={styles.foremost} data-priority={alert.priority}>
       <div className={styles.head}>
         <PriorityMark priority={alert.priority} />
-        <span>{formatTime(alert.raisedAt, terminal.zone)}</span>
+        <span>{formatTimeWithDay(alert.raisedAt, terminal.zone, now)}</span>
         <span>{alert.subject}</span>
         {turn !== undefined && <TurnFlag turn={turn} now={now} />}
         {turn !== undefined && <span className={styles.leaves}>{leavesAndReady(turn, now)}</span>}
@@ -100,13 +100,14 @@ function OtherAlert({
   onOpen: (turnId: string) => void;
 }) {
   const me = usePerson().name;
+  const now = useNow();
   const { turnId } = alert;
   const isUntaken = alert.state === 'raised';
   const words = `${alert.subject.replace(', train ', ', ')}. ${alert.text}`;
   return (
     <li className={isUntaken ? styles.untaken : undefined}>
       <PriorityMark priority={alert.priority} />
-      <span>{formatTime(alert.raisedAt, zone)}</span>
+      <span>{formatTimeWithDay(alert.raisedAt, zone, now)}</span>
       <span className={styles.words}>
         {turnId === null ? (
           words
