@@ -18,8 +18,9 @@ const manifest: BuildManifest = {
   'src/app/routes/my-page.tsx': {
     file: 'assets/my-page.js',
     imports: ['_turn.js'],
-    dynamicImports: ['src/features/my-turn/later.tsx'],
+    dynamicImports: ['src/features/my-turn/later.tsx', '../node_modules/icons/all-paths.js'],
   },
+  '../node_modules/icons/all-paths.js': { file: 'assets/all-paths.js' },
   'src/app/routes/my-tie-up-page.tsx': { file: 'assets/my-tie-up-page.js' },
   '_turn.js': { file: 'assets/turn.js', css: ['assets/turn.css'], imports: ['index.html'] },
   'src/features/my-turn/later.tsx': { file: 'assets/later.js' },

@@ -14,6 +14,9 @@ export type BuildManifest = Readonly<Record<string, ManifestChunk>>;
 /** Pages a crew opens on the phone; everything else the router can load belongs to the desk. */
 const PHONE_PAGES = /^src\/app\/routes\/(my(-[a-z-]+)?|sign-in|me|help|accessibility|not-found)-page\.tsx$/;
 
+/** Our own sources. The component library can load all its icons by name; no page of ours asks it to. */
+const OWN_SOURCE = /^src\//;
+
 /** Fonts and pictures that the phone's pages show; the icon fonts of the component library are not among them. */
 const PHONE_ASSETS = /\.(woff2|svg|png)$/;
 const OTHER_ASSETS = /blueprint-icons/;
@@ -36,8 +39,8 @@ export function phoneFiles(manifest: BuildManifest): Set<string> {
     }
     chunk.imports?.forEach(visit);
     // The entry names every page of the app; of those only the phone's are followed.
-    const later = chunk.dynamicImports ?? [];
-    later.filter((each) => !isEntry(chunk) || PHONE_PAGES.test(each)).forEach(visit);
+    const wanted = isEntry(chunk) ? PHONE_PAGES : OWN_SOURCE;
+    chunk.dynamicImports?.filter((each) => wanted.test(each)).forEach(visit);
   };
   for (const [key, chunk] of Object.entries(manifest)) if (isEntry(chunk)) visit(key);
   return files;

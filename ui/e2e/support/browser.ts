@@ -59,6 +59,10 @@ export async function openWindow(
 /** Signs in on the sign-in page. */
 export async function signIn(page: Page, email: string, password: string): Promise<void> {
   await page.goto('/sign-in');
+  // A phone begins with the badge.
+  const byEmail = page.getByRole('button', { name: 'Sign in with e-mail and password' });
+  await byEmail.or(page.getByLabel('E-mail')).first().waitFor();
+  if (await byEmail.isVisible()) await byEmail.click();
   await page.getByLabel('E-mail').fill(email);
   await page.getByLabel('Password', { exact: true }).fill(password);
   await page.getByRole('button', { name: 'Sign in', exact: true }).first().click();

@@ -7,6 +7,7 @@ import { usePreferences } from '../lib/preferences';
 import { useTerminalChoice } from '../lib/terminal-choice';
 import { usePageKey } from '../lib/use-key';
 import { LiveAnnouncer } from './live-announcer';
+import { NewerVersion } from './newer-version';
 import { NotEncrypted } from './not-encrypted';
 import { PageFoot } from './page-foot';
 import { PageNames } from './page-names';
@@ -36,6 +37,7 @@ export function DeskShell() {
           To the page
         </a>
         <NotEncrypted />
+        <NewerVersion />
         <header>
           <TopBar terminal={terminal} terminals={terminals} zone={zone} onFind={() => setFinding(true)} />
           <PageNames zone={zone} path={pathname} />

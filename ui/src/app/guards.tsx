@@ -7,6 +7,7 @@ import { setupQuery } from '../lib/service-facts';
 import { sessionQuery, SignedInAs, useSession } from '../lib/session';
 import { useTerminalChoice } from '../lib/terminal-choice';
 import { homeOf } from '../lib/home';
+import { LockGate } from './lock-gate';
 import { PlainShell } from './plain-shell';
 
 function Waiting() {
@@ -33,13 +34,14 @@ function ToSignIn() {
   return <Navigate to={`/sign-in${back}`} replace />;
 }
 
-/** Lets on whoever is signed in; leads everybody else to the sign-in page and back again. */
+/** Lets on whoever is signed in, on a crew's phone past its lock; leads everybody else to the sign-in page and back again. */
 export function SignedInOnly() {
   const { state, person } = useSession();
+  const { pathname } = useLocation();
   if (person !== null) {
     return (
       <SignedInAs person={person}>
-        <Outlet />
+        {homeOf(person) === '/my' || pathname.startsWith('/my') ? <LockGate /> : <Outlet />}
       </SignedInAs>
     );
   }

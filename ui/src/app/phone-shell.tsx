@@ -3,10 +3,15 @@ import { Link, Outlet, useLocation, useMatch } from 'react-router-dom';
 import { Clock } from '../components/clock';
 import { PartBoundary } from '../components/part-boundary';
 import { PostMark } from '../components/post-mark';
+import { errorText } from '../lib/error-texts';
 import { LiveProvider } from '../lib/live';
+import { lockPhone } from '../lib/lock/phone-lock';
+import { usePerson } from '../lib/session';
 import { useTerminalChoice } from '../lib/terminal-choice';
 import { DemoLabel } from './demo-label';
+import { NewerVersion } from './newer-version';
 import { NotEncrypted } from './not-encrypted';
+import { PhoneClock } from './phone-clock';
 import { OtherZone } from './other-zone';
 import { useSignOut } from './sign-out';
 import styles from './phone-shell.module.css';
@@ -36,14 +41,19 @@ function PhoneHead({ zone }: { zone: string }) {
 
 function PhoneFoot({ terminal }: { terminal: WireTerminal | null }) {
   const signOut = useSignOut();
+  const person = usePerson();
   return (
     <footer className={styles.foot}>
       <Link to="/help">Help</Link>
       <Link to="/board">Board</Link>
       <Link to="/me">Me</Link>
+      <button type="button" onClick={() => lockPhone(person.id)}>
+        Lock, other person
+      </button>
       <button type="button" onClick={() => signOut.mutate()}>
         Sign out
       </button>
+      {signOut.isError && <p role="alert">{errorText(signOut.error)} What you recorded is kept.</p>}
       {terminal !== null && <OtherZone terminal={terminal} />}
     </footer>
   );
@@ -59,6 +69,8 @@ export function PhoneShell() {
       <div className={`${styles.phone} phone`}>
         <NotEncrypted />
         <PhoneHead zone={zone} />
+        <PhoneClock />
+        <NewerVersion />
         <main className={styles.main} id="page">
           <PartBoundary key={pathname} part="This page" rest="What is on this phone is kept.">
             <Outlet />

@@ -3,6 +3,7 @@ import { Outlet } from 'react-router-dom';
 import { Clock, Today } from '../components/clock';
 import { PostMark } from '../components/post-mark';
 import { DemoLabel } from './demo-label';
+import { NewerVersion } from './newer-version';
 import { NotEncrypted } from './not-encrypted';
 import { PageFoot } from './page-foot';
 import styles from './shell.module.css';
@@ -14,6 +15,7 @@ export function PlainShell({ children }: { children?: ReactNode }) {
   return (
     <div className={styles.desk}>
       <NotEncrypted />
+      <NewerVersion />
       <header className={styles.topbar}>
         <a className={styles.brand} href="/">
           <PostMark />

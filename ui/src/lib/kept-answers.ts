@@ -98,6 +98,17 @@ async function write(client: QueryClient): Promise<void> {
   }
 }
 
+/** Throws away what is kept: whoever read it has signed out. */
+export async function forgetAnswers(): Promise<void> {
+  try {
+    const database = await open();
+    await database.delete('answers', place);
+    database.close();
+  } catch {
+    // Nothing was kept.
+  }
+}
+
 /** Keeps the answers written down from now on; what is left to write is written when the page goes out of sight. */
 export function keepAnswers(client: QueryClient): () => void {
   let timer: ReturnType<typeof setTimeout> | undefined;

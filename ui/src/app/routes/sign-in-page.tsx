@@ -4,7 +4,7 @@ import { Navigate, useNavigate, useSearchParams } from 'react-router-dom';
 import { SafetyCaution } from '../../components/caution';
 import { PageHeader } from '../../components/page-header';
 import { DemoPeople } from '../../features/sign-in/components/demo-people';
-import { SignInForm } from '../../features/sign-in/components/sign-in-form';
+import { SignInWays } from '../../features/sign-in/components/sign-in-ways';
 import { TurnFigure } from '../../features/sign-in/components/turn-figure';
 import { homeOf } from '../../lib/home';
 import { demoQuery, setupQuery } from '../../lib/service-facts';
@@ -41,7 +41,7 @@ export function SignInPage() {
         <SafetyCaution />
       </section>
       <div className={styles.ways}>
-        <SignInForm onSignedIn={goOn} />
+        <SignInWays onSignedIn={goOn} />
         {demo?.demo === true && <DemoPeople demo={demo} onSignedIn={goOn} />}
       </div>
     </div>

@@ -107,6 +107,7 @@ export function useOutboxDelivery(): void {
     const look = (): void => {
       if (document.visibilityState === 'visible') void outbox.poke();
     };
+    look();
     const timer = setInterval(() => {
       if (outbox.getState().waiting.length > 0) look();
     }, lookMilliseconds);
