@@ -22,6 +22,7 @@ const PAGES: readonly PageName[] = [
   { name: 'Alerts', to: '/alerts', permission: 'alerts.read' },
   { name: 'History', to: '/history', permission: 'history.read' },
   { name: 'Corrections', to: '/records/corrections', permission: 'corrections.read' },
+  { name: 'Check the log', to: '/records/check', permission: 'records.read' },
   { name: 'Timetables', to: '/timetables', permission: 'timetables.read' },
   { name: 'Set-up', to: '/setup', permission: 'plans.read' },
   { name: 'People', to: '/people', permission: 'people.manage' },

@@ -13,6 +13,8 @@ const historyPage = () =>
   import('./routes/history-page').then(({ HistoryPage }) => ({ Component: HistoryPage }));
 const correctionsPage = () =>
   import('./routes/corrections-page').then(({ CorrectionsPage }) => ({ Component: CorrectionsPage }));
+const checkLogPage = () =>
+  import('./routes/check-log-page').then(({ CheckLogPage }) => ({ Component: CheckLogPage }));
 const timetablesPage = () =>
   import('./routes/timetables-page').then(({ TimetablesPage }) => ({ Component: TimetablesPage }));
 const setupPage = () => import('./routes/setup-page').then(({ SetupPage }) => ({ Component: SetupPage }));
@@ -49,6 +51,10 @@ const deskPages: RouteObject[] = [
   {
     element: <Permitted permission="corrections.read" />,
     children: [{ path: '/records/corrections', lazy: correctionsPage }],
+  },
+  {
+    element: <Permitted permission="records.read" />,
+    children: [{ path: '/records/check', lazy: checkLogPage }],
   },
   {
     element: <Permitted permission="timetables.read" />,

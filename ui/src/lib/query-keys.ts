@@ -46,6 +46,7 @@ export const queryKeys = {
     all: ['corrections'] as const,
     list: (question: { terminal: string; state: string }) => ['corrections', 'list', question] as const,
   },
+  log: { all: ['log'] as const, state: ['log', 'state'] as const, heads: ['log', 'heads'] as const },
   plans: { all: ['plans'] as const, detail: (planId: string) => ['plans', 'detail', planId] as const },
   sets: { all: ['sets'] as const },
   timetables: { all: ['timetables'] as const },
