@@ -80,7 +80,7 @@ describe('the checker, one file on a machine with nothing but Node', () => {
     ]) {
       const found = check(cut, ...options);
       expect(found.status).toBe(1);
-      expect(found.stdout).toContain('the file ends at no. 7, but');
+      expect(found.stdout).toContain('the log ends at no. 7, but');
       expect(found.stdout).toContain('no. 9');
     }
     expect(check(cut, '--heads', 'heads.json', '--to', '2026-03-03').status).toBe(0);

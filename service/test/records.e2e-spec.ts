@@ -314,7 +314,7 @@ describe('GET /api/records/state', () => {
   });
 
   test.each([
-    ['in the middle', 'DELETE FROM entry WHERE sequence = 2', 'no. 2 is missing'],
+    ['in the middle', 'DELETE FROM entry WHERE sequence = 2', 'No. 2 is missing.'],
     ['at the end', 'DELETE FROM entry WHERE sequence = 4', 'tail is cut off'],
   ])('sees that an entry is gone %s', async (_, sql, words) => {
     await notesOn('2026-03-03', 4);

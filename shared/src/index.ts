@@ -153,7 +153,7 @@ export type { LogCheckOptions } from './records/log-check';
 export { formatLogLine, readLogLine } from './records/log-line';
 export type { KeptEntry, LineRefusal, LogLine } from './records/log-line';
 export type { ChangedPart, EntryPlace, LogFault, LogHead, LogNote, LogVerdict } from './records/log-verdict';
-export { formatLogFault, formatLogNote } from './records/log-words';
+export { formatEntryFault, formatLogFault, formatLogNote } from './records/log-words';
 export { hashEnvelope, noPreviousHash, sealEntry } from './records/seal';
 export type { Envelope, Seal, SealableEntry } from './records/seal';
 

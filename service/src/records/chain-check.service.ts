@@ -1,11 +1,12 @@
 import { setImmediate as breathe } from 'node:timers/promises';
 import { Injectable, Logger } from '@nestjs/common';
 import {
+  type CHAIN_STATES,
   type Instant,
   LogCheck,
   type LogHead,
   columnsOf,
-  formatLogFault,
+  formatEntryFault,
   formatLogLine,
 } from '@stubpost/shared';
 import { Clock } from '../common/clock';
@@ -25,12 +26,14 @@ export interface ChainFault {
 
 /** What the check of the server's own log has come to. */
 export interface ChainReport {
-  state: 'waiting' | 'checking' | 'whole' | 'broken';
+  state: (typeof CHAIN_STATES)[number];
   checkedTo: number;
   checkedAt: Instant | null;
   tookMilliseconds: number | null;
   faults: ChainFault[];
   faultCount: number;
+  /** How far a check has come that is running now. */
+  runningTo: number | null;
 }
 
 /**
@@ -50,6 +53,7 @@ export class ChainCheck {
     tookMilliseconds: null,
     faults: [],
     faultCount: 0,
+    runningTo: null,
   };
 
   constructor(
@@ -58,7 +62,7 @@ export class ChainCheck {
     private readonly clock: Clock,
   ) {}
 
-  /** How it stands. While a check runs that began after a finished one, the outcome of the finished one stays. */
+  /** What the last finished check came to, and how far one has come that runs. */
   report(): ChainReport {
     return this.current;
   }
@@ -67,6 +71,7 @@ export class ChainCheck {
   run(): Promise<ChainReport> {
     this.running ??= this.check().finally(() => {
       this.running = null;
+      this.current = { ...this.current, runningTo: null };
     });
     return this.running;
   }
@@ -78,6 +83,7 @@ export class ChainCheck {
   }
 
   private async check(): Promise<ChainReport> {
+    this.current = { ...this.current, runningTo: 0 };
     const beganAt = this.clock.now();
     const began = performance.now();
     const heads: LogHead[] = await this.heads.published();
@@ -90,14 +96,14 @@ export class ChainCheck {
       const last = entries.at(-1);
       if (last === undefined) break;
       next = last.sequence + 1;
-      this.current = { ...this.current, state: inProgress(this.current), checkedTo: last.sequence };
+      this.current = { ...this.current, runningTo: last.sequence };
       await breathe();
     }
     if (this.isStopping) return this.current;
     const reached = check.newest?.sequence ?? 0;
     const verdict = check.end();
     const faults = [
-      ...verdict.faults.map((fault) => ({ sequence: sequenceOf(fault), words: formatLogFault(fault) })),
+      ...verdict.faults.map((fault) => ({ sequence: sequenceOf(fault), words: formatEntryFault(fault) })),
       ...columns,
       ...(reached < lastNumber ? [cutTail(reached, lastNumber)] : []),
     ];
@@ -109,6 +115,7 @@ export class ChainCheck {
       tookMilliseconds: Math.round(performance.now() - began),
       faults: faults.slice(0, mostFaultsTold),
       faultCount,
+      runningTo: null,
     };
     this.tell();
     return this.current;
@@ -130,9 +137,6 @@ export class ChainCheck {
     else this.logger.debug(`the sealed log is whole up to no. ${checkedTo}`);
   }
 }
-
-const inProgress = ({ state }: ChainReport): ChainReport['state'] =>
-  state === 'waiting' ? 'checking' : state;
 
 function sequenceOf(fault: { sequence?: number } | object): number | null {
   return 'sequence' in fault && typeof fault.sequence === 'number' ? fault.sequence : null;

@@ -22,21 +22,23 @@ export const dailyHeadSchema = z.object({
 });
 export type WireDailyHead = z.infer<typeof dailyHeadSchema>;
 
-/** What a check of the server's own log can come to. `waiting` until the first one has begun. */
-export const CHAIN_STATES = ['waiting', 'checking', 'whole', 'broken'] as const;
+/** What the last check of the server's own log came to; `waiting` until one has come to its end. */
+export const CHAIN_STATES = ['waiting', 'whole', 'broken'] as const;
 
 /** The state of the log in the server's own database. */
 export const logStateSchema = z.object({
   chain: z.object({
     state: z.enum(CHAIN_STATES),
-    /** Entries looked at so far by the check that runs or ran last, from no. 1. */
+    /** The last entry that check has seen, from no. 1 on. */
     checkedTo: z.number().int(),
-    /** When that check began, and the last entry that it has seen came to an end. */
+    /** When it began. */
     checkedAt: z.string().nullable(),
     tookMilliseconds: z.number().int().nullable(),
     /** What is wrong, in words, the first first. */
     faults: z.array(z.object({ sequence: z.number().int().nullable(), words: z.string() })),
     faultCount: z.number().int(),
+    /** How far a check has come that is running now; null when none is. */
+    runningTo: z.number().int().nullable(),
   }),
   entries: z.number().int(),
   /** The newest entry: whoever notes it down can later see whether the log up to it is still the same. */

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { aSealedLog, seededRandom } from '../testing';
 import { ENTRY_KINDS } from '../turn/entry';
 import { LogCheck } from './log-check';
-import { formatLogFault, formatLogNote } from './log-words';
+import { formatEntryFault, formatLogFault, formatLogNote } from './log-words';
 import type { LogHead, LogVerdict } from './log-verdict';
 
 const sha256 = (text: string): string => createHash('sha256').update(text, 'utf8').digest('hex');
@@ -302,6 +302,10 @@ describe('the words', () => {
       for (const fault of checked(of, [newest]).faults)
         expect(formatLogFault(fault)).toMatch(/^Line \d+\b.*(no\. \d|cannot be read).*\.$/);
     }
+    expect(formatEntryFault({ kind: 'missing', line: 7, from: 7, to: 7 })).toBe('No. 7 is missing.');
+    expect(formatEntryFault({ kind: 'moved', line: 7, sequence: 8, id: 'e8' })).toBe(
+      'No. 8 (e8): does not stand in the order of the log.',
+    );
     expect(formatLogFault({ kind: 'missing', line: 1204, from: 1204, to: 1206 })).toBe(
       'Line 1,204: no. 1,204 to 1,206 are missing before it.',
     );

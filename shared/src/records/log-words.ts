@@ -42,6 +42,15 @@ export function formatLogFault(fault: LogFault): string {
   }
 }
 
+/** The same of a log without lines, such as a table: "No. 1,204 (7a1d…): what the entry says was changed …". */
+export function formatEntryFault(fault: LogFault): string {
+  const words = formatLogFault(fault)
+    .replace(/^Line [\d,]+[,:]? /, '')
+    .replace(/ in line [\d,]+/, '')
+    .replace(/ before it\.$/, '.');
+  return words.charAt(0).toUpperCase() + words.slice(1);
+}
+
 type HeadFault = Extract<LogFault, { kind: 'wrong-start' | 'not-the-head' | 'cut' | 'unended' }>;
 
 function headFaultWords(fault: HeadFault): string {
@@ -53,7 +62,7 @@ function headFaultWords(fault: HeadFault): string {
     case 'not-the-head':
       return `${who(fault)}: does not have the hash of ${head(fault.head)}: it, or something before it, was changed and the chain made anew.`;
     case 'cut':
-      return `${at(fault.line)}: the file ends at ${no(fault.lastSequence)}, but ${head(fault.head)} lies behind it: the tail is cut off.`;
+      return `${at(fault.line)}: the log ends at ${no(fault.lastSequence)}, but ${head(fault.head)} lies behind it: the tail is cut off.`;
     case 'unended':
       return `${at(fault.line)}: has no end: the file stops in the middle.`;
     default:
