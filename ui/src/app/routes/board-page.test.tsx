@@ -374,7 +374,7 @@ describe('the panel of a turn', () => {
     expect(within(form).getByText('17:06:10')).toBeVisible();
     await user.type(within(form).getByLabelText('Should be'), '1705');
     await user.selectOptions(within(form).getByLabelText('Reason'), 'wrong time');
-    await user.click(within(form).getByRole('button', { name: 'Record' }));
+    await user.click(within(form).getByRole('button', { name: 'Ask for it' }));
     await waitFor(() => expect(sentEntries(server)).toHaveLength(1));
     expect(sentEntries(server)[0]).toMatchObject({
       kind: 'corrected',

@@ -14,8 +14,10 @@ export function CorrectionsPage() {
   if (isPending) return <LoadingRows what="terminals" />;
   if (terminal === null) return <EmptyState words="There is no terminal here that you may look at." />;
   return (
-    <>
-      <PageHeader title={`Corrections, ${terminal.name}`} />
+    <div className="sp-page">
+      <PageHeader title="Corrections">
+        <span className="muted">{terminal.name}</span>
+      </PageHeader>
       <CorrectionsView
         key={terminal.code}
         terminal={terminal}
@@ -25,6 +27,6 @@ export function CorrectionsPage() {
           })
         }
       />
-    </>
+    </div>
   );
 }

@@ -105,7 +105,7 @@ function EntryForm({ target, turn, onClose, onRecorded }: FormProps & { turn: Tu
           <>
             <Button onClick={onClose}>Cancel</Button>
             <Button type="submit" intent="primary" loading={form.isSending} disabled={form.waiting !== null}>
-              {form.problem === null ? 'Record' : 'Try again'}
+              {form.problem === null ? submitWords(target) : 'Try again'}
             </Button>
           </>
         }
@@ -113,6 +113,8 @@ function EntryForm({ target, turn, onClose, onRecorded }: FormProps & { turn: Tu
     </form>
   );
 }
+
+const submitWords = ({ act }: ActTarget): string => (act === 'corrected' ? 'Ask for it' : 'Record');
 
 interface SecondBarProps {
   words: string;

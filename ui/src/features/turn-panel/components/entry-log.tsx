@@ -53,15 +53,14 @@ export function EntryLog({ turn, onTakeBack }: EntryLogProps) {
         <table className={styles.log}>
           <caption className="unseen">Entries of this turn, the latest first</caption>
           <colgroup>
-            {[64, 0, 112, 66, 62].map((width, index) => (
+            {[64, 0, 58, 62].map((width, index) => (
               <col key={index} {...(width === 0 ? {} : { style: { width } })} />
             ))}
           </colgroup>
           <thead>
             <tr>
               <th scope="col">Time</th>
-              <th scope="col">Entry</th>
-              <th scope="col">How known</th>
+              <th scope="col">Entry, how it is known</th>
               <th scope="col" className={styles.number}>
                 Number
               </th>
@@ -84,7 +83,7 @@ function LogRow({ line, turn, onTakeBack }: EntryLogProps & { line: LogLine }) {
   return (
     <tr className={isWithdrawn ? styles.struck : undefined}>
       <td>
-        {line.time}
+        <span className={styles.when}>{line.time}</span>
         {line.replaced.map((time) => (
           <del key={time} className={styles.replaced}>
             <span className="unseen">, before </span>
@@ -93,7 +92,7 @@ function LogRow({ line, turn, onTakeBack }: EntryLogProps & { line: LogLine }) {
         ))}
       </td>
       <td>
-        {words}
+        <span className={styles.said}>{words}</span> <span className={styles.plain}>{knownWords(entry)}</span>
         {isWithdrawn && <span className="unseen">, withdrawn</span>}
         {line.remarks.map((remark) => (
           <span key={remark} className={styles.since}>
@@ -101,7 +100,6 @@ function LogRow({ line, turn, onTakeBack }: EntryLogProps & { line: LogLine }) {
           </span>
         ))}
       </td>
-      <td title={knownWords(entry)}>{knownWords(entry)}</td>
       <td className={styles.number}>{numbers.format(entry.sequence)}</td>
       <td className={styles.take}>
         <TakeBack line={line} turn={turn} onTakeBack={onTakeBack} />

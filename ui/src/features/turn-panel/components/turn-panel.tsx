@@ -13,6 +13,7 @@ import { useTurnAt } from '../../../lib/turn/use-turn-at';
 import { isTyping, usePageKey } from '../../../lib/use-key';
 import { useNow } from '../../../lib/use-now';
 import { actsOf, type ActTarget, type EntryAct } from '../model/entry-acts';
+import { isOutsideQuestions } from '../model/question-words';
 import { squeezeOf, squeezeWords } from '../model/squeeze';
 import { EntryLog } from './entry-log';
 import { PanelHead } from './panel-head';
@@ -169,7 +170,7 @@ function PanelBody(props: TurnPanelProps & { turn: TurnNow; titleId: string }) {
           <ForecastWords turn={turn} now={now} />
           <TurnFacts turn={turn} now={now} acts={acts} onAct={open} />
           <Reported turn={turn} />
-          <Findings findings={turn.findings.filter(isFinding)} />
+          <Findings findings={turn.findings.filter(isOutsideQuestions)} />
         </div>
       </div>
       <footer className={styles.foot}>
@@ -181,9 +182,6 @@ function PanelBody(props: TurnPanelProps & { turn: TurnNow; titleId: string }) {
     </>
   );
 }
-
-/** What is in question stands in a block of its own, with the choice. */
-const isFinding = (finding: string): boolean => !finding.endsWith('Which one?');
 
 /** What is wrong with the entries, in words. Nothing where nothing is. */
 function Findings({ findings }: { findings: readonly string[] }) {

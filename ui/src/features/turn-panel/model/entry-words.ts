@@ -42,9 +42,9 @@ export function entryWords(
     case 'cannot-do':
       return `${step} cannot be done: ${entry.reason ?? ''}`;
     case 'withdrawn':
-      return `Takes back ${target()}: ${entry.reason ?? ''}`;
+      return `Withdrawal of ${target()}: ${entry.reason ?? ''}`;
     case 'corrected':
-      return `Corrects ${target()}${newWords(entry, zone)}: ${entry.reason ?? ''}`;
+      return `Correction of ${target()},${newWords(entry, zone)}: ${entry.reason ?? ''}`;
     case 'crew':
       return `${nameOf(entry, 'person')} as ${textOf(entry, 'as')}`;
     case 'relief':
@@ -96,7 +96,7 @@ function targetWords(
   const rest = new Map([...byId].filter(([id]) => id !== entry.id));
   const words = lowerFirst(entryWords(target, labels, zone, rest));
   if (target.kind === 'corrected' || target.kind === 'withdrawn') return words;
-  const at = target.observedAt === undefined ? '' : ` of ${clockText(Date.parse(target.observedAt), zone)}`;
+  const at = target.observedAt === undefined ? '' : `, ${clockText(Date.parse(target.observedAt), zone)}`;
   return `${words}${at} ${SOURCE_WORDS[target.source]}`;
 }
 

@@ -51,7 +51,7 @@ describe('a line of the log', () => {
       words: 'Cab brake check',
     });
     expect(lineOf('fix', [check, corrected]).words).toBe(
-      'Corrects cab brake check of 17:25:00 by hand to 17:22:41: misread',
+      'Correction of cab brake check, 17:25:00 by hand, to 17:22:41: misread',
     );
   });
 
@@ -90,17 +90,17 @@ describe('a line of the log', () => {
   });
 
   it.each<[string, Partial<WireEntry> & Record<string, unknown>, string]>([
-    ['agreed', { target: 'check' }, 'Agrees with cab brake check of 17:25:00 by hand'],
+    ['agreed', { target: 'check' }, 'Agrees with cab brake check, 17:25:00 by hand'],
     [
       'disagreed',
       { target: 'check', reason: 'not tested' },
-      'Does not agree with cab brake check of 17:25:00 by hand: not tested',
+      'Does not agree with cab brake check, 17:25:00 by hand: not tested',
     ],
-    ['ruled', { target: 'check', considered: [] }, 'Ruled: cab brake check of 17:25:00 by hand counts'],
+    ['ruled', { target: 'check', considered: [] }, 'Ruled: cab brake check, 17:25:00 by hand counts'],
     [
       'correction-approved',
       { target: 'fix' },
-      'Approves: corrects cab brake check of 17:25:00 by hand to 17:22:41: misread',
+      'Approves: correction of cab brake check, 17:25:00 by hand, to 17:22:41: misread',
     ],
     ['defect', { car: '1412', cause: 'door', note: 'leaf 2' }, 'Bad order, car 1412, door: leaf 2'],
     ['defect', { car: null, cause: 'heating' }, 'Bad order, the set, heating'],

@@ -7,6 +7,9 @@ import type { TurnNow } from '../../../lib/turn/turn-now';
 export type Question = NonNullable<WireTurnMatters['inQuestion']>[number];
 export type QuestionAccount = Question['accounts'][number];
 
+/** What is in question stands in a block of its own, with the choice: whether a remark is about something else. */
+export const isOutsideQuestions = (remark: string): boolean => !remark.endsWith('Which one?');
+
 /** What is in question: "Arrival", or the step's short label. */
 export function subjectOf(question: Question, turn: TurnNow): string {
   if (question.step === 'arrival') return 'Arrival';

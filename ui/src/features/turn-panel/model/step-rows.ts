@@ -2,6 +2,7 @@ import { SOURCE_WORDS } from '../../../components/words';
 import { timeText, clockText } from '../../../lib/turn/time-text';
 import type { StepNow, TurnNow } from '../../../lib/turn/turn-now';
 import { nextStep } from '../../../lib/turn/step-words';
+import { isOutsideQuestions } from './question-words';
 
 /** One row of the steps table, as texts. */
 export interface StepRow {
@@ -66,7 +67,7 @@ function stepRow(step: StepNow, turn: TurnNow, isNext: boolean): StepRow {
     due: step.dueAt === null ? dash : timeText(step.dueAt, zone),
     latest: step.latestFinishAt === null || !step.holdsDeparture ? dash : timeText(step.latestFinishAt, zone),
     isEstimate: false,
-    remarks: step.remarks,
+    remarks: step.remarks.filter(isOutsideQuestions),
   };
   if (step.doneAt !== null) return { ...base, done: clockText(step.doneAt, zone), known: knownOf(step) };
   return { ...base, ...openWords(step, turn) };
