@@ -13,6 +13,7 @@ const { PeopleService } = dist('people/people.service');
 const { SignInService } = dist('auth/sign-in.service');
 const { SessionCookie } = dist('auth/session-cookie');
 const { TerminalsService } = dist('terminals/terminals.service');
+const { ExtraTurns } = dist('turns/extra-turns.service');
 const { TurnsService } = dist('turns/turns.service');
 const { TurnFiles } = dist('turns/turn-files');
 const { TurnBoards } = dist('turns/turn-boards');
@@ -38,7 +39,7 @@ const serviceDate = new Intl.DateTimeFormat('en-CA', { timeZone: 'America/New_Yo
 const ids = [];
 for (let turn = 0; turn < turns; turn += 1) {
   const at = base + turn * 30_000;
-  const file = await app.get(TurnsService).createExtra(
+  const file = await app.get(ExtraTurns).create(
     {
       terminal: 'OSQ',
       serviceDate,
