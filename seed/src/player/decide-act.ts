@@ -1,5 +1,6 @@
 import { addSeconds, secondsBetween, type Instant, type TurnFacts } from '@stubpost/shared';
 import type { Act } from '../story/act';
+import { stepEntryId } from './act-entry';
 
 /** What becomes of an act whose time has come: it is told, put off, or left out because somebody else acted. */
 export type Decision = { kind: 'tell'; act: Act } | { kind: 'wait' } | { kind: 'leave-out' };
@@ -58,6 +59,12 @@ export function decideAct(scene: ActScene): Decision {
       const { as } = act.content;
       const taken = facts.crew.some((member) => member.as === as && !member.carriedOver);
       return taken ? leaveOut : tell(act);
+    }
+    case 'agreed':
+    case 'corrected': {
+      const target = stepEntryId(facts.planned.id, act.content.step);
+      const isThere = facts.entries.some((entry) => entry.id === target);
+      return isThere && !isVisited(scene) ? tell(act) : leaveOut;
     }
     default:
       return tell(act);

@@ -1,8 +1,17 @@
 import type { INestApplicationContext } from '@nestjs/common';
-import { AlertDesk, Clock, Reader } from '@stubpost/service';
-import { secondsBetween, type AlertCause, type CalendarDate, type Instant } from '@stubpost/shared';
+import { AlertDesk, Clock, Reader, TurnFiles, TurnsService } from '@stubpost/service';
+import {
+  formatInstant,
+  secondsBetween,
+  type AlertCause,
+  type CalendarDate,
+  type Instant,
+  type RecordCorrection,
+  type RecordEntryRequest,
+} from '@stubpost/shared';
 import { randomOf } from '../railroad/random';
 import type { Cast, CastMember } from './cast';
+import { entryIdOf } from './entry-id';
 
 interface AlertRow {
   id: string;
@@ -38,6 +47,22 @@ function causeOf(alert: AlertRow): string {
   );
 }
 
+/** One in six corrections is declined. Our choice. */
+const declinedShare = 1 / 6;
+
+function decisionOn({ entryId: target }: RecordCorrection, now: Instant): RecordEntryRequest {
+  const base = {
+    id: entryIdOf(`${target} decision`),
+    observedAt: formatInstant(now),
+    source: 'by-hand',
+    target,
+  } as const;
+  const declined = randomOf(`decision|${target}`).next() < declinedShare;
+  return declined
+    ? { ...base, kind: 'correction-declined', reason: 'the time of the event recorder stands' }
+    : { ...base, kind: 'correction-approved' };
+}
+
 /** The demo's desk: takes alerts, and names the causes of those that are over. Half of them it leaves to visitors. */
 export class DeskPlayer {
   constructor(
@@ -67,6 +92,27 @@ export class DeskPlayer {
     );
     for (const alert of alerts)
       await this.app.get(AlertDesk).close(this.actOn(alert, now), { cause: causeOf(alert) });
+    await this.decideCorrections(serviceDate, now);
+  }
+
+  /** Decides on the corrections of a past day; those of today are left to visitors. */
+  private async decideCorrections(serviceDate: CalendarDate, now: Instant): Promise<void> {
+    const supervisor = this.cast.withRole('supervisor')[0];
+    if (supervisor === undefined) throw new Error('the demo has no supervisor');
+    const turns = await this.app
+      .get(Reader)
+      .query<{ id: string }>('SELECT id FROM turn WHERE service_date = ? AND waiting_count > 0', [
+        serviceDate,
+      ]);
+    for (const { id: turnId } of turns) {
+      const file = await this.app.get(TurnFiles).find(turnId);
+      const waiting = (file?.facts.corrections ?? []).filter((each) => each.state === 'waiting');
+      await this.app
+        .get(TurnsService)
+        .recordPastEntries(
+          waiting.map((each) => ({ turnId, request: decisionOn(each, now), actor: supervisor, now })),
+        );
+    }
   }
 
   private async take(alert: AlertRow, now: Instant): Promise<void> {

@@ -12,7 +12,11 @@ export type ActContent =
   | { kind: 'step-done'; step: string; reading?: Reading }
   | { kind: 'departure' }
   | { kind: 'cannot-do'; step: string; reason: string }
-  | { kind: 'note'; note: string };
+  | { kind: 'note'; note: string }
+  /** The crew's word to a step that the desk wrote by radio. */
+  | { kind: 'agreed'; step: string }
+  /** What a step's time should have been. */
+  | { kind: 'corrected'; step: string; correctedAt: Instant; reason: string };
 
 /** One act of a story: what happened when, and when and by whom it is written down. */
 export interface Act {

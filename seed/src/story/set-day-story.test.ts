@@ -111,4 +111,21 @@ describe('the story of a set’s day', () => {
     expect(byRadio.length).toBeGreaterThan(50);
     expect(byRadio.every((act) => act.saidBy !== undefined)).toBe(true);
   });
+
+  it('answers most of what the desk heard, and asks for a correction now and then after leaving', () => {
+    const stories = days.flatMap((day) => storiesOf(day)).map(({ story }) => story.acts);
+    const acts = stories.flat();
+    const byRadio = acts.filter(
+      (act) => act.source === 'by-radio' && act.content.kind === 'step-done',
+    ).length;
+    const agreed = acts.filter((act) => act.content.kind === 'agreed').length;
+    expect(agreed).toBeLessThan(byRadio);
+    expect(agreed).toBeGreaterThan(byRadio * 0.7);
+    const asked = stories.flatMap((own) => {
+      const left = own.find((act) => act.content.kind === 'departure');
+      return own.filter((act) => act.content.kind === 'corrected').map((act) => ({ act, left }));
+    });
+    expect(asked.length).toBeGreaterThan(3);
+    for (const { act, left } of asked) expect(act.observedAt).toBeGreaterThan(left?.observedAt ?? Infinity);
+  });
 });

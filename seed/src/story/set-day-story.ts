@@ -2,6 +2,7 @@ import { addSeconds, secondsBetween, stepsFor, type Instant, type PlanStep } fro
 import { randomOf, type Random } from '../railroad/random';
 import type { Act, SetDay, StoryTurn, TurnStory } from './act';
 import { demoDay, hourAt, isRush, minutes, type DemoDay } from './demo-day';
+import { afterwordsOf } from './afterwords';
 import { playSteps } from './step-story';
 
 /** Running time that a late train wins back on a trip. Our choice for the demo. */
@@ -68,9 +69,8 @@ export function storyOfSetDay(
   const day = demoDay(setDay.turns[0]?.serviceDate ?? '');
   let carriedSeconds = 0;
   return setDay.turns.map((turn, index) => {
-    const random = randomOf(
-      `${turn.serviceDate}|${turn.terminal}|${turn.inboundTrain}|${turn.outboundTrain}`,
-    );
+    const name = `${turn.serviceDate}|${turn.terminal}|${turn.inboundTrain}|${turn.outboundTrain}`;
+    const random = randomOf(name);
     const shift = shiftOf(setDay, index);
     const crew = setDay.shifts[shift];
     if (!crew) throw new Error(`set ${setDay.set} has no crew for shift ${shift}`);
@@ -103,7 +103,7 @@ export function storyOfSetDay(
       cars: setDay.cars,
       engineerName: crew.engineerName,
     });
-    acts.push(...work.acts);
+    acts.push(...work.acts, ...afterwordsOf({ name, acts: work.acts, departedAt: work.departedAt }));
     if (work.departedAt !== null && turn.scheduledDepartureAt !== null) {
       acts.push(byFeed(work.departedAt, { kind: 'departure' }, random));
       carriedSeconds = Math.max(0, secondsBetween(turn.scheduledDepartureAt, work.departedAt));

@@ -18,7 +18,13 @@ const WORDS: readonly { word: string; means: string }[] = [
   },
   {
     word: 'Withdrawn, corrected',
-    means: 'nothing is deleted: taking back and correcting are entries of their own, and the first one stays',
+    means:
+      'nothing is deleted: taking back and correcting are entries of their own, and the first one stays. Once the train has left they wait until somebody else approves them',
+  },
+  {
+    word: 'In question, ruling',
+    means:
+      'two times for one step, or somebody does not agree; which one counts is said by the dispatcher or the supervisor',
   },
   {
     word: 'Taken, set aside, cleared, closed',
