@@ -27,6 +27,7 @@ export function ActBody({ page, lead, isAfter, ways, onGoOn }: ActBodyProps) {
   const isDue = act.kind === 'step' && (act.step.state === 'due' || act.step.state === 'overdue');
   // A shut bar asks for nothing yet: first its reason, then cars and keys.
   const isShut = lock !== null && !isLockLifted;
+  const hasKeys = page.active !== null && !isAfter && !isShut;
   if (act.kind === 'nothing') return <Finished ways={ways} />;
   return (
     <>
@@ -65,8 +66,8 @@ export function ActBody({ page, lead, isAfter, ways, onGoOn }: ActBodyProps) {
         />
       )}
       {/* Where keys stand above the bar, nothing that takes back stands between them. */}
-      {(isAfter || page.active === null) && <ActLines act={act} ways={ways} />}
-      <SecondaryButtons page={page} ways={ways} isAfter={isAfter} />
+      {!hasKeys && <ActLines act={act} ways={ways} />}
+      <SecondaryButtons page={page} ways={ways} isAfter={isAfter} hasKeys={hasKeys} />
     </>
   );
 }

@@ -46,10 +46,13 @@ export function SecondaryButtons({
   page,
   ways,
   isAfter,
+  hasKeys,
 }: {
   page: ActOnPage;
   ways: ActWays;
   isAfter: boolean;
+  /** A number pad stands on the page, and no lines that lead to the steps and the card. */
+  hasKeys: boolean;
 }) {
   const { me } = useTurnScene();
   const { act } = page;
@@ -64,6 +67,7 @@ export function SecondaryButtons({
         button('Can’t do', () =>
           ways.onGo({ kind: 'cannot-do', step: act.step.key, label: act.step.shortLabel }),
         )}
+      {hasKeys && button('All steps', () => ways.onGo({ kind: 'steps' }))}
       {button('Defect', () => ways.onGo({ kind: 'defect' }))}
       {button('Desk', () => ways.onGo({ kind: 'note' }))}
       {!isAfter && !page.asksTime && button('Earlier', () => page.setAsksTime(true))}

@@ -7,17 +7,21 @@ import styles from './phone-parts.module.css';
 export function TrainFacts({ turn, now, marker }: { turn: WireTurn; now: Instant; marker: string | null }) {
   const train = turn.outbound?.train ?? turn.inbound?.train ?? '';
   return (
-    <section className={styles.facts} aria-label="Train">
-      <h1>Train {train}</h1>
-      <p className={`${styles.track} ${styles.side}`}>
-        {turn.track === null ? 'No track yet' : `Track ${turn.track}`}
-      </p>
-      <p>
-        <LeavingWords turn={turn} now={now} />
-      </p>
-      <p className={styles.side}>
-        {turn.plannedTrack !== null && turn.plannedTrack !== turn.track ? `not ${turn.plannedTrack}` : marker}
-      </p>
+    <section aria-label="Train">
+      <div className={styles.ends}>
+        <h1>Train {train}</h1>
+        <p className={styles.track}>{turn.track === null ? 'No track yet' : `Track ${turn.track}`}</p>
+      </div>
+      <div className={styles.ends}>
+        <p>
+          <LeavingWords turn={turn} now={now} />
+        </p>
+        <p>
+          {turn.plannedTrack !== null && turn.plannedTrack !== turn.track
+            ? `not ${turn.plannedTrack}`
+            : marker}
+        </p>
+      </div>
     </section>
   );
 }
