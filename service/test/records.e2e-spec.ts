@@ -284,6 +284,25 @@ describe('GET /api/records/state', () => {
     expect((await stateFor('supervisor')).chain.checkedAt).toBe('2026-03-04T12:00:00.000Z');
   });
 
+  test('checks what comes in as it comes, and everything again once something was wrong', async () => {
+    await notesOn('2026-03-03', 2);
+    await checkChain();
+    await notesOn('2026-03-04', 3);
+    const follow = () => railroad.app.get(ChainCheck).follow();
+    expect(await follow()).toMatchObject({
+      state: 'whole',
+      checkedTo: 5,
+      checkedAt: Date.parse('2026-03-04T12:00:00Z'),
+    });
+    await withoutTriggers('entry_not_changed');
+    const before = await kept('kind');
+    await tamper(`UPDATE entry SET kind = 'hold' WHERE sequence = 2`);
+    expect(await follow()).toMatchObject({ state: 'whole' });
+    expect(await checkChain()).toMatchObject({ state: 'broken' });
+    await tamper('UPDATE entry SET kind = ? WHERE sequence = 2', before);
+    expect(await follow()).toMatchObject({ state: 'whole', checkedTo: 5 });
+  });
+
   const columns: [name: string, value: string | number][] = [
     ['id', 'another'],
     ['subject_kind', 'set'],

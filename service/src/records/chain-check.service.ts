@@ -36,16 +36,26 @@ export interface ChainReport {
   runningTo: number | null;
 }
 
+/** A check that has read up to some number, and may read on from there. */
+interface Reading {
+  check: LogCheck;
+  columns: ChainFault[];
+  next: number;
+  tookMilliseconds: number;
+}
+
 /**
  * Checks the log in the database from no. 1, with the very check that the stand-alone checker does, and the columns
  * that repeat what the bodies say, the published heads, and that no number is given out without an entry. Works in
- * small slices between requests.
+ * small slices between requests. While the log is whole, new entries are checked as they come.
  */
 @Injectable()
 export class ChainCheck {
   private readonly logger = new Logger(ChainCheck.name);
   private running: Promise<ChainReport> | null = null;
   private isStopping = false;
+  /** The last check, as long as it has found nothing: it can go on with what came in since. */
+  private whole: Reading | null = null;
   private current: ChainReport = {
     state: 'waiting',
     checkedTo: 0,
@@ -67,13 +77,15 @@ export class ChainCheck {
     return this.current;
   }
 
-  /** Checks everything; whoever asks while a check runs gets that one. */
+  /** Checks everything from no. 1; whoever asks while a check runs gets that one. */
   run(): Promise<ChainReport> {
-    this.running ??= this.check().finally(() => {
-      this.running = null;
-      this.current = { ...this.current, runningTo: null };
-    });
-    return this.running;
+    return this.once(() => this.checkAll());
+  }
+
+  /** Checks what came in since the last check; everything where that one found something wrong. */
+  follow(): Promise<ChainReport> {
+    const { whole } = this;
+    return this.once(() => (whole === null ? this.checkAll() : this.readOn(whole)));
   }
 
   /** Lets a check under way end soon, without a result. */
@@ -82,37 +94,56 @@ export class ChainCheck {
     await this.running?.catch(() => undefined);
   }
 
-  private async check(): Promise<ChainReport> {
+  private once(check: () => Promise<ChainReport>): Promise<ChainReport> {
+    this.running ??= check().finally(() => {
+      this.running = null;
+      this.current = { ...this.current, runningTo: null };
+    });
+    return this.running;
+  }
+
+  private async checkAll(): Promise<ChainReport> {
     this.current = { ...this.current, runningTo: 0 };
-    const beganAt = this.clock.now();
-    const began = performance.now();
     const heads: LogHead[] = await this.heads.published();
-    const lastNumber = await this.log.lastNumberGiven();
     const check = new LogCheck({ sha256, heads });
-    const columns: ChainFault[] = [];
-    for (let next = 1; !this.isStopping;) {
-      const entries = await this.log.entriesFrom(next, sliceLength);
-      for (const entry of entries) this.take(check, entry, columns);
+    return this.readOn({ check, columns: [], next: 1, tookMilliseconds: 0 });
+  }
+
+  private async readOn(reading: Reading): Promise<ChainReport> {
+    this.whole = null;
+    const began = performance.now();
+    const seenAt = this.clock.now();
+    const lastNumber = await this.log.lastNumberGiven();
+    while (!this.isStopping) {
+      const entries = await this.log.entriesFrom(reading.next, sliceLength);
+      for (const entry of entries) this.take(reading.check, entry, reading.columns);
       const last = entries.at(-1);
       if (last === undefined) break;
-      next = last.sequence + 1;
+      reading.next = last.sequence + 1;
       this.current = { ...this.current, runningTo: last.sequence };
       await breathe();
     }
     if (this.isStopping) return this.current;
+    reading.tookMilliseconds += Math.round(performance.now() - began);
+    return this.conclude(reading, { lastNumber, seenAt });
+  }
+
+  private conclude(reading: Reading, seen: { lastNumber: number; seenAt: Instant }): ChainReport {
+    const { check, columns, tookMilliseconds } = reading;
     const reached = check.newest?.sequence ?? 0;
     const verdict = check.end();
     const faults = [
       ...verdict.faults.map((fault) => ({ sequence: sequenceOf(fault), words: formatEntryFault(fault) })),
       ...columns,
-      ...(reached < lastNumber ? [cutTail(reached, lastNumber)] : []),
+      ...(reached < seen.lastNumber ? [cutTail(reached, seen.lastNumber)] : []),
     ];
     const faultCount = verdict.faultCount + faults.length - verdict.faults.length;
+    if (faultCount === 0) this.whole = reading;
     this.current = {
       state: faultCount === 0 ? 'whole' : 'broken',
       checkedTo: reached,
-      checkedAt: beganAt,
-      tookMilliseconds: Math.round(performance.now() - began),
+      checkedAt: seen.seenAt,
+      tookMilliseconds,
       faults: faults.slice(0, mostFaultsTold),
       faultCount,
       runningTo: null,

@@ -4,13 +4,10 @@ import { Clock } from '../common/clock';
 import { ChainCheck } from './chain-check.service';
 import { DailyHeads } from './daily-heads.service';
 
-/** Names of the timers, by which they can be stopped. */
-export const dailyHeadsTimer = 'daily-heads';
-export const chainCheckTimer = 'chain-check';
-
-const headsEveryMilliseconds = 60_000;
-/** The whole log is checked this often, and at each start. Our choice. */
-const checkEveryMilliseconds = 60 * 60_000;
+/** New entries are checked, and heads that are due published, this often. */
+const everyMilliseconds = 60_000;
+/** The whole log is checked anew this often, and at each start. Our choice. */
+const checkAllEveryMilliseconds = 60 * 60_000;
 
 /** Takes the time and has the daily heads published and the chain checked. */
 @Injectable()
@@ -27,7 +24,7 @@ export class RecordsJob implements OnApplicationBootstrap, OnModuleDestroy {
 
   onApplicationBootstrap(): void {
     void this.publish();
-    void this.check();
+    void this.checkAll();
   }
 
   /** What is under way is over before the database closes. */
@@ -37,17 +34,26 @@ export class RecordsJob implements OnApplicationBootstrap, OnModuleDestroy {
     await this.chain.stop();
   }
 
-  @Interval(dailyHeadsTimer, headsEveryMilliseconds)
+  @Interval(everyMilliseconds)
   publish(): Promise<void> {
     // One after the other: a slow one must not be overtaken by the next.
     if (!this.isStopping) this.publishing = this.publishing.then(() => this.publishNow());
     return this.publishing;
   }
 
-  @Interval(chainCheckTimer, checkEveryMilliseconds)
-  async check(): Promise<void> {
+  @Interval(everyMilliseconds)
+  follow(): Promise<void> {
+    return this.check(() => this.chain.follow());
+  }
+
+  @Interval(checkAllEveryMilliseconds)
+  checkAll(): Promise<void> {
+    return this.check(() => this.chain.run());
+  }
+
+  private async check(work: () => Promise<unknown>): Promise<void> {
     try {
-      if (!this.isStopping) await this.chain.run();
+      if (!this.isStopping) await work();
     } catch (error) {
       this.logger.error(`the log could not be checked: ${stackOf(error)}`);
     }

@@ -31,8 +31,9 @@ export const logStateSchema = z.object({
     state: z.enum(CHAIN_STATES),
     /** The last entry that check has seen, from no. 1 on. */
     checkedTo: z.number().int(),
-    /** When it began. */
+    /** When it was last at the end of the log; what it cannot know is what came in later. */
     checkedAt: z.string().nullable(),
+    /** Working time of that check from no. 1 on, what it has read later included. */
     tookMilliseconds: z.number().int().nullable(),
     /** What is wrong, in words, the first first. */
     faults: z.array(z.object({ sequence: z.number().int().nullable(), words: z.string() })),

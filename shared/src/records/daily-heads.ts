@@ -38,7 +38,7 @@ export class HeadFinder {
   private day: CalendarDate | null = null;
   private lastPoint: SealedPoint | null = null;
 
-  /** `last` is the newest head that is published already; entries are taken from the one behind it on. */
+  /** `last` is the newest head that is published already; entries are taken from the one after it on. */
   constructor(private last: DailyHead | null = null) {}
 
   /** Takes the next entry. Gives the head of the day before it when it is the first of another day. */

@@ -67,7 +67,7 @@ describe('a log as it was exported', () => {
       isWhole: true,
       metHeads: 2,
       metHead: headAt(5),
-      notes: [{ kind: 'behind-head', from: 6, to: lines.length }],
+      notes: [{ kind: 'after-head', from: 6, to: lines.length }],
     });
   });
 

@@ -225,8 +225,8 @@ export class LogCheck {
 
   private findCutTail(): void {
     const lastSequence = this.last?.sequence ?? 0;
-    const behind = this.heads.filter(({ sequence }) => sequence > lastSequence);
-    const [head] = behind.sort((a, b) => b.sequence - a.sequence);
+    const later = this.heads.filter(({ sequence }) => sequence > lastSequence);
+    const [head] = later.sort((a, b) => b.sequence - a.sequence);
     if (head !== undefined) this.note({ kind: 'cut', line: this.lines, lastSequence, head });
   }
 
@@ -240,7 +240,7 @@ export class LogCheck {
     const [first, last] = [this.first?.sequence ?? 0, this.last?.sequence ?? 0];
     if (this.heads.length === 0) notes.push({ kind: 'no-head' });
     else if (newest !== null && newest.sequence < last)
-      notes.push({ kind: 'behind-head', from: Math.max(newest.sequence + 1, first), to: last });
+      notes.push({ kind: 'after-head', from: Math.max(newest.sequence + 1, first), to: last });
     if (first > 1 && this.headsAt(first - 1).length > 0) notes.push({ kind: 'before-start', to: first - 1 });
     if (this.bodilessCount > 0)
       notes.push({ kind: 'without-body', count: this.bodilessCount, sequences: this.bodiless });

@@ -37,7 +37,7 @@ export type LogFault =
   /** Whole in itself, but not the entry that the next one was chained to. */
   | ({ kind: 'resealed'; next: EntryPlace } & EntryPlace)
   | { kind: 'missing'; line: number; from: number; to: number }
-  /** Stands behind an entry with a greater number. */
+  /** Stands after an entry with a greater number. */
   | ({ kind: 'moved' } & EntryPlace)
   /** A number that was there already; `isSame` when it is the same entry once more. */
   | ({ kind: 'repeated'; isSame: boolean } & EntryPlace)
@@ -54,8 +54,8 @@ export type LogFault =
 export type LogNote =
   /** No published head was given: a cut tail and a log that was made anew from the start cannot be seen. */
   | { kind: 'no-head' }
-  /** Entries behind the newest given head: no head vouches for them yet. */
-  | { kind: 'behind-head'; from: number; to: number }
+  /** Entries after the newest given head: no head vouches for them yet. */
+  | { kind: 'after-head'; from: number; to: number }
   /** Entries before the file begins; the head before it was met. */
   | { kind: 'before-start'; to: number }
   /** Bodies that are not in the file; the first numbers of them. */

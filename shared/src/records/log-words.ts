@@ -62,7 +62,7 @@ function headFaultWords(fault: HeadFault): string {
     case 'not-the-head':
       return `${who(fault)}: does not have the hash of ${head(fault.head)}: it, or something before it, was changed and the chain made anew.`;
     case 'cut':
-      return `${at(fault.line)}: the log ends at ${no(fault.lastSequence)}, but ${head(fault.head)} lies behind it: the tail is cut off.`;
+      return `${at(fault.line)}: the log ends at ${no(fault.lastSequence)}, but ${head(fault.head)} stands after it: the tail is cut off.`;
     case 'unended':
       return `${at(fault.line)}: has no end: the file stops in the middle.`;
     default:
@@ -102,8 +102,8 @@ export function formatLogNote(note: LogNote): string {
   switch (note.kind) {
     case 'no-head':
       return 'No published head was given. A tail that was cut off, or a chain that was made anew as a whole, cannot be seen.';
-    case 'behind-head':
-      return `${nos(note.from, note.to)}: behind the newest given head. The next head that is published will vouch for them.`;
+    case 'after-head':
+      return `${nos(note.from, note.to)}: after the newest given head. The next head that is published will vouch for them.`;
     case 'before-start':
       return `${nos(1, note.to)}: not in the file. It begins right after a published head, which it is chained to.`;
     case 'without-body':
