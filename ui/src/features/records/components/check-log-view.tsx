@@ -19,14 +19,14 @@ export function CheckLogView({ zone, ...takeAlong }: TakeAlongProps & { zone: st
         )}
         {state.isPending && <LoadingRows what="the state of the log" onRetry={() => void state.refetch()} />}
         {state.data !== undefined && <LogState state={state.data} zone={zone} />}
+        <TakeAlong {...takeAlong} />
+      </div>
+      <div className={styles.column}>
         {heads.error !== null && heads.data === undefined && (
           <ErrorState error={heads.error} onRetry={() => void heads.refetch()} />
         )}
         {heads.isPending && <LoadingRows what="daily heads" onRetry={() => void heads.refetch()} />}
         {heads.data !== undefined && <DailyHeads heads={heads.data} zone={zone} />}
-      </div>
-      <div className={styles.column}>
-        <TakeAlong {...takeAlong} />
         <SealMeaning />
       </div>
     </div>

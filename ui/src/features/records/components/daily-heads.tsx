@@ -37,7 +37,7 @@ export function DailyHeads({ heads, zone }: { heads: readonly WireDailyHead[]; z
       {heads.length === 0 ? (
         <p>No day has an entry yet.</p>
       ) : (
-        <div className="sp-table-scroll" tabIndex={0} role="region" aria-label="Daily heads">
+        <div className="sp-table-scroll" tabIndex={0} role="region" aria-label="Table of daily heads">
           <HTMLTable className={`sp-table ${styles.heads}`}>
             <thead>
               <tr>
@@ -45,7 +45,7 @@ export function DailyHeads({ heads, zone }: { heads: readonly WireDailyHead[]; z
                 <th scope="col" className="number">
                   Entries
                 </th>
-                <th scope="col">Head: first 12 characters, then all of it with its number</th>
+                <th scope="col">Head</th>
                 <th scope="col">Published</th>
               </tr>
             </thead>
@@ -63,9 +63,10 @@ export function DailyHeads({ heads, zone }: { heads: readonly WireDailyHead[]; z
         </div>
       )}
       <footer>
-        A head is the hash of the last entry of a day. It is published at 00:05 UTC on the next day and never
-        changes. Kept outside this server, on paper or in a mail box, it proves later that nothing up to it
-        was changed, added or taken out.
+        A head is the hash of the last entry of a day: its first 12 characters, then all of it with the number
+        of the entry. It is published at 00:05 UTC on the next day and never changes. Kept outside this
+        server, on paper or in a mail box, it proves later that nothing up to it was changed, added or taken
+        out.
       </footer>
     </section>
   );

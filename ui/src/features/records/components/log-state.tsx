@@ -53,8 +53,9 @@ export function LogState({ state, zone }: { state: WireLogState; zone: string })
         />
       </div>
       <footer>
-        Checked at each start, every hour, and when asked: each seal, each link, each column that repeats what
-        is sealed, the published heads, and that no number is given out without its entry.
+        New entries are checked every minute; all of them at each start, every hour and when asked: each seal,
+        each link, each column that repeats what is sealed, the published heads, and that no number is given
+        out without its entry.
       </footer>
     </section>
   );

@@ -25,10 +25,10 @@ export interface ChainWords {
 export function chainWords({ chain, entries: count }: WireLogState, zone: string): ChainWords {
   const running =
     chain.runningTo === null ? [] : [`A check is running: ${no(chain.runningTo)} of ${formatCount(count)}.`];
-  if (chain.state === 'waiting' || chain.checkedAt === null)
+  if (chain.state === 'waiting' || chain.checkedAt === null || (chain.checkedTo === 0 && count > 0))
     return {
       headline: count === 0 ? 'No entry yet' : 'Not checked yet',
-      lines: running.length > 0 ? running : ['The first check after the start of the server has not ended.'],
+      lines: running.length > 0 ? running : ['The first check since the server was started has not ended.'],
     };
   const when = `checked ${formatStamp(chain.checkedAt, zone)} in ${took(chain.tookMilliseconds ?? 0)}`;
   const since = count - chain.checkedTo;
