@@ -1,11 +1,16 @@
 import { existsSync } from 'node:fs';
 import path from 'node:path';
-import type { NextFunction, Request, RequestHandler, Response } from 'express';
+import {
+  static as serveFiles,
+  type NextFunction,
+  type Request,
+  type RequestHandler,
+  type Response,
+} from 'express';
 
 /** The part of an application this needs. */
 interface PageServer {
   use(handler: RequestHandler): unknown;
-  useStaticAssets(folder: string, options: { index: false; setHeaders: typeof setCaching }): unknown;
 }
 
 /**
@@ -15,7 +20,12 @@ interface PageServer {
  */
 export function serveUserInterface(app: PageServer, folder: string): void {
   const page = path.join(folder, 'index.html');
-  app.useStaticAssets(folder, { index: false, setHeaders: setCaching });
+  const files = serveFiles(folder, { index: false, setHeaders: setCaching });
+  app.use((request: Request, response: Response, next: NextFunction) => {
+    // No look at the disk for what is never a file: it was a fifth of the cost of a small answer.
+    if (isInterface(request)) next();
+    else files(request, response, next);
+  });
   app.use((request: Request, response: Response, next: NextFunction) => {
     if (!isPageAddress(request) || !existsSync(page)) {
       next();
@@ -26,9 +36,11 @@ export function serveUserInterface(app: PageServer, folder: string): void {
   });
 }
 
+const isInterface = (request: Request): boolean => /^\/api(\/|$)/.test(request.path);
+
 function isPageAddress(request: Request): boolean {
   if (request.method !== 'GET' && request.method !== 'HEAD') return false;
-  if (/^\/(api|assets)(\/|$)/.test(request.path)) return false;
+  if (isInterface(request) || /^\/assets(\/|$)/.test(request.path)) return false;
   return path.extname(request.path) === '';
 }
 
