@@ -32,6 +32,7 @@ const pages: ReadonlyArray<[role: string, path: string, window: 'desk' | 'phone'
     ['administrator', '/timetables', 'desk', /./],
     ['administrator', '/setup', 'desk', /./],
     ['supervisor', '/setup', 'desk', /./],
+    ['supervisor', '/records/corrections?state=all', 'desk', 'Corrections'],
     ['supervisor', '/me', 'desk', /./],
     ['dispatcher', '/keys', 'desk', /./],
     ['dispatcher', '/accessibility', 'desk', /./],

@@ -1,5 +1,6 @@
 import type { CorrectionState, ListedCorrection, WireTerminal } from '@stubpost/shared';
 import { useId } from 'react';
+import { formatServiceDate } from '../../../lib/time-display';
 import { askedText, decidedText, sidesOf, subjectText } from '../model/correction-view';
 import styles from './corrections.module.css';
 import { DecisionPart } from './decision-part';
@@ -24,7 +25,7 @@ export function CorrectionCard({ correction, terminal, onOpen }: CorrectionCardP
     <article className={`sp-panel ${styles.card}`} aria-labelledby={title}>
       <header>
         <h2 id={title}>{subjectText(correction)}</h2>
-        <span className="muted">{correction.serviceDate}</span>
+        <span className="muted">{formatServiceDate(correction.serviceDate)}</span>
         <span className={styles.state} data-state={correction.state}>
           {stateWords[correction.state]}
         </span>
