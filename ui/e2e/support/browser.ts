@@ -2,33 +2,34 @@ import { accessSync } from 'node:fs';
 import AxeBuilder from '@axe-core/playwright';
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
 
-const executablePath = process.env['CHROMIUM_PATH'] ?? '/usr/bin/chromium';
+/** The system's browser. */
+export const chromiumPath: string = process.env['CHROMIUM_PATH'] ?? '/usr/bin/chromium';
 
 /** Whether the browser is there; on a build machine a missing browser is a failure, not a reason to skip. */
 export function browserIsMissing(): boolean {
   try {
-    accessSync(executablePath);
+    accessSync(chromiumPath);
     return false;
   } catch {
-    if (process.env['CI'] === 'true') throw new Error(`no browser at ${executablePath}`);
+    if (process.env['CI'] === 'true') throw new Error(`no browser at ${chromiumPath}`);
     return true;
   }
 }
 
-/** Starts headless Chromium without its own background traffic. */
+/** Chromium without its own background traffic. */
+export const launchArguments: string[] = [
+  '--no-sandbox',
+  '--disable-gpu',
+  '--disable-quic',
+  '--no-first-run',
+  '--disable-background-networking',
+  '--disable-component-update',
+  '--disable-sync',
+];
+
+/** Starts headless Chromium. */
 export function openBrowser(): Promise<Browser> {
-  return chromium.launch({
-    executablePath,
-    args: [
-      '--no-sandbox',
-      '--disable-gpu',
-      '--disable-quic',
-      '--no-first-run',
-      '--disable-background-networking',
-      '--disable-component-update',
-      '--disable-sync',
-    ],
-  });
+  return chromium.launch({ executablePath: chromiumPath, args: launchArguments });
 }
 
 /** Window sizes of the two shells. */
