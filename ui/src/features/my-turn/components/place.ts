@@ -10,6 +10,7 @@ export type Place =
   | { kind: 'record'; key: string }
   | { kind: 'cannot-do'; step: string; label: string }
   | { kind: 'note' }
+  | { kind: 'annul' }
   | { kind: 'withdraw'; record: TurnRecord }
   | { kind: 'correct'; record: TurnRecord }
   | { kind: 'not-so'; entryId: string }

@@ -35,6 +35,7 @@ function PlaceOf({ places }: { places: Places }): ReactNode {
     case 'second':
     case 'defect':
     case 'relief':
+    case 'annul':
       return null;
     case 'steps':
       return <AllSteps onPick={places.pick} onGo={ways.onGo} onBack={toAct} />;

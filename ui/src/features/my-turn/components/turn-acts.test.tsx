@@ -256,3 +256,43 @@ describe('the safety briefing', () => {
     expect(screen.queryByText(/safety briefing/)).toBeNull();
   });
 });
+
+describe('the phone of somebody who is not of a crew', () => {
+  const inspector = {
+    id: 'p-ans',
+    name: 'Ansell',
+    roles: [{ role: 'inspector' as const, terminal: 'HBR' }],
+  };
+  const dispatcher = { ...desk, roles: [{ role: 'dispatcher' as const, terminal: 'HBR' }] };
+
+  it('puts a blue signal up with one bar', async () => {
+    const app = await openTurn(secured, inspector);
+    await touch(/Blue signal up/);
+    expect(sent(app)[0]).toMatchObject({ kind: 'blue-signal-up' });
+  });
+
+  it('takes a blue signal down only with a second bar in another place', async () => {
+    const app = await openTurn({ ...secured, blueSignal: { since: at('17:10'), by: 'Ansell' } }, inspector);
+    await touch(/Blue signal down/);
+    expect(sent(app)).toEqual([]);
+    const second = screen.getByRole('region', { name: 'Second touch' });
+    fireEvent.click(within(second).getByRole('button', { name: /Taken down: blue signal, track 3/ }));
+    await pass(200);
+    expect(sent(app)[0]).toMatchObject({ kind: 'blue-signal-down' });
+  });
+
+  it('annuls with a reason and a second bar, and can go back from it', async () => {
+    const app = await openTurn(secured, dispatcher);
+    await touch('Annul');
+    await touch('Equipment failed');
+    await touch('Go on');
+    await touch(/Not yet, go back/);
+    expect(sent(app)).toEqual([]);
+    await touch('Annul');
+    await touch('Equipment failed');
+    await touch('Go on');
+    await touch(/Annulled: train 1742. Equipment failed/);
+    await pass(200);
+    expect(sent(app)[0]).toMatchObject({ kind: 'annulled', reason: 'Equipment failed' });
+  });
+});

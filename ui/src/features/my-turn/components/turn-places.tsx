@@ -1,5 +1,4 @@
 import { useState } from 'react';
-import { Link } from 'react-router-dom';
 import { useOutbox } from '../../../lib/outbox/use-outbox';
 import { actKey } from '../model/next-act';
 import { whereIs } from '../model/where-is';
@@ -8,12 +7,12 @@ import { ActPlace } from './act-place';
 import { DoneBar } from './done-bar';
 import { Foot } from './foot';
 import styles from './phone-parts.module.css';
+import { OffCrew } from './off-crew';
 import { RecordBar } from './record-bar';
 import { SecondTouch } from './second-touch';
 import { SubPlace } from './sub-place';
 import { TakeTurn } from './take-turn';
 import { TrainFacts } from './train-facts';
-import { TurnPicture } from './turn-picture';
 import { useTurnScene } from './turn-context';
 import { usePlaces, type Places } from './use-places';
 
@@ -22,7 +21,7 @@ export function TurnPlaces() {
   const { turn, me } = useTurnScene();
   const places = usePlaces();
   const [isHelping, setHelping] = useState(false);
-  if (me.roles.length === 0) return <NotCrew />;
+  if (me.roles.length === 0) return <OffCrew onRecord={places.recordQuietly} />;
   const isOutside = me.role === null && !isHelping && turn.annulled === null && places.done === null;
   if (isOutside && places.place.kind === 'act') {
     return <TakeTurn onTaken={places.recordQuietly} onHelp={() => setHelping(true)} />;
@@ -30,21 +29,6 @@ export function TurnPlaces() {
   if (places.place.kind === 'act') return <ActNow places={places} />;
   if (places.place.kind === 'second') return <SecondPlace places={places} />;
   return <SubPlace places={places} />;
-}
-
-/** Somebody who may record, but not from a crew's phone: the desk has a page of its own for the turn. */
-function NotCrew() {
-  const { turn, now, marker } = useTurnScene();
-  return (
-    <div className={styles.main}>
-      <TrainFacts turn={turn} now={now} marker={marker} />
-      <TurnPicture turn={turn} now={now} />
-      <p className={styles.said}>Only a conductor or an engineer of this terminal records from the phone.</p>
-      <Link className={`${styles.button} ${styles.wide}`} to={`/turns/${turn.id}`}>
-        Open the turn at the desk
-      </Link>
-    </div>
-  );
 }
 
 function ActNow({ places }: { places: Places }) {

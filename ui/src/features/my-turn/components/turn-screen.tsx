@@ -1,3 +1,5 @@
+import type { WireTurn } from '@stubpost/shared';
+import { useEffect } from 'react';
 import { ErrorState, LoadingRows } from '../../../components/page-states';
 import { TurnSceneContext } from './turn-context';
 import { TurnPlaces } from './turn-places';
@@ -7,6 +9,10 @@ import styles from './phone-parts.module.css';
 /** The page of one turn on the phone. */
 export function TurnScreen({ turnId }: { turnId: string }) {
   const state = useTurnSceneOf(turnId);
+  const train = state.kind === 'here' ? trainOf(state.scene.turn) : null;
+  useEffect(() => {
+    if (train !== null) document.title = `Train ${train} · Stubpost`;
+  }, [train]);
   if (state.kind === 'here') {
     return (
       <TurnSceneContext.Provider value={state.scene}>
@@ -29,3 +35,5 @@ export function TurnScreen({ turnId }: { turnId: string }) {
     </div>
   );
 }
+
+const trainOf = ({ outbound, inbound }: WireTurn): string | null => outbound?.train ?? inbound?.train ?? null;

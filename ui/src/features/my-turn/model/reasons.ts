@@ -26,3 +26,6 @@ export const tieUpReasons = [
   'Set stays with its next crew',
   'Handbrake will not hold',
 ] as const;
+
+/** Why a turn does not run. */
+export const annulReasons = ['No crew', 'Equipment failed', 'Track closed', 'Train runs elsewhere'] as const;
