@@ -36,6 +36,9 @@ export function ActBody({ page, lead, isAfter, ways, onGoOn }: ActBodyProps) {
       {brakes.shortCount !== null && !isAfter && (
         <OpenCount
           count={brakes.shortCount}
+          {...(page.waitsFor === null && !isShut
+            ? { onRelease: () => ways.onGo({ kind: 'second', page }) }
+            : {})}
           onTellDesk={(note) => ways.onRecord({ kind: 'note', note }, 'Sent to desk', null)}
         />
       )}

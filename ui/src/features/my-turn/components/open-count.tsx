@@ -1,18 +1,20 @@
-import { carList } from '../model/act-form';
-import { shortCountTitle, type HandbrakeView } from '../model/handbrake-view';
+import { handbrakesLeft, shortCountTitle, type HandbrakeView } from '../model/handbrake-view';
 import { OpenSign } from './phone-icons';
 import styles from './phone-parts.module.css';
 
 /** Fewer handbrakes released than set: kept, the step stays open, and it is said which car is left. */
 export function OpenCount({
   count,
+  onRelease,
   onTellDesk,
 }: {
   count: NonNullable<HandbrakeView['shortCount']>;
+  /** To the second touch of what is left; absent while what is left is not known by its cars. */
+  onRelease?: () => void;
   onTellDesk: (words: string) => void;
 }) {
   const title = shortCountTitle(count);
-  const left = leftWords(count);
+  const left = handbrakesLeft(count);
   return (
     <>
       <section className={styles.refused} role="status">
@@ -22,19 +24,16 @@ export function OpenCount({
         </h2>
         <p>{left} The entry is kept, the step stays open.</p>
       </section>
-      <button
-        type="button"
-        className={`${styles.button} ${styles.wide}`}
-        onClick={() => onTellDesk(`${title}. ${left}`)}
-      >
-        Send to desk
-      </button>
+      <div className={styles.pairs}>
+        {onRelease !== undefined && (
+          <button type="button" className={styles.button} onClick={onRelease}>
+            Release it
+          </button>
+        )}
+        <button type="button" className={styles.button} onClick={() => onTellDesk(`${title}. ${left}`)}>
+          Send to desk
+        </button>
+      </div>
     </>
   );
-}
-
-function leftWords({ released, set, carsStillSet }: NonNullable<HandbrakeView['shortCount']>): string {
-  if (carsStillSet.length > 0)
-    return `${carsStillSet.length === 1 ? 'Car' : 'Cars'} ${carList(carsStillSet)} still ${carsStillSet.length === 1 ? 'stands' : 'stand'} as set.`;
-  return `${set - released} still ${set - released === 1 ? 'stands' : 'stand'} as set.`;
 }

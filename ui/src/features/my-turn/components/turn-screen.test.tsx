@@ -153,9 +153,11 @@ describe('counts and readings', () => {
     await touch(/Released: 1 handbrake, car 1408/);
     expect(sent(app)[0]).toMatchObject({ step: 'handbrake-released', reading: { count: 1, cars: ['1408'] } });
     await pass(10_500);
-    expect(screen.getByRole('heading', { name: '1 of 2 released' })).toBeVisible();
-    expect(screen.getByText(/Car 1412 still stands as set/)).toBeVisible();
+    expect(screen.getByRole('heading', { name: '1 of 2 handbrakes released' })).toBeVisible();
+    expect(screen.getByText(/Car 1412 still set\./)).toBeVisible();
     expect(button(/Released: 1412/)).toBeVisible();
+    await touch('Release it');
+    expect(button(/Released: 1 handbrake, car 1412/)).toBeVisible();
   });
 });
 

@@ -1,7 +1,5 @@
-import { millisecondsInSecond, type Instant } from '@stubpost/shared';
+import { millisecondsInSecond, undoSeconds, type Instant } from '@stubpost/shared';
 
-/** How long an act can be taken back on the bar itself. Our choice. */
-export const undoSeconds = 10;
 /** How long Undo takes no touch at first, so that a double touch takes nothing back. Our choice. */
 export const undoDeafSeconds = 1;
 /** How long the bar takes no touch after its act changed by itself. Our choice. */

@@ -1,5 +1,5 @@
 import { aWireTurn, pushPullPlan, withDone } from '../testing/a-wire-turn';
-import { handbrakeView, shortCountTitle } from './handbrake-view';
+import { handbrakesLeft, handbrakeView, shortCountTitle } from './handbrake-view';
 
 const { steps } = pushPullPlan;
 const set = withDone(
@@ -33,7 +33,9 @@ describe('the handbrakes of a step', () => {
       released: ['1408'],
       shortCount: { released: 1, set: 2, carsStillSet: ['1412'] },
     });
-    expect(shortCountTitle({ released: 1, set: 2 })).toBe('1 of 2 released');
+    expect(shortCountTitle({ released: 1, set: 2 })).toBe('1 of 2 handbrakes released');
+    expect(handbrakesLeft({ released: 1, set: 2, carsStillSet: ['1412'] })).toBe('Car 1412 still set.');
+    expect(handbrakesLeft({ released: 1, set: 3, carsStillSet: [] })).toBe('2 still set.');
   });
 
   it('are only counted where the record named no cars', () => {

@@ -1,4 +1,5 @@
 import { rolesOf, type PlanStep, type WireTurn } from '@stubpost/shared';
+import { carList } from './act-form';
 import type { KnownTurn } from './known-turn';
 
 /** Which hand a step has on the handbrakes: it sets them, takes them off, or has nothing to do with them. */
@@ -48,7 +49,17 @@ export function handbrakeView(
   };
 }
 
-/** The counts that differ, in words: "1 of 2 released". */
+/** The counts that differ, in words: "1 of 2 handbrakes released". */
 export function shortCountTitle({ released, set }: { released: number; set: number }): string {
-  return `${released} of ${set} released`;
+  return `${released} of ${set} ${set === 1 ? 'handbrake' : 'handbrakes'} released`;
+}
+
+/** What is left, in words: "Car 1412 still set.", "Cars 1408 and 1412 still set.", "1 still set." */
+export function handbrakesLeft({
+  released,
+  set,
+  carsStillSet,
+}: NonNullable<HandbrakeView['shortCount']>): string {
+  if (carsStillSet.length === 0) return `${set - released} still set.`;
+  return `${carsStillSet.length === 1 ? 'Car' : 'Cars'} ${carList(carsStillSet)} still set.`;
 }
