@@ -7,9 +7,9 @@ import { useSignOut } from './sign-out';
 import styles from './shell.module.css';
 
 const THEME_WORDS: Record<Theme, string> = {
-  system: 'As the system',
+  system: 'Auto, as the system',
   light: 'Light',
-  dark: 'Dark',
+  dark: 'Night',
   daylight: 'Daylight',
 };
 

@@ -19,7 +19,7 @@ export interface AlertQuestion {
  * general to special; whatever a fetcher uses is in its key.
  */
 export const queryKeys = {
-  session: { all: ['session'] as const, list: ['own-sessions'] as const },
+  session: { all: ['session'] as const, list: ['own-sessions'] as const, badge: ['own-badge'] as const },
   setup: { all: ['set-up'] as const },
   demo: { all: ['demo'] as const },
   health: { all: ['health'] as const },

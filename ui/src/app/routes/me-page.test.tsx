@@ -68,7 +68,7 @@ describe('one’s own page', () => {
 
   test('keeps look and announcements on this device', async () => {
     const { user } = open();
-    await user.click(screen.getByLabelText('Dark'));
+    await user.click(screen.getByLabelText(/^Night/));
     expect(document.documentElement).toHaveClass('bp6-dark');
     await user.click(screen.getByLabelText(/No colour/));
     expect(document.documentElement).toHaveClass('no-colour');

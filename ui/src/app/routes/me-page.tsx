@@ -2,6 +2,7 @@ import { Button } from '@blueprintjs/core';
 import { PageHeader } from '../../components/page-header';
 import { BrowserPreferences } from '../../features/me/components/browser-preferences';
 import { ChangePassword } from '../../features/me/components/change-password';
+import { OwnPin } from '../../features/me/components/own-pin';
 import { OwnRoles } from '../../features/me/components/own-roles';
 import { OwnSessions } from '../../features/me/components/own-sessions';
 import { usePerson } from '../../lib/session';
@@ -28,6 +29,7 @@ export function MePage() {
         <div className={styles.stack}>
           <BrowserPreferences />
           <ChangePassword />
+          <OwnPin />
         </div>
       </div>
     </div>

@@ -1,4 +1,4 @@
-import type { ChangePasswordRequest, OwnSession } from '@stubpost/shared';
+import type { ChangePasswordRequest, ChangePinRequest, OwnBadge, OwnSession } from '@stubpost/shared';
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import { api } from '../../../lib/api-client';
 import { queryKeys } from '../../../lib/query-keys';
@@ -24,5 +24,20 @@ export function useChangePassword() {
   return useMutation({
     mutationFn: (request: ChangePasswordRequest) => api.put('/api/session/password', request),
     onSuccess: () => client.invalidateQueries({ queryKey: queryKeys.session.list }),
+  });
+}
+
+/** One's own badge, and whether there is a PIN. */
+export const ownBadgeQuery = queryOptions({
+  queryKey: queryKeys.session.badge,
+  queryFn: ({ signal }) => api.get<OwnBadge>('/api/session/pin', { signal }),
+});
+
+/** Sets or takes away one's own PIN. */
+export function useChangePin() {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (request: ChangePinRequest) => api.put('/api/session/pin', request),
+    onSuccess: () => client.invalidateQueries({ queryKey: queryKeys.session.badge }),
   });
 }

@@ -10,9 +10,9 @@ import {
 } from '../../../lib/preferences';
 
 const THEME_LABELS: Record<Theme, string> = {
-  system: 'As the system is set',
+  system: 'Auto: as the system is set',
   light: 'Light',
-  dark: 'Dark',
+  dark: 'Night: dark, for the cab',
   daylight: 'Daylight: for a phone in the sun, black on white',
 };
 

@@ -1,9 +1,16 @@
 import { Button, FormGroup, InputGroup } from '@blueprintjs/core';
-import { createPersonSchema, type CreatedPerson, type RoleGrant, type WireTerminal } from '@stubpost/shared';
+import {
+  createPersonSchema,
+  type CreatedPerson,
+  type CreatePersonRequest,
+  type RoleGrant,
+  type WireTerminal,
+} from '@stubpost/shared';
 import { useState, type FormEvent } from 'react';
 import { FieldSummary, type FieldProblem } from '../../../components/field-summary';
 import { errorText } from '../../../lib/error-texts';
 import { useAddPerson } from '../api/people';
+import { BADGE_HINT } from '../model/badge-words';
 import { tidyGrants } from '../model/role-words';
 import { LinkOnce } from './link-once';
 import { RolesEditor } from './roles-editor';
@@ -11,17 +18,27 @@ import { RolesEditor } from './roles-editor';
 interface Draft {
   name: string;
   email: string;
+  badge: string;
   roles: RoleGrant[];
 }
 
-const EMPTY: Draft = { name: '', email: '', roles: [] };
+const EMPTY: Draft = { name: '', email: '', badge: '', roles: [] };
+
+/** Without a badge the field is left out. */
+function requestOf({ badge, ...draft }: Draft): CreatePersonRequest {
+  const request = { ...draft, roles: tidyGrants(draft.roles) };
+  return badge.trim() === '' ? request : { ...request, badge };
+}
 
 function problemsOf(draft: Draft): FieldProblem[] {
-  const parsed = createPersonSchema.safeParse(draft);
+  const parsed = createPersonSchema.safeParse(requestOf(draft));
   const wrong = new Set(parsed.success ? [] : parsed.error.issues.map(({ path }) => String(path[0])));
   return [
     ...(wrong.has('name') ? [{ fieldId: 'add-name', words: 'Name is missing.' }] : []),
     ...(wrong.has('email') ? [{ fieldId: 'add-email', words: 'E-mail is not an address.' }] : []),
+    ...(wrong.has('badge')
+      ? [{ fieldId: 'add-badge', words: 'Badge: 2 to 12 letters, digits or dashes.' }]
+      : []),
     ...(draft.roles.length === 0
       ? [{ fieldId: 'add-roles', words: 'No role: the person could sign in and see nothing.' }]
       : []),
@@ -36,11 +53,10 @@ export function AddPerson({ terminals, zone }: { terminals: readonly WireTermina
   const add = useAddPerson();
   const submit = (event: FormEvent): void => {
     event.preventDefault();
-    const request = { ...draft, roles: tidyGrants(draft.roles) };
-    const found = problemsOf(request);
+    const found = problemsOf(draft);
     setProblems(found);
     if (found.length > 0) return;
-    add.mutate(request, {
+    add.mutate(requestOf(draft), {
       onSuccess: (person) => {
         setAdded(person);
         setDraft(EMPTY);
@@ -75,6 +91,14 @@ export function AddPerson({ terminals, zone }: { terminals: readonly WireTermina
           autoComplete="off"
           value={draft.email}
           onValueChange={(email) => setDraft({ ...draft, email })}
+        />
+      </FormGroup>
+      <FormGroup label="Badge, to sign in with on shared phones" labelFor="add-badge" helperText={BADGE_HINT}>
+        <InputGroup
+          id="add-badge"
+          autoComplete="off"
+          value={draft.badge}
+          onValueChange={(badge) => setDraft({ ...draft, badge })}
         />
       </FormGroup>
       <div id="add-roles" tabIndex={-1}>

@@ -6,6 +6,7 @@ import { isRefusal } from '../../../lib/api-client';
 import { errorText } from '../../../lib/error-texts';
 import { peopleQuery, useChangePerson } from '../api/people';
 import { tidyGrants } from '../model/role-words';
+import { BADGE_HINT } from '../model/badge-words';
 import { RolesEditor } from './roles-editor';
 
 /**
@@ -29,8 +30,9 @@ export function EditPerson({
   const submit = (event: FormEvent): void => {
     event.preventDefault();
     const { version, name, active } = draft;
+    const badge = draft.badge === null || draft.badge.trim() === '' ? null : draft.badge;
     change.mutate(
-      { version, name, roles: tidyGrants(draft.roles), active },
+      { version, name, badge, roles: tidyGrants(draft.roles), active },
       {
         onSuccess: setDraft,
         onError: (problem) => isRefusal(problem, 'people.changed') && startFromNewest(),
@@ -56,6 +58,18 @@ export function EditPerson({
           required
           value={draft.name}
           onValueChange={(name) => setDraft({ ...draft, name })}
+        />
+      </FormGroup>
+      <FormGroup
+        label="Badge, to sign in with on shared phones"
+        labelFor="edit-badge"
+        helperText={draft.hasPin ? 'A PIN is set. It goes when the badge goes.' : BADGE_HINT}
+      >
+        <InputGroup
+          id="edit-badge"
+          autoComplete="off"
+          value={draft.badge ?? ''}
+          onValueChange={(badge) => setDraft({ ...draft, badge })}
         />
       </FormGroup>
       <RolesEditor

@@ -14,6 +14,11 @@ function standing(person: WirePerson): string {
   return person.sessions === 1 ? '1 session' : `${person.sessions} sessions`;
 }
 
+function badgeWords({ badge, hasPin }: WirePerson): string {
+  if (badge === null) return '–';
+  return hasPin ? `${badge}, PIN set` : badge;
+}
+
 /** Everybody with a sign-in, by name; a text narrows the list. The name opens the person. */
 export function PeopleTable({
   people,
@@ -43,6 +48,7 @@ export function PeopleTable({
             <tr>
               <th scope="col">Name</th>
               <th scope="col">E-mail</th>
+              <th scope="col">Badge</th>
               <th scope="col">Roles</th>
               <th scope="col">Sign-in</th>
               <th scope="col">Last seen</th>
@@ -60,6 +66,7 @@ export function PeopleTable({
                   </Link>
                 </th>
                 <td>{person.email}</td>
+                <td className="nowrap">{badgeWords(person)}</td>
                 <td>{rolesInWords(person.roles)}</td>
                 <td className="nowrap">{standing(person)}</td>
                 <td className="nowrap">
