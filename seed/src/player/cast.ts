@@ -14,6 +14,10 @@ export interface Cast {
   withRole(role: Role): Array<CastMember & { key: string }>;
 }
 
+/** Crews have badges, so that a visitor who signs in as one can try a PIN. */
+const badgeOf = ({ role }: DemoPerson, at: number): { badge?: string } =>
+  role === 'conductor' || role === 'engineer' ? { badge: String(4401 + at) } : {};
+
 const emailOf = (person: DemoPerson): string => `${person.key}@ostrel-valley.example`;
 
 /** Adds the people who are not there yet. They have no password: the demo's sign-in page lets visitors in. */
@@ -21,10 +25,12 @@ export async function gatherCast(app: INestApplicationContext): Promise<Cast> {
   const rows = await app.get(Reader).query<{ id: string; email: string }>('SELECT id, email FROM person');
   const idOf = new Map(rows.map((row) => [row.email, row.id]));
   const byKey = new Map<string, CastMember & { key: string; role: Role }>();
-  for (const person of demoPeople) {
+  for (const [at, person] of demoPeople.entries()) {
     const roles = [{ role: person.role, terminal: person.terminal }];
     const email = emailOf(person);
-    const id = idOf.get(email) ?? (await app.get(PeopleService).add({ email, name: person.name, roles })).id;
+    const id =
+      idOf.get(email) ??
+      (await app.get(PeopleService).add({ email, name: person.name, roles, ...badgeOf(person, at) })).id;
     byKey.set(person.key, { id, name: person.name, roles, key: person.key, role: person.role });
   }
   return {
