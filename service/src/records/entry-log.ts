@@ -1,12 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import {
-  type CalendarDate,
-  type Instant,
-  type SubjectKind,
-  columnsOf,
-  noPreviousHash,
-  sealEntry,
-} from '@stubpost/shared';
+import { type Instant, columnsOf, noPreviousHash, sealEntry } from '@stubpost/shared';
 import { Counters } from '../database/counters';
 import { Reader } from '../database/reader';
 import type { Transaction } from '../database/unit-of-work';
@@ -15,13 +8,8 @@ import { sha256 } from './sha256';
 /** An entry on its way into the log. */
 export interface NewEntry {
   id: string;
-  subject: { kind: SubjectKind; id: string };
-  kind: string;
-  terminalCode: string;
-  serviceDate: CalendarDate;
-  observedAt: Instant;
   receivedAt: Instant;
-  /** Everything the entry says; sealed in its canonical form. */
+  /** Everything the entry says; sealed in its canonical form. The searched columns are taken from it. */
   body: Record<string, unknown>;
 }
 

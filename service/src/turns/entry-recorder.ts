@@ -67,8 +67,9 @@ export class EntryRecorder {
     const entry = entryFrom({ id: request.id, receivedAt, body });
     await this.rights.require(transaction, { actor, request, entry, file, now });
     await this.requireKnownStep(request, file);
-    const seal = await this.append(transaction, { id: request.id, body, now, record });
-    const after = await this.follow(transaction, file, { id: request.id, receivedAt: now, body });
+    const logged = { id: request.id, receivedAt: now, body };
+    const seal = await this.log.append(transaction, logged);
+    const after = await this.follow(transaction, file, logged);
     return { isNew: true, ...seal, file: after };
   }
 
@@ -112,23 +113,6 @@ export class EntryRecorder {
     if (file.plan.steps.some((known) => known.key === step)) return;
     if (await this.plans.isStepAnywhere(file.record.terminalCode, step)) return;
     throw new Refusal({ code: 'entry.step_unknown', message: `no step is called ${step}`, facts: { step } });
-  }
-
-  private append(
-    transaction: Transaction,
-    entry: { id: string; body: EntryBody; now: Instant; record: TurnRecord },
-  ): Promise<Seal> {
-    const { id, body, now, record } = entry;
-    return this.log.append(transaction, {
-      id,
-      subject: body.subject,
-      kind: body.kind,
-      terminalCode: record.terminalCode,
-      serviceDate: record.serviceDate,
-      observedAt: Date.parse(body.observedAt),
-      receivedAt: now,
-      body,
-    });
   }
 
   private async follow(
