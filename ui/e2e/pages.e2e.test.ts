@@ -33,6 +33,7 @@ const pages: ReadonlyArray<[role: string, path: string, window: 'desk' | 'phone'
     ['administrator', '/setup', 'desk', /./],
     ['supervisor', '/setup', 'desk', /./],
     ['supervisor', '/records/corrections?state=all', 'desk', 'Corrections'],
+    ['auditor', '/records/check', 'desk', 'Check the log'],
     ['supervisor', '/me', 'desk', /./],
     ['dispatcher', '/keys', 'desk', /./],
     ['dispatcher', '/accessibility', 'desk', /./],

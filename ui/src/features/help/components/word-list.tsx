@@ -22,6 +22,11 @@ const WORDS: readonly { word: string; means: string }[] = [
       'nothing is deleted: taking back and correcting are entries of their own, and the first one stays. Once the train has left they wait until somebody else approves them',
   },
   {
+    word: 'Sealed, chain, head',
+    means:
+      'each entry has a hash over all of its fields and over the entry before; the last hash of a day, kept elsewhere, shows later whether anything was changed',
+  },
+  {
     word: 'In question, ruling',
     means:
       'two times for one step, or somebody does not agree; which one counts is said by the dispatcher or the supervisor',
