@@ -72,10 +72,17 @@ describe('the bars of the desk', () => {
       .map(({ textContent }) => textContent ?? '');
 
   test.each([
-    ['dispatcher', ['Board', 'Alerts', 'History', 'Timetables', 'Set-up', 'Help']],
+    ['dispatcher', ['Board', 'Alerts', 'History', 'Corrections', 'Timetables', 'Set-up', 'Help']],
+    [
+      'auditor',
+      ['Board', 'Alerts', 'History', 'Corrections', 'Check the log', 'Timetables', 'Set-up', 'Help'],
+    ],
     ['analyst', ['Board', 'Alerts', 'History', 'Timetables', 'Set-up', 'Help']],
     ['inspector', ['Board', 'Alerts', 'History', 'Set-up', 'Help']],
-    ['administrator', ['Board', 'Alerts', 'History', 'Timetables', 'Set-up', 'People', 'Help']],
+    [
+      'administrator',
+      ['Board', 'Alerts', 'History', 'Check the log', 'Timetables', 'Set-up', 'People', 'Help'],
+    ],
   ] as const)('name the pages that a %s may open, help last', async (role, expected) => {
     open('/me', { person: aPersonWith(role) });
     await screen.findByRole('heading', { name: 'Me' });
