@@ -36,14 +36,6 @@ export function compareIds(a: string, b: string): number {
   return a < b ? -1 : Number(a > b);
 }
 
-/** The account that counts, null when there is none. */
-export function countingAccount(accounts: readonly Account[]): Account | null {
-  return accounts.reduce<Account | null>(
-    (best, account) => (best !== null && compareAccounts(best, account) <= 0 ? best : account),
-    null,
-  );
-}
-
 /** Whether any two accounts lie further apart than 60 s. */
 export function isInQuestion(accounts: readonly Account[]): boolean {
   if (accounts.length < 2) return false;

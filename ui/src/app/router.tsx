@@ -1,4 +1,4 @@
-import type { RouteObject } from 'react-router-dom';
+import { Navigate, type RouteObject } from 'react-router-dom';
 import { AnyShell } from './any-shell';
 import { Permitted, SignedInOnly, ToBoard, ToHome } from './guards';
 import { PhoneShell } from './phone-shell';
@@ -50,7 +50,10 @@ const deskPages: RouteObject[] = [
   { element: <Permitted permission="history.read" />, children: [{ path: '/history', lazy: historyPage }] },
   {
     element: <Permitted permission="corrections.read" />,
-    children: [{ path: '/records/corrections', lazy: correctionsPage }],
+    children: [
+      { path: '/records', element: <Navigate to="/records/corrections" replace /> },
+      { path: '/records/corrections', lazy: correctionsPage },
+    ],
   },
   {
     element: <Permitted permission="records.read" />,

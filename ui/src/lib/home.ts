@@ -8,7 +8,7 @@ const HOMES: Record<Role, string> = {
   engineer: '/my',
   planner: '/history',
   analyst: '/history',
-  auditor: '/history',
+  auditor: '/records',
   administrator: '/people',
 };
 
@@ -17,6 +17,7 @@ export const HOME_NAMES: Record<string, string> = {
   '/board': 'Board',
   '/my': 'My turns',
   '/history': 'History',
+  '/records': 'Records',
   '/people': 'People',
 };
 

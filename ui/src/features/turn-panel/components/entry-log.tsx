@@ -92,7 +92,11 @@ function LogRow({ line, turn, onTakeBack }: EntryLogProps & { line: LogLine }) {
         ))}
       </td>
       <td>
-        <span className={styles.said}>{words}</span> <span className={styles.plain}>{knownWords(entry)}</span>
+        <span className={styles.said}>{words}</span>{' '}
+        <span className={styles.plain}>
+          {knownWords(entry)}
+          {line.cameIn !== null && `, came in ${line.cameIn}`}
+        </span>
         {isWithdrawn && <span className="unseen">, withdrawn</span>}
         {line.remarks.map((remark) => (
           <span key={remark} className={styles.since}>

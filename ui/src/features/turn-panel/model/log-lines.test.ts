@@ -42,6 +42,12 @@ function lineOf(id: string, entries: readonly WireEntry[], corrections: readonly
 }
 
 describe('a line of the log', () => {
+  it('says when an entry came in that was more than a minute on its way', () => {
+    const late = entry('late', { observedAt: iso('22:25:00'), receivedAt: iso('22:26:01') });
+    const context = { labels: new Map<string, string>(), zone, corrections: [] };
+    expect(logLines([check, late], context).map(({ cameIn }) => cameIn)).toEqual(['17:26:01', null]);
+  });
+
   it('shows the time that counts, the one it replaced, who corrected it and why', () => {
     expect(lineOf('check', [check, corrected])).toEqual({
       time: '17:22:41',

@@ -13,6 +13,8 @@ export interface LogLine {
   isWithdrawn: boolean;
   /** Corrections and withdrawals in words, with who decided: "corrected 18:02:10 by L. Reyes: misread". */
   remarks: string[];
+  /** When it came in, where that was more than a minute after it was made. */
+  cameIn: string | null;
 }
 
 export interface LogContext {
@@ -41,6 +43,7 @@ export function logLines(entries: readonly WireEntry[], context: LogContext): Lo
         replaced: texts.slice(0, -1).reverse(),
         isWithdrawn: takenBack.has(entry.id),
         remarks: own.map((change) => remarkOf(change, states.get(change.id), context.zone)),
+        cameIn: cameInOf(entry, context.zone),
       };
     });
 }
@@ -79,6 +82,14 @@ function timesOf(entry: WireEntry, own: readonly WireEntry[], states: States): n
     .sort((a, b) => Date.parse(actTimeOf(a) ?? '') - Date.parse(actTimeOf(b) ?? ''))
     .flatMap((change) => (change.observedAt === undefined ? [] : [Date.parse(change.observedAt)]));
   return [first, ...later].filter((at, index, all) => at !== all[index - 1]);
+}
+
+const promptMilliseconds = 60_000;
+
+function cameInOf(entry: WireEntry, zone: string): string | null {
+  const receivedAt = Date.parse(entry.receivedAt);
+  const madeAt = Date.parse(actTimeOf(entry) ?? entry.receivedAt);
+  return receivedAt - madeAt > promptMilliseconds ? clockText(receivedAt, zone) : null;
 }
 
 function remarkOf(change: WireEntry, state: WireCorrection | undefined, zone: string): string {
