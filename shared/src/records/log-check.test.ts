@@ -89,6 +89,7 @@ describe('a log as it was exported', () => {
     expect(firstOf(later, [newest])).toEqual({ kind: 'beginning', line: 1, to: 4 });
     expect(firstOf(later)).toEqual({ kind: 'beginning', line: 1, to: 4 });
     const wrong = { sequence: 4, hash: sha256('another log') };
+    expect(checked(lines, [headAt(4), wrong]).faults).toMatchObject([{ kind: 'not-the-head', head: wrong }]);
     expect(firstOf(later, [wrong])).toMatchObject({ kind: 'wrong-start', line: 1, sequence: 5, head: wrong });
   });
 
@@ -195,6 +196,23 @@ describe('any one byte', () => {
       const line = bytes.subarray(0, place).toString('latin1').split('\n').length;
       const fault = checkedBytes(flipped, [newest]).faults[0];
       expect({ round, place, line: fault?.line }).toEqual({ round, place, line });
+    }
+  });
+
+  it('taken out, put in, doubled or moved in any number and place is found', () => {
+    const random = seededRandom(4);
+    const place = (): number => Math.floor(random() * (bytes.length - 200));
+    for (let round = 0; round < 300; round += 1) {
+      const [from, to] = [place(), place()];
+      const part = bytes.subarray(from, from + 1 + Math.floor(random() * 199));
+      const isTaken = random() < 0.5;
+      const rest = isTaken ? without(bytes, from, part.length) : bytes;
+      const isPut = !isTaken || random() < 0.5;
+      const touched = isPut ? Buffer.concat([rest.subarray(0, to), part, rest.subarray(to)]) : rest;
+      if (touched.equals(bytes)) continue;
+      const verdict = checkedBytes(touched, [newest]);
+      expect({ round, isWhole: verdict.isWhole }).toEqual({ round, isWhole: false });
+      for (const fault of verdict.faults) expect(formatLogFault(fault)).not.toBe('');
     }
   });
 
@@ -370,6 +388,9 @@ function resealed(index: number): string {
   const after = index === 0 ? {} : { after: headAt(index) };
   return aSealedLog({ bodies: [{ kind: 'forged' }], sha256, ...after }).lines[0] ?? '';
 }
+
+const without = (bytes: Buffer, from: number, length: number): Buffer =>
+  Buffer.concat([bytes.subarray(0, from), bytes.subarray(from + length)]);
 
 function checkedBytes(bytes: Buffer, heads: readonly LogHead[]): LogVerdict {
   const check = new LogCheck({ sha256, heads });

@@ -47,9 +47,15 @@ export class LogCheck {
   private readonly bodiless: number[] = [];
   private bodilessCount = 0;
   private readonly heads: readonly LogHead[];
+  /** More than one where they contradict each other: then one of them is not met. */
+  private readonly headsBySequence: ReadonlyMap<number, readonly LogHead[]>;
 
   constructor(private readonly options: LogCheckOptions) {
     this.heads = options.heads ?? [];
+    const bySequence = new Map<number, LogHead[]>();
+    for (const head of this.heads)
+      bySequence.set(head.sequence, [...(bySequence.get(head.sequence) ?? []), head]);
+    this.headsBySequence = bySequence;
   }
 
   /** Takes the next line, without its end. */
@@ -129,8 +135,8 @@ export class LogCheck {
     return { sequence: undefined, hash: this.headsAt(entry.sequence - 1)[0]?.hash };
   }
 
-  private headsAt(sequence: number): LogHead[] {
-    return this.heads.filter((head) => head.sequence === sequence);
+  private headsAt(sequence: number): readonly LogHead[] {
+    return this.headsBySequence.get(sequence) ?? [];
   }
 
   private faultOf(entry: LogLine, { part }: SealFinding, place: EntryPlace): LogFault | null {
