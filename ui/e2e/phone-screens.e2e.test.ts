@@ -1,4 +1,4 @@
-import type { WireTurn } from '@stubpost/shared';
+import type { WireEntry, WireTurn } from '@stubpost/shared';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { addPerson, ApiPerson, crewPassword } from './support/api';
@@ -208,7 +208,8 @@ describe.skipIf(browserIsMissing())('the phone’s screens', () => {
       for (const isLarge of [false, true]) {
         await setLargeText(page, isLarge);
         const where = `${theme}, ${size.width} px${isLarge ? ', 200 % text' : ''}`;
-        expect(await layoutFindings(page), where).toEqual([]);
+        // Looked at until it stands: a new size takes the browser a moment.
+        await expect.poll(() => layoutFindings(page), { message: where }).toEqual([]);
         const { bar, share } = await footSize(page);
         if (bar > 0) expect(Math.round(bar), where).toBeGreaterThanOrEqual(lowestBar);
         expect(share, where).toBeLessThanOrEqual(largestFootShare);
@@ -235,5 +236,82 @@ describe.skipIf(browserIsMissing())('the phone’s screens', () => {
     await expectSoundLayout('daylight', [smallPhone]);
     await setTheme('system');
     expect(errors).toEqual([]);
+  });
+
+  const entriesOf = (name: string): Promise<WireEntry[]> =>
+    dispatcher.send('GET', `/api/turns/${turnOf(name).id}/entries`);
+  const told = (name: string): Promise<WireTurn> => dispatcher.send('GET', `/api/turns/${turnOf(name).id}`);
+
+  it('a smaller release is kept, leaves the step open and says which car is left', async () => {
+    await openTurn('release');
+    await touch(/^1408/);
+    await touch(/Released: 1408/);
+    await touch(/Released: 1 handbrake, car 1408/);
+    await expect
+      .poll(async () => (await told('release')).securement)
+      .toMatchObject({ set: 2, released: 1, carsStillSet: ['1412'] });
+    await openTurn('release');
+    await page.getByRole('heading', { name: '1 of 2 handbrakes released' }).waitFor();
+    await page.getByText('Car 1412 still set.').waitFor();
+    const turn = await told('release');
+    expect(turn.steps.find(({ key }) => key === 'handbrake-released')?.doneAt).toBeNull();
+  });
+
+  it('a yes to the radio, a defect and a tie-up with its reason reach the log as they were said', async () => {
+    await openTurn('question');
+    await touch('Agree');
+    await expect.poll(async () => (await entriesOf('question')).at(-1)).toMatchObject({ kind: 'agreed' });
+    expect((await told('question')).asksAgreement).toBeUndefined();
+
+    await openTurn('count');
+    await touch('Defect');
+    await touch('Whole set');
+    await touch('Lights');
+    await touch(/Defect: set: lights/);
+    await expect
+      .poll(async () => (await told('count')).defects)
+      .toMatchObject([{ car: null, cause: 'lights' }]);
+
+    await page.goto(`/my/tie-up?turn=${turnOf('tie-up').id}`);
+    await touch('1408');
+    await touch('Doors');
+    await touch('Cut off');
+    await touch('Mechanical has the set');
+    await touch(/Tied up with a reason/);
+    await expect
+      .poll(async () => (await told('tie-up')).tiedUp)
+      .toMatchObject({
+        handbrakes: { count: 1, cars: ['1408'] },
+        checks: ['doors'],
+        offAir: true,
+        reason: 'Mechanical has the set',
+      });
+  });
+
+  it('after the departure a correction waits, counts once another person approves it, and says who did', async () => {
+    const { id } = turnOf('question');
+    await dispatcher.record(id, 'departure', { source: 'by-radio', saidBy: 'conductor' });
+    await page.goto(`/my/turn/${id}`);
+    await touch(/All steps/);
+    await touch(/Handbrake set/);
+    await touch('Ask for correction');
+    await touch('1410');
+    await touch('Misread');
+    await touch('Ask for it');
+    const waiting = async () => (await told('question')).corrections?.[0];
+    await expect.poll(waiting).toMatchObject({ state: 'waiting', newReading: { cars: ['1410'] } });
+    const asked = await waiting();
+    const admin = await ApiPerson.signIn(server.url);
+    const supervisor = await ApiPerson.signIn(
+      server.url,
+      await addPerson(admin, 'supervisor', 'HBR'),
+      crewPassword,
+    );
+    await supervisor.record(id, 'correction-approved', { target: asked?.entryId });
+    await touch(/All steps/);
+    await touch(/Handbrake set/);
+    await page.getByText(/Approved .* by S\. supervisorson/).waitFor();
+    const step = (await told('question')).steps.find(({ key }) => key === 'handbrake-set');
+    expect(step?.reading?.cars).toEqual(['1410']);
   });
 });
