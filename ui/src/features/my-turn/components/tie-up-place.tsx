@@ -32,19 +32,11 @@ export function TieUpPlace({ ways, doneBar }: { ways: ActWays; doneBar: ReactNod
         <TieUpHead />
         <UnsentNotice />
         <TieUpHandbrakes form={form} onForm={setForm} />
+        {gaps.length > 0 && <OpenSecurement gaps={gaps} />}
+        {gaps.length > 0 && <ReasonField reasons={tieUpReasons} {...field} />}
         <TieUpChecks form={form} onForm={setForm} />
         <TieUpDefects onDefect={() => ways.onGo({ kind: 'defect' })} />
         <TieUpAir form={form} onForm={setForm} />
-        {gaps.length > 0 && (
-          <section className={styles.refused} aria-labelledby="tie-up-open" role="status">
-            <h2 id="tie-up-open">Securement is open</h2>
-            {gaps.map((gap) => (
-              <p key={gap}>{gap}</p>
-            ))}
-            <p>The set is tied up with a reason only.</p>
-          </section>
-        )}
-        {gaps.length > 0 && <ReasonField reasons={tieUpReasons} {...field} />}
         <Caution>
           Records how you left the set. Whether it stands secured is decided by your rules, the law in force
           and qualified people.
@@ -52,6 +44,19 @@ export function TieUpPlace({ ways, doneBar }: { ways: ActWays; doneBar: ReactNod
       </div>
       <Foot>{doneBar ?? <TieUpBar form={form} gaps={gaps} reason={reason} ways={ways} />}</Foot>
     </>
+  );
+}
+
+/** What is open about the securement; it stands by the handbrakes, and with it the place for the reason. */
+function OpenSecurement({ gaps }: { gaps: readonly string[] }) {
+  return (
+    <section className={styles.refused} aria-labelledby="tie-up-open" role="status">
+      <h2 id="tie-up-open">Securement is open</h2>
+      {gaps.map((gap) => (
+        <p key={gap}>{gap}</p>
+      ))}
+      <p>The set is tied up with a reason only.</p>
+    </section>
   );
 }
 
