@@ -1,9 +1,9 @@
-import type { CorrectionState, ListedCorrection, WireTerminal } from '@stubpost/shared';
+import type { CorrectionState } from '@stubpost/shared';
 import { useId } from 'react';
 import { formatServiceDate } from '../../../lib/time-display';
 import { askedText, decidedText, sidesOf, subjectText } from '../model/correction-view';
 import styles from './corrections.module.css';
-import { DecisionPart } from './decision-part';
+import { DecisionPart, type DecisionPartProps } from './decision-part';
 
 const stateWords: Record<CorrectionState, string> = {
   waiting: 'Waits',
@@ -11,14 +11,8 @@ const stateWords: Record<CorrectionState, string> = {
   declined: 'Declined',
 };
 
-export interface CorrectionCardProps {
-  correction: ListedCorrection;
-  terminal: WireTerminal;
-  onOpen: (turnId: string) => void;
-}
-
 /** One correction: what was recorded beside what is asked for, who asked and why, and what is decided. */
-export function CorrectionCard({ correction, terminal, onOpen }: CorrectionCardProps) {
+export function CorrectionCard({ correction, terminal, onOpen }: DecisionPartProps) {
   const title = useId();
   const decided = decidedText(correction);
   return (

@@ -1,15 +1,20 @@
 import { Button, FormGroup, InputGroup } from '@blueprintjs/core';
-import { mayRecord } from '@stubpost/shared';
+import { mayRecord, type ListedCorrection, type WireTerminal } from '@stubpost/shared';
 import { useId, useState, type FormEvent } from 'react';
 import { errorText } from '../../../lib/error-texts';
 import { usePerson } from '../../../lib/session';
 import { useDecide } from '../api/corrections';
 import { mayDecide } from '../model/correction-view';
-import type { CorrectionCardProps } from './correction-card';
 import styles from './corrections.module.css';
 
+export interface DecisionPartProps {
+  correction: ListedCorrection;
+  terminal: WireTerminal;
+  onOpen: (turnId: string) => void;
+}
+
 /** The decision, for those who may; for the others who does. */
-export function DecisionPart({ correction, terminal, onOpen }: CorrectionCardProps) {
+export function DecisionPart({ correction, terminal, onOpen }: DecisionPartProps) {
   const person = usePerson();
   const [isDeclining, setDeclining] = useState(false);
   const decide = useDecide(correction);
