@@ -5,7 +5,7 @@ import { api, isRefusal } from '../lib/api-client';
 import { forgetAnswers } from '../lib/kept-answers';
 import { unlockPhone } from '../lib/lock/phone-lock';
 import { forgetUnlockCheck } from '../lib/lock/unlock-check';
-import { outboxOf } from '../lib/outbox/use-outbox';
+import { outboxOf, stopOutboxes } from '../lib/outbox/use-outbox';
 import { queryKeys } from '../lib/query-keys';
 
 async function endSession(): Promise<void> {
@@ -46,6 +46,7 @@ export function useSignOut() {
       await navigate('/sign-in');
       client.clear();
       client.setQueryData(queryKeys.session.all, null);
+      stopOutboxes(client);
     },
   });
 }

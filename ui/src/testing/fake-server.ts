@@ -85,6 +85,12 @@ export class FakeServer {
     return this;
   }
 
+  /** Answers a route that the test says nothing about. */
+  otherwise(method: RouteMethod, template: string, answer: unknown): this {
+    this.rules.push({ method, template, handler: () => answer });
+    return this;
+  }
+
   /** Refuses a route with one of our codes. */
   refuse(method: RouteMethod, template: string, code: ErrorCode, facts: Record<string, unknown> = {}): this {
     return this.on(method, template, new FakeRefusal(code, facts));

@@ -6,6 +6,7 @@ import type { ReactElement } from 'react';
 import { createMemoryRouter, RouterProvider, type RouteObject } from 'react-router-dom';
 import { onTestFinished } from 'vitest';
 import { Providers } from '../app/providers';
+import { stopOutboxes } from '../lib/outbox/use-outbox';
 import { createQueryClient } from '../lib/query-client';
 import { queryKeys } from '../lib/query-keys';
 import { FakeServer } from './fake-server';
@@ -40,7 +41,9 @@ export interface RenderedApp extends RenderResult {
 export function renderRoutes(routes: RouteObject[], options: RenderAppOptions = {}): RenderedApp {
   const { person = aPersonWith('dispatcher'), path = '/', server = new FakeServer() } = options;
   onTestFinished(() => server.stop());
+  if (person !== null) server.otherwise('GET', '/api/session', { person });
   const client = createQueryClient();
+  onTestFinished(() => stopOutboxes(client));
   const queries = client.getDefaultOptions().queries;
   client.setDefaultOptions({ queries: { ...queries, retry: false } });
   client.setQueryData(queryKeys.session.all, person);

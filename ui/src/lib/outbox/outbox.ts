@@ -81,6 +81,10 @@ export interface Outbox {
   dismiss: (entryId: string) => Promise<void>;
   /** The person has read which entries are lost. */
   forgetLost: () => void;
+  /** How many entries wait by the count kept apart. */
+  counted: () => number;
+  /** Sends nothing more; what waits stays in the store for the next outbox of its writer. */
+  stop: () => void;
 }
 
 /** How many turns are sent side by side, so that one entry without an answer does not hold the others back. Our choice. */
@@ -105,6 +109,7 @@ export function createOutbox(outside: OutboxOutside): Outbox {
   let round: Promise<void> | null = null;
   let nextRound: Promise<void> | null = null;
   let failures = 0;
+  let isStopped = false;
   let callOff: (() => void) | null = null;
   /** Entries that the store would not take; they are tried again with every round. */
   const unkept = new Map<string, OutboxEntry>();
@@ -193,7 +198,7 @@ export function createOutbox(outside: OutboxOutside): Outbox {
   async function sendLanes(): Promise<SendOutcome['kind']> {
     const stopped = new Set<string>();
     let verdict: SendOutcome['kind'] = 'received';
-    const isOver = (): boolean => verdict === 'unreachable' || verdict === 'signed-out';
+    const isOver = (): boolean => isStopped || verdict === 'unreachable' || verdict === 'signed-out';
     const nextTurn = (busy: ReadonlySet<string>): string | undefined =>
       [...lanesOf(state.waiting).keys()].find((turn) => !stopped.has(turn) && !busy.has(turn));
     const busy = new Set<string>();
@@ -218,6 +223,7 @@ export function createOutbox(outside: OutboxOutside): Outbox {
   const headOf = (turn: string): OutboxEntry | undefined => lanesOf(state.waiting).get(turn)?.[0];
 
   function settleRound(verdict: SendOutcome['kind']): void {
+    if (isStopped) return;
     if (verdict === 'received' || verdict === 'refused') {
       failures = 0;
       change({ failingSince: null, nextTryAt: null, needsSignIn: false });
@@ -249,6 +255,7 @@ export function createOutbox(outside: OutboxOutside): Outbox {
 
   /** One round at a time. Asked while one runs, one more follows it: it may have gone past what the question is about. */
   function poke(): Promise<void> {
+    if (isStopped) return Promise.resolve();
     if (round !== null) {
       nextRound ??= round.then(() => {
         nextRound = null;
@@ -305,6 +312,11 @@ export function createOutbox(outside: OutboxOutside): Outbox {
       if (entry === undefined || entry.refusal === null) return;
       await letGo(entry, { sequence: null, refusal: entry.refusal });
     },
+    stop: () => {
+      isStopped = true;
+      callOff?.();
+    },
+    counted: () => tally.read(personId).open.length,
     forgetLost: () => {
       tally.forgetLost(personId);
       change({ lost: [] });

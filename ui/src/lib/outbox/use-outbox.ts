@@ -47,15 +47,20 @@ async function entryIdsOf(turnId: string): Promise<ReadonlySet<string> | null> {
   }
 }
 
+interface HeldOutbox {
+  outbox: Outbox;
+  channel: BroadcastChannel | null;
+}
+
 /** One outbox a person and page, whatever screens come and go; nobody sees or loses another person's entries. */
-const outboxes = new WeakMap<QueryClient, Map<string, Outbox>>();
+const outboxes = new WeakMap<QueryClient, Map<string, HeldOutbox>>();
 
 /** The outbox of a person, made with the first question. */
 export function outboxOf(client: QueryClient, personId: string): Outbox {
-  const ofClient = outboxes.get(client) ?? new Map<string, Outbox>();
+  const ofClient = outboxes.get(client) ?? new Map<string, HeldOutbox>();
   outboxes.set(client, ofClient);
   const known = ofClient.get(personId);
-  if (known !== undefined) return known;
+  if (known !== undefined) return known.outbox;
   const channel = 'BroadcastChannel' in globalThis ? new BroadcastChannel('stubpost.outbox') : null;
   const made = createOutbox({
     personId,
@@ -83,8 +88,17 @@ export function outboxOf(client: QueryClient, personId: string): Outbox {
   channel?.addEventListener('message', ({ data }) => {
     if (data === personId) void made.reread();
   });
-  ofClient.set(personId, made);
+  ofClient.set(personId, { outbox: made, channel });
   return made;
+}
+
+/** Stops the outboxes of this page: the person has signed out. What waits stays in the store. */
+export function stopOutboxes(client: QueryClient): void {
+  for (const { outbox, channel } of outboxes.get(client)?.values() ?? []) {
+    outbox.stop();
+    channel?.close();
+  }
+  outboxes.delete(client);
 }
 
 /** Entries made on this phone by the person signed in, and how they stand. */

@@ -9,8 +9,11 @@ import { useOutbox } from '../../../lib/outbox/use-outbox';
 import { useRecorder } from '../api/use-recorder';
 import { crewRolesAt, roleOnTurn, turnAtHand, type MyTurns } from '../model/my-turns';
 import { turnsToTieUp } from '../model/tie-up';
+import { AgeOfData } from './age-of-data';
+import { InstalledLine } from './installed-line';
 import { MyTurnsFoot } from './my-turns-foot';
 import listStyles from './my-turns.module.css';
+import { LostNotice, UnkeptNotice } from './outbox-notices';
 import styles from './phone-parts.module.css';
 import { TurnItem } from './turn-item';
 import { useMyTurns } from './use-my-turns';
@@ -18,8 +21,9 @@ import { useMyTurns } from './use-my-turns';
 /** `/my`: one's own turns first, then those that can be taken with one touch. */
 export function MyTurnsScreen() {
   const person = usePerson();
-  const { terminals, turns, isLoading, error, retry } = useMyTurns();
-  const { state } = useOutbox();
+  const { terminals, turns, isLoading, toldAt, error, retry } = useMyTurns();
+  const { state, forgetLost } = useOutbox();
+  const now = useNow(10);
   const zone = terminals[0]?.zone ?? 'UTC';
   const hand = turnAtHand(turns.mine);
   return (
@@ -31,6 +35,9 @@ export function MyTurnsScreen() {
             <Today zone={zone} />, {jobWords(person)}
           </p>
         </div>
+        <UnkeptNotice isUnkept={state.storage === 'refused'} />
+        <LostNotice lost={state.lost} zone={zone} onRead={forgetLost} />
+        <AgeOfData what="Turns" toldAt={toldAt} now={now} zone={zone} />
         <Lists
           isLoading={isLoading}
           error={error}
@@ -39,6 +46,7 @@ export function MyTurnsScreen() {
           terminals={terminals}
           hand={hand}
         />
+        <InstalledLine />
       </div>
       <MyTurnsFoot hand={hand} state={state} zone={zone} />
     </div>
@@ -74,7 +82,6 @@ function Lists({ isLoading, error, retry, turns, terminals, hand }: ListsProps) 
     return <p>No turns at {terminals.map(({ name }) => name).join(', ')} in the next two hours.</p>;
   return (
     <>
-      {error !== null && <p className={styles.said}>Not up to date. Trying again by itself.</p>}
       {turns.mine.length + turns.mineOver.length > 0 ? (
         <>
           <OwnTurns turns={turns} hand={hand} terminals={terminals} />

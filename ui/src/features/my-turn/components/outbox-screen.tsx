@@ -3,7 +3,7 @@ import { clockWords } from '../../../lib/clock-words';
 import { useOthersWaiting } from '../../../lib/outbox/use-others-waiting';
 import { useOutbox } from '../../../lib/outbox/use-outbox';
 import { useTerminalChoice } from '../../../lib/terminal-choice';
-import { clockOffsetMilliseconds, useNow } from '../../../lib/use-now';
+import { clockOffsetMilliseconds, isClockCompared, useNow } from '../../../lib/use-now';
 import { useSeenByDesk } from '../api/use-seen-by-desk';
 import { outboxLines, outboxStanding, type OutboxStanding } from '../model/outbox-lines';
 import { sentState } from '../model/sent-state';
@@ -34,7 +34,7 @@ export function OutboxScreen() {
         {lines.length > 0 && (
           <OutboxList lines={lines} zone={zone} onRead={(id) => void outbox.dismiss(id)} />
         )}
-        <Counts unsent={unsent} hasLost={state.lost.length > 0} />
+        <Counts here={state.waiting.length} counted={outbox.counted()} />
         <PhoneStorage />
       </div>
       <div className={footStyles.foot}>
@@ -79,16 +79,28 @@ function standingWords(standing: OutboxStanding, zone: string): string {
 }
 
 /** The count kept apart, the clock, and whether others have entries here. */
-function Counts({ unsent, hasLost }: { unsent: number; hasLost: boolean }) {
+function Counts({ here, counted }: { here: number; counted: number }) {
   const others = useOthersWaiting();
-  const clock = clockWords(clockOffsetMilliseconds());
   return (
     <p>
-      {!hasLost && `Count kept apart agrees: ${unsent} of ${unsent} on this phone. `}
-      {clock === null ? 'Phone clock right within 2 s.' : `Phone clock ${clock}; every entry carries that.`}
+      {countWords(here, counted)} {clockSentence()}
       {others > 0 && ` ${othersWords(others)}`}
     </p>
   );
+}
+
+function countWords(here: number, counted: number): string {
+  return here === counted
+    ? `Count kept apart agrees: ${here} of ${counted} on this phone.`
+    : `Count kept apart says ${counted}, here are ${here}; compared anew at the next start.`;
+}
+
+function clockSentence(): string {
+  const words = clockWords(clockOffsetMilliseconds());
+  if (words !== null) return `Phone clock ${words}; every entry carries that.`;
+  return isClockCompared()
+    ? 'Phone clock right within 2 s.'
+    : 'Phone clock not compared since the app was opened.';
 }
 
 /** Says how many entries of others wait here, and nothing of what is in them. */
