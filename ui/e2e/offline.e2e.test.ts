@@ -250,7 +250,7 @@ describe.skipIf(browserIsMissing())('thirty ticks over four turns without a sign
       expect(kept.map(({ step, note }) => step ?? note)).toEqual(made.map(({ what }) => what));
       for (const [index, entry] of kept.entries()) {
         const { from, to } = made[index] ?? { from: Number.NaN, to: Number.NaN };
-        const observedAt = Date.parse(entry.observedAt);
+        const observedAt = Date.parse(entry.observedAt ?? '');
         expect(observedAt).toBeGreaterThan(from - clockToleranceMilliseconds);
         expect(observedAt).toBeLessThan(to + clockToleranceMilliseconds);
         expect(Date.parse(entry.receivedAt)).toBeGreaterThan(to);
