@@ -290,16 +290,19 @@ describe('GET /api/crew', () => {
       { role: 'engineer', terminal: '*' },
     ];
     await add({ email: 'b@example.org', name: 'B', roles: both });
-    await add({ email: 'a@example.org', name: 'A', roles: [{ role: 'engineer', terminal: 'HBR' }] });
+    const local = [{ role: 'engineer', terminal: 'HBR' }];
+    await add({ email: 'a@example.org', name: 'A', badge: 'E-17', roles: local });
     await add({ email: 'c@example.org', name: 'C', roles: [{ role: 'engineer', terminal: 'CAM' }] });
     const dispatcher = await signInAs(booted.app, 'dispatcher', 'HBR');
     const answer = await dispatcher.agent.get('/api/crew?terminal=HBR').expect(200);
-    const crew = (answer.body as { name: string; as: string[] }[]).map(({ name, as }) => ({
-      name,
-      as: [...as].sort(),
-    }));
+    const crew = (answer.body as { id: string; name: string; as: string[] }[]).map(
+      ({ id: _id, as, ...rest }) => ({
+        ...rest,
+        as: [...as].sort(),
+      }),
+    );
     expect(crew).toEqual([
-      { name: 'A', as: ['engineer'] },
+      { name: 'A', as: ['engineer'], badge: 'E-17' },
       { name: 'B', as: ['conductor', 'engineer'] },
     ]);
     expect(JSON.stringify(answer.body)).not.toContain('example.org');

@@ -36,6 +36,7 @@ interface RoleRow {
 interface CrewRow {
   id: string;
   name: string;
+  badge: string | null;
   role: CrewRole;
 }
 
@@ -67,13 +68,14 @@ export class PeopleReadModel {
   /** Conductors and engineers of a terminal by name. */
   async crewOf(terminal: string): Promise<CrewMember[]> {
     const rows = await this.reader.query<CrewRow>(
-      `SELECT DISTINCT p.id, p.name, r.role FROM person p JOIN person_role r ON r.person_id = p.id
+      `SELECT DISTINCT p.id, p.name, p.badge, r.role FROM person p JOIN person_role r ON r.person_id = p.id
        WHERE p.active = ? AND r.terminal IN (?, ?) AND r.role IN (?, ?) ORDER BY p.name, p.id`,
       [true, terminal, ALL_TERMINALS, ...CREW_ROLES],
     );
     const members = new Map<string, CrewMember>();
     for (const row of rows) {
-      const member = members.get(row.id) ?? { id: row.id, name: row.name, as: [] };
+      const badge = row.badge === null ? {} : { badge: row.badge };
+      const member = members.get(row.id) ?? { id: row.id, name: row.name, as: [], ...badge };
       member.as.push(row.role);
       members.set(row.id, member);
     }

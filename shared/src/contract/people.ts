@@ -59,5 +59,7 @@ export const crewMemberSchema = z.object({
   id: z.string(),
   name: z.string(),
   as: z.array(z.enum(['conductor', 'engineer'])),
+  /** Absent for somebody without one. */
+  badge: z.string().optional(),
 });
 export type CrewMember = z.infer<typeof crewMemberSchema>;
