@@ -110,7 +110,7 @@ function WhoTakesOver({ role, onChosen }: { role: CrewRole; onChosen: (person: C
               className={`${styles.button} ${styles.wide}`}
               onClick={() => onChosen(person)}
             >
-              {person.name}
+              {person.badge === undefined ? person.name : `${person.name}, badge ${person.badge}`}
             </button>
           </li>
         ))}

@@ -296,3 +296,30 @@ describe('the phone of somebody who is not of a crew', () => {
     expect(sent(app)[0]).toMatchObject({ kind: 'annulled', reason: 'Equipment failed' });
   });
 });
+
+describe('for somebody who listens to the page', () => {
+  const polite = () => document.querySelector('[data-region="polite"]');
+
+  it('an act of one’s own is said at once, and so is its Undo', async () => {
+    await openTurn(secured);
+    await touch(/Record now/);
+    expect(polite()).toHaveTextContent('Cab brake check, 17:22:41, on phone');
+    await pass(1200);
+    await touch(/Undo/);
+    expect(polite()).toHaveTextContent(/^Undo: Cab brake check, 17:22:4\d, on phone$/);
+  });
+
+  it('the focus stays with what was done, and goes on to what is next', async () => {
+    await openTurn(secured);
+    button(/Record now/).focus();
+    await touch(/Record now/);
+    expect(document.activeElement).toHaveTextContent('Done 17:22:41');
+    await pass(11_000);
+    await pass(50);
+    expect(screen.getByRole('heading', { name: 'Ends changed' })).toHaveFocus();
+    await touch(/All steps/);
+    expect(screen.getByRole('heading', { name: 'All steps' })).toHaveFocus();
+    await touch('Back');
+    expect(screen.getByRole('heading', { name: 'Ends changed' })).toHaveFocus();
+  });
+});

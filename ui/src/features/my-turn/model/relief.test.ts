@@ -25,7 +25,7 @@ describe('who may take over', () => {
     });
   });
 
-  it('are found by the badge where the list carries one', () => {
+  it('are found by the badge', () => {
     const withBadge = [{ ...person('5', 'Lislet', 'conductor'), badge: 'C-207' }];
     expect(whoFits(withBadge, { role: 'conductor', typed: 'c-20', notId: '1' }).shown).toHaveLength(1);
   });

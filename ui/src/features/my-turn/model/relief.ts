@@ -23,9 +23,7 @@ export function whoFits(
   return { shown: fitting.slice(0, mostNames), words };
 }
 
-/** A badge is looked at where the list carries one. */
-const textOf = (person: CrewMember & { badge?: string | null }): string =>
-  `${person.name} ${person.badge ?? ''}`.toLowerCase();
+const textOf = ({ name, badge = '' }: CrewMember): string => `${name} ${badge}`.toLowerCase();
 
 /**
  * What a relief away from the train brings. Source: 49 CFR 238.317(a)(5), Class II test when an operator first takes
