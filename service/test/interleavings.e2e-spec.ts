@@ -1,5 +1,6 @@
 import type { AddressInfo } from 'node:net';
 import type { EntryReceipt, WireEntry, WireTurn } from '@stubpost/shared';
+import { ENTRY_KINDS } from '@stubpost/shared';
 import { seededRandom } from '@stubpost/shared/testing';
 import { SignInService } from '../src/auth/sign-in.service';
 import { SessionCookie } from '../src/auth/session-cookie';
@@ -175,5 +176,14 @@ describe('two phones, the desk, a supervisor and their retries', () => {
     expect(random()).not.toBe(random());
     expect(told(1)).not.toBe(told(2));
     expect(told(1)).toBe(told(1));
+  });
+
+  test('tell of every kind that is not the inspector’s', () => {
+    const kinds = new Set<unknown>();
+    for (let seed = 1000; seed < 1100; seed += 1) {
+      const { entries } = tellStory({ seed, order: 0, telling: 'f0', people, turns: 2, at });
+      for (const { request } of entries) kinds.add(request['kind']);
+    }
+    expect(ENTRY_KINDS.filter((kind) => !kinds.has(kind))).toEqual(['blue-signal-up', 'blue-signal-down']);
   });
 });

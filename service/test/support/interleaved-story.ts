@@ -67,11 +67,14 @@ function entriesOf({ seed, telling, people, turns, at }: StoryQuestion): Told[] 
     entries.push(told);
     return told;
   };
-  for (let turn = 0; turn < turns; turn += 1) tellTurn({ chance, turn, start: turn * 1800, people, at, add });
+  for (let turn = 0; turn < turns; turn += 1)
+    tellTurn({ name: telling, chance, turn, start: turn * 1800, people, at, add });
   return entries;
 }
 
 interface TurnTelling {
+  /** What the ids of this telling begin with. */
+  name: string;
   chance: Chance;
   turn: number;
   start: number;
@@ -105,6 +108,15 @@ function tellTurn(telling: TurnTelling): void {
   const [out, taker] = [people['phone A'], people['phone B']];
   const relief = { kind: 'relief', out, in: taker, as: 'conductor', faceToFace: chance() < 0.5 };
   if (chance() < 0.4) add(phone(), turn, start + 500, relief);
+  if (chance() < 0.3) add('dispatcher', turn, start + 520, { kind: 'set', set: `T${telling.name}` });
+  if (chance() < 0.3)
+    add('dispatcher', turn, start - 60, { kind: 'expected-arrival', expectedAt: telling.at(start + 45) });
+  if (chance() < 0.3) add(phone(), turn, start + 540, { kind: 'briefing' });
+  if (chance() < 0.2) add('dispatcher', turn, start + 560, { kind: 'annulled', reason });
+  if (chance() < 0.2) {
+    const handbrakes = { count: 2, cars: ['5512'] };
+    add(phone(), turn, start + 580, { kind: 'tied-up', handbrakes, checks: ['lights'] });
+  }
   add(phone(), turn, start + 600, { kind: 'note', note: `note ${Math.floor(chance() * 100)}` });
   if (chance() < 0.8) add(anyone(), turn, start + 900 + Math.floor(chance() * 60), { kind: 'departure' });
 }
@@ -129,9 +141,23 @@ function tellAgain(
       break;
     case 2: {
       const madeAt = at(later + Math.floor(chance() * 1500));
-      const asked = add(own, turn, later, { kind: 'corrected', target, madeAt, reason: 'misread' });
-      if (chance() < 0.6)
-        add('supervisor', turn, later + 5, { kind: 'correction-approved', target: asked.id });
+      const instead = chance() < 0.5 ? { reading: { count: 1 } } : { observedAt: at(seconds + 15) };
+      const fields = {
+        kind: 'corrected',
+        target,
+        madeAt,
+        reason: 'misread',
+        observedAt: undefined,
+        ...instead,
+      };
+      const asked = add(own, turn, later, fields);
+      const decision = pick(chance, ['correction-approved', 'correction-declined', null]);
+      if (decision !== null)
+        add('supervisor', turn, later + 5, {
+          kind: decision,
+          target: asked.id,
+          ...(decision === 'correction-declined' ? { reason } : {}),
+        });
       break;
     }
     case 3: {
@@ -140,7 +166,12 @@ function tellAgain(
       break;
     }
     default:
-      add(pick(chance, ['phone A', 'phone B']), turn, later, { kind: 'agreed', target });
+      add(
+        pick(chance, ['phone A', 'phone B']),
+        turn,
+        later,
+        chance() < 0.6 ? { kind: 'agreed', target } : { kind: 'disagreed', target, reason },
+      );
   }
 }
 
