@@ -93,6 +93,12 @@ function LogRow({ line, turn, onTakeBack }: EntryLogProps & { line: LogLine }) {
       </td>
       <td>
         <span className={styles.said}>{words}</span>{' '}
+        {line.replacedWords.map((before) => (
+          <del key={before}>
+            <span className="unseen">, before </span>
+            {before}
+          </del>
+        ))}{' '}
         <span className={styles.plain}>
           {knownWords(entry)}
           {line.cameIn !== null && `, came in ${line.cameIn}`}

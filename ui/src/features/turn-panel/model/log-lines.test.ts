@@ -76,6 +76,19 @@ describe('a line of the log', () => {
     });
   });
 
+  it('keeps the count that was corrected beside the one that counts', () => {
+    const set = entry('set', { step: 'handbrake-set', observedAt: iso('22:20:00'), reading: { count: 1 } });
+    const recount = entry('recount', {
+      ...{ kind: 'corrected', step: undefined, target: 'set', reason: 'counted again' },
+      ...{ reading: { count: 2 }, madeAt: iso('22:21:10') },
+    });
+    const context = { labels: new Map([['handbrake-set', 'Handbrake set']]), zone, corrections: [] };
+    expect(logLines([set, recount], context)[1]).toMatchObject({
+      ...{ time: '17:20:00', replaced: [], words: 'Handbrake set, 2', replacedWords: ['Handbrake set, 1'] },
+      remarks: ['corrected 17:21:10 by A. Ortiz: counted again'],
+    });
+  });
+
   it('names who approved a correction', () => {
     const yes = state(corrected, { ...decided, state: 'approved' });
     expect(lineOf('check', [check, corrected], [yes])).toMatchObject({

@@ -6,6 +6,8 @@ import { entryWords, newWords, type StepLabels } from './entry-words';
 export interface LogLine {
   entry: WireEntry;
   words: string;
+  /** What it said before its reading was corrected, the newest first; stays in sight, struck. */
+  replacedWords: string[];
   /** The time that counts. */
   time: string;
   /** Times that it replaced, the newest first; they stay in sight, struck. */
@@ -36,9 +38,13 @@ export function logLines(entries: readonly WireEntry[], context: LogContext): Lo
       const own = changes.filter((change) => rootOf(change, byId) === entry.id && !takenBack.has(change.id));
       const times = timesOf(entry, own, states);
       const texts = times.map((at) => clockText(at, context.zone));
+      const versions = readingsOf(entry, own, states).map((reading) =>
+        entryWords({ ...entry, reading }, context.labels, context.zone, byId),
+      );
       return {
         entry,
-        words: entryWords(entry, context.labels, context.zone, byId),
+        words: versions.at(-1) ?? '',
+        replacedWords: versions.slice(0, -1).reverse(),
         time: texts.at(-1) ?? '',
         replaced: texts.slice(0, -1).reverse(),
         isWithdrawn: takenBack.has(entry.id),
@@ -75,12 +81,23 @@ function withdrawnIds(changes: readonly WireEntry[], states: States): ReadonlySe
   return takenBack;
 }
 
+/** The corrections that have effect, in the order in which they were made. */
+function corrections(own: readonly WireEntry[], states: States): WireEntry[] {
+  return own
+    .filter((change) => change.kind === 'corrected' && hasEffect(change, states))
+    .sort((a, b) => Date.parse(actTimeOf(a) ?? '') - Date.parse(actTimeOf(b) ?? ''));
+}
+
+function readingsOf(entry: WireEntry, own: readonly WireEntry[], states: States): WireEntry['reading'][] {
+  const later = corrections(own, states).flatMap(({ reading }) => (reading === undefined ? [] : [reading]));
+  return [entry.reading, ...later];
+}
+
 function timesOf(entry: WireEntry, own: readonly WireEntry[], states: States): number[] {
   const first = Date.parse(actTimeOf(entry) ?? entry.receivedAt);
-  const later = own
-    .filter((change) => change.kind === 'corrected' && hasEffect(change, states))
-    .sort((a, b) => Date.parse(actTimeOf(a) ?? '') - Date.parse(actTimeOf(b) ?? ''))
-    .flatMap((change) => (change.observedAt === undefined ? [] : [Date.parse(change.observedAt)]));
+  const later = corrections(own, states).flatMap((change) =>
+    change.observedAt === undefined ? [] : [Date.parse(change.observedAt)],
+  );
   return [first, ...later].filter((at, index, all) => at !== all[index - 1]);
 }
 
