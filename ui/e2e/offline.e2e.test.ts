@@ -262,7 +262,9 @@ describe.skipIf(browserIsMissing())('thirty ticks over four turns without a sign
   }
 
   async function loadsNewerVersion(page: Page): Promise<void> {
-    await page.evaluate(async () => (await navigator.serviceWorker.getRegistration())?.update());
+    await page.evaluate(async () => {
+      await (await navigator.serviceWorker.getRegistration())?.update();
+    });
     const load = page.getByRole('button', { name: 'Load it now' });
     await load.waitFor();
     const before = await page.evaluate(() => performance.timeOrigin);
