@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import { useUnsaved } from '../../../lib/unsaved';
 import { rolesOf, type Instant, type WireReading } from '@stubpost/shared';
 import { lockOf, type ActLock } from '../model/act-lock';
 import {
@@ -50,6 +51,8 @@ export function useAct(act: NextAct): ActOnPage {
   const [isLockLifted, setLockLifted] = useState(false);
   const [earlier, setEarlier] = useState<Instant | null>(null);
   const [wantsTime, setWantsTime] = useState(false);
+
+  useUnsaved(form !== emptyForm);
 
   const planned = act.kind === 'step' ? steps.find((step) => step.key === act.step.key) : undefined;
   const brakes = handbrakeView(turn, steps, handbrakes, planned?.key);
