@@ -20,6 +20,7 @@ export function CheckLogView({ zone, ...takeAlong }: TakeAlongProps & { zone: st
         {state.isPending && <LoadingRows what="the state of the log" onRetry={() => void state.refetch()} />}
         {state.data !== undefined && <LogState state={state.data} zone={zone} />}
         <TakeAlong {...takeAlong} />
+        <SealMeaning />
       </div>
       <div className={styles.column}>
         {heads.error !== null && heads.data === undefined && (
@@ -27,7 +28,6 @@ export function CheckLogView({ zone, ...takeAlong }: TakeAlongProps & { zone: st
         )}
         {heads.isPending && <LoadingRows what="daily heads" onRetry={() => void heads.refetch()} />}
         {heads.data !== undefined && <DailyHeads heads={heads.data} zone={zone} />}
-        <SealMeaning />
       </div>
     </div>
   );

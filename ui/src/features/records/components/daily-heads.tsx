@@ -5,16 +5,15 @@ import { formatServiceDateWithYear, formatStamp } from '../../../lib/time-displa
 import { formatCount, numbersOfDay, shortHash } from '../model/log-words';
 import styles from './check-log.module.css';
 
-const usuallyShown = 14;
+const usuallyShown = 10;
 
 function HeadRow({ head, zone }: { head: WireDailyHead; zone: string }) {
   return (
     <tr>
-      <th scope="row">
+      <th scope="row" className="nowrap">
         {formatServiceDateWithYear(head.date)}
         <span className={styles.numbers}>{numbersOfDay(head)}</span>
       </th>
-      <td className="number">{formatCount(head.entries)}</td>
       <td>
         <b className={styles.short}>{shortHash(head.hash)}</b>
         <code className={styles.full}>
@@ -42,9 +41,6 @@ export function DailyHeads({ heads, zone }: { heads: readonly WireDailyHead[]; z
             <thead>
               <tr>
                 <th scope="col">Day of receipt, UTC</th>
-                <th scope="col" className="number">
-                  Entries
-                </th>
                 <th scope="col">Head</th>
                 <th scope="col">Published</th>
               </tr>
