@@ -162,6 +162,15 @@ export { nextAlertStep, noAlertMemory, shippedHoldTimes } from './lateness/alert
 export type { AlertHoldTimes, AlertMemory, AlertObservation, AlertStep } from './lateness/alert-life';
 export { ALERT_EVENTS, alertAfter, raisedAlert } from './lateness/alert-state';
 export type { AlertEvent, AlertRefusal, AlertStanding } from './lateness/alert-state';
+export {
+  countByPeriod,
+  findBursts,
+  loadPeriodSeconds,
+  periodCount,
+  publishedBurstRule,
+  spansByPeriod,
+} from './lateness/alert-load';
+export type { Burst, BurstRule, InstantRange } from './lateness/alert-load';
 export { assess } from './lateness/assess';
 export { assessedTurnOf } from './lateness/assessed-turn';
 export type { AssessedContext, AssessedStep, AssessedTurn } from './lateness/assessed-turn';
@@ -415,6 +424,19 @@ export { ROUTES } from './contract/routes';
 export type { RouteMethod, RouteSpec, TerminalPlace } from './contract/route';
 
 // history
+export { comesBackSeconds, fleetingSeconds, isStale } from './history/alert-attention';
+export type { RepeaterFigures, UntakenFigures } from './history/alert-attention';
+export { PRECISION_VERDICTS, measurePrecision, precisionVerdict } from './history/alert-precision';
+export type { CountedShare, PrecisionFigures, PrecisionVerdict } from './history/alert-precision';
+export { measureAlertQuality } from './history/alert-quality';
+export type { AlertQuality, AlertQualityFacts, WatchedTurnSpan } from './history/alert-quality';
+export type { AlertSource, PriorityPart, TopSources } from './history/alert-sources';
+export { ownLoadGoals, publishedAlertTargets, publishedPriorityMix } from './history/alert-targets';
+export { measureWarning, warningEdgesMinutes } from './history/alert-warning';
+export type { WarningFigures } from './history/alert-warning';
+export { measureLoad } from './history/load-figures';
+export type { DeskLoad, LoadFigures } from './history/load-figures';
+export type { PastAlert, PastDepartureOfTurn } from './history/past-alert';
 export { splitDelay } from './history/delay-split';
 export type { DelayQuestion, DelaySplit } from './history/delay-split';
 export { GROUPINGS, groupOnTime } from './history/grouping';
