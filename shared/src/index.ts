@@ -182,6 +182,14 @@ export { gapWords } from './lateness/securement';
 export { shippedLatenessSettings } from './lateness/settings';
 export type { LatenessSettings } from './lateness/settings';
 
+// contract: quality of alerts
+export {
+  alertQualityQuerySchema,
+  alertQualitySchema,
+  longestAlertQualityDays,
+} from './contract/alert-quality';
+export type { AlertQualityQuery, WireAlertQuality } from './contract/alert-quality';
+
 // contract: alerts
 export {
   ALERT_QUESTIONS,

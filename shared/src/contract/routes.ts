@@ -1,4 +1,5 @@
 import { accountRoutes } from './account-routes';
+import { alertQualityRoutes } from './alert-quality-routes';
 import { historyRoutes } from './history-routes';
 import { recordRoutes } from './record-routes';
 import type { RouteSpec } from './route';
@@ -12,6 +13,7 @@ import { turnAreaRoutes } from './turn-routes';
 export const ROUTES: readonly RouteSpec[] = [
   ...accountRoutes,
   ...turnAreaRoutes,
+  ...alertQualityRoutes,
   ...historyRoutes,
   ...timetableRoutes,
   ...recordRoutes,
