@@ -3,6 +3,25 @@ import { formatDuration } from './say.mjs';
 const HEADS = ['part', 'rounds', 'with receipt', 'lost', 'doubled', 'chain', 'took', 'result'];
 const count = (value) => value.toLocaleString('en-US');
 
+/** Figures of the same part added up: tests leave some after each of their rounds. */
+export function mergeFigures(lines) {
+  const parts = new Map();
+  for (const line of lines) {
+    const known = parts.get(line.part);
+    parts.set(line.part, known === undefined ? line : sumOf(known, line));
+  }
+  return [...parts.values()];
+}
+
+const sumOf = (one, other) => ({
+  part: one.part,
+  rounds: one.rounds + other.rounds,
+  acknowledged: one.acknowledged + other.acknowledged,
+  lost: one.lost + other.lost,
+  doubled: one.doubled + other.doubled,
+  chain: one.chain === 'broken' ? one.chain : other.chain,
+});
+
 /**
  * What a part has come to: the figures its tests have left, whether their runner ended well, and how long it took. A
  * part that left no figures shows how many rounds it was asked for; its tests are the judge.

@@ -1,6 +1,6 @@
 import assert from 'node:assert/strict';
 import { test } from 'node:test';
-import { formatTable, hasHeld, rowsOf } from './soak-table.mjs';
+import { formatTable, hasHeld, mergeFigures, rowsOf } from './soak-table.mjs';
 
 const figures = { part: 'server', rounds: 200, acknowledged: 12_345, lost: 0, doubled: 0, chain: 'whole' };
 const part = { name: 'server', rounds: 200, code: 0, milliseconds: 61_500, figures: [figures] };
@@ -11,6 +11,15 @@ test('a part that held shows its figures in columns', () => {
     'part    rounds  with receipt  lost  doubled  chain  took    result\n' +
       'server     200        12,345     0        0  whole  61.5 s  held',
   );
+});
+
+test('figures of the same part are added up, and a chain once broken stays so', () => {
+  const other = { ...figures, part: 'store' };
+  const broken = { ...figures, rounds: 1, acknowledged: 5, chain: 'broken' };
+  assert.deepEqual(mergeFigures([figures, other, broken, { ...figures, rounds: 2, acknowledged: 10 }]), [
+    { ...figures, rounds: 203, acknowledged: 12_360, chain: 'broken' },
+    other,
+  ]);
 });
 
 test('a part without figures shows what was asked for', () => {

@@ -12,9 +12,10 @@ import { ensureInstalled } from './install.mjs';
 import { inRoot, packageCommand } from './paths.mjs';
 import { prepare } from './prepare.mjs';
 import { Failure, formatDuration, say, sayFailure } from './say.mjs';
-import { formatTable, hasHeld, rowsOf } from './soak-table.mjs';
+import { formatTable, hasHeld, mergeFigures, rowsOf } from './soak-table.mjs';
 
 const LIMIT_MILLISECONDS = 3 * 60 * 60_000;
+const PROGRESS_MILLISECONDS = 2 * 60_000;
 
 const jest = (file) => ({ command: 'jest', folder: 'service', args: ['--ci', file] });
 const offlineTests = {
@@ -50,6 +51,21 @@ function scaled(rounds, scale) {
   );
 }
 
+function figuresIn(report) {
+  if (!existsSync(report)) return [];
+  const lines = readFileSync(report, 'utf8').split('\n').slice(0, -1);
+  return mergeFigures(lines.map((line) => JSON.parse(line)));
+}
+
+/** Says every few minutes how far a part has come, where its tests leave figures on the way. */
+function sayProgress(report) {
+  const timer = setInterval(() => {
+    for (const { part, rounds, acknowledged, lost } of figuresIn(report))
+      say(`  ${part}: ${rounds} rounds so far, ${acknowledged} receipts, ${lost} lost`);
+  }, PROGRESS_MILLISECONDS);
+  return () => clearInterval(timer);
+}
+
 async function runPart(name, { scale, browser, folder }) {
   const { command, args, rounds, folder: where } = PARTS[name];
   const report = join(folder, `${name}.ndjson`);
@@ -66,17 +82,18 @@ async function runPart(name, { scale, browser, folder }) {
     ...variables,
     ...(browser === undefined ? {} : { CHROMIUM_PATH: browser }),
   });
+  const stopSaying = sayProgress(report);
   const { code, output } = await run(packageCommand(command), args, {
     cwd: inRoot(where),
     env,
     limitMilliseconds: LIMIT_MILLISECONDS,
   });
+  stopSaying();
   if (code !== 0) say(`\n----- ${name}: output -----\n${output.trimEnd()}\n----- ${name}: end -----\n`);
-  const lines = existsSync(report) ? readFileSync(report, 'utf8').trim().split('\n') : [];
   const total = Object.values(variables).reduce((sum, value) => sum + Number(value), 0);
   const milliseconds = performance.now() - began;
   say(`${name}: ${code === 0 ? 'held' : 'FAILED'} in ${formatDuration(milliseconds)}`);
-  return { name, rounds: total, code, milliseconds, figures: lines.map((line) => JSON.parse(line)) };
+  return { name, rounds: total, code, milliseconds, figures: figuresIn(report) };
 }
 
 async function soak() {

@@ -25,11 +25,15 @@ beforeEach(() => {
 afterEach(() => temporary.remove());
 
 /** Crashes one server over and over and gives what was found each time. */
-async function crash(server: CrashedServer, rounds: number): Promise<AfterServerCrash[]> {
+async function crash(part: string, server: CrashedServer, rounds: number): Promise<AfterServerCrash[]> {
   const random = seededRandom(rounds);
   const found: AfterServerCrash[] = [];
   for (let round = 0; round < rounds; round += 1) {
-    found.push(await crashServerOnce(server, 15 + Math.floor(random() * 120)));
+    const after = await crashServerOnce(server, 15 + Math.floor(random() * 120));
+    const { acknowledged, lost, notOnce, isChainWhole } = after;
+    const chain = isChainWhole ? 'whole' : 'broken';
+    noteSoak({ part, rounds: 1, acknowledged, lost: lost.length, doubled: notOnce.length, chain });
+    found.push(after);
   }
   return found;
 }
@@ -43,31 +47,22 @@ const nothingWrong = {
   isHalfApplied: false,
 };
 
-function expectAllKept(part: string, found: readonly AfterServerCrash[], server: CrashedServer): void {
-  const sum = (of: (each: AfterServerCrash) => number) => found.reduce((total, each) => total + of(each), 0);
-  const verdict = verdictOf(wholeLogOf(server.folder), [server.head]);
-  noteSoak({
-    part,
-    rounds: found.length,
-    acknowledged: sum(({ acknowledged }) => acknowledged),
-    lost: sum(({ lost }) => lost.length),
-    doubled: sum(({ notOnce }) => notOnce.length),
-    chain: verdict.isWhole && found.every(({ isChainWhole }) => isChainWhole) ? 'whole' : 'broken',
-  });
+function expectAllKept(found: readonly AfterServerCrash[], server: CrashedServer): void {
   for (const [round, each] of found.entries())
     expect({ round, ...each }).toMatchObject({ round, ...nothingWrong });
+  const verdict = verdictOf(wholeLogOf(server.folder), [server.head]);
   expect(verdict).toMatchObject({ isWhole: true, entries: server.head.sequence });
 }
 
 describe('an entry with a receipt, in a server that dies under writes', () => {
   test('outlives kill -9 at any moment, once, in one whole chain', async () => {
     const server = await prepareServer(temporary.folder);
-    expectAllKept('server, kill -9', await crash(server, killRounds), server);
+    expectAllKept(await crash('server, kill -9', server, killRounds), server);
   });
 
   test('outlives a power cut in which everything not synced is lost', async () => {
     const server = await prepareServer(temporary.folder);
     server.powerCutLibrary = buildPowerCutLibrary(temporary.folder);
-    expectAllKept('server, power cut', await crash(server, powerCutRounds), server);
+    expectAllKept(await crash('server, power cut', server, powerCutRounds), server);
   });
 });

@@ -11,7 +11,10 @@ export interface SoakFigures {
   chain: 'whole' | 'broken' | 'not kept here';
 }
 
-/** Leaves the figures of a part for `npm run soak`, where it asked for them; `npm test` does not. */
+/**
+ * Leaves the figures of some rounds of a part for `npm run soak`, where it asked for them; `npm test` does
+ * not. A part that is broken off half way has left what it came to.
+ */
 export function noteSoak(figures: SoakFigures): void {
   const { SOAK_REPORT } = process.env;
   if (SOAK_REPORT !== undefined) appendFileSync(SOAK_REPORT, `${JSON.stringify(figures)}\n`);
