@@ -3,13 +3,15 @@ import { ROLE_WORDS } from '../../../components/words';
 import { HOME_NAMES, homeOfRole } from '../../../lib/home';
 
 const DOES: Record<Role, string> = {
-  conductor: 'records the steps of own turns on the phone, takes back own entries before departure',
+  conductor:
+    'records the steps of own turns on the phone, takes back own entries before departure and asks for corrections after it; answers the desk, reports defects, hands over, ties sets up',
   engineer:
     'the same away from the controls; at the controls the conductor, the desk or a later entry does it',
   dispatcher:
     'records for everybody what comes over the radio; tracks, holds, extras, annulments; takes alerts',
-  supervisor: 'takes alerts, writes notes, and edits step plans and thresholds',
-  inspector: 'puts blue signals up and takes them down, writes notes',
+  supervisor:
+    'takes alerts, decides on corrections of others, writes notes, and edits step plans and thresholds',
+  inspector: 'puts blue signals up and takes them down, on the phone too; reports defects, writes notes',
   planner: 'reads board and history',
   analyst: 'reads history and brings in past departures',
   auditor: 'reads everything that is recorded',

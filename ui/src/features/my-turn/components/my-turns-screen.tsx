@@ -88,7 +88,7 @@ function Lists({ isLoading, error, retry, turns, terminals, hand }: ListsProps) 
           <TieUpLine turns={turns} />
         </>
       ) : (
-        <p>You have no turn yet. Take one below.</p>
+        <NoTurns terminals={terminals} />
       )}
       {terminals.map((terminal) => (
         <OtherTurns
@@ -99,6 +99,18 @@ function Lists({ isLoading, error, retry, turns, terminals, hand }: ListsProps) 
         />
       ))}
     </>
+  );
+}
+
+function NoTurns({ terminals }: { terminals: WireTerminal[] }) {
+  const person = usePerson();
+  const isCrew = terminals.some(({ code }) => crewRolesAt(person, code).length > 0);
+  return (
+    <p>
+      {isCrew
+        ? 'You have no turn yet. Take one below.'
+        : 'Open a turn for a defect, a note, a blue signal, as your role has it.'}
+    </p>
   );
 }
 

@@ -2,6 +2,8 @@ import { useState } from 'react';
 import type { CrewRole, WireTurn } from '@stubpost/shared';
 import { CREW_WORDS } from '../model/crew-words';
 import { reliefConsequence } from '../model/relief';
+import type { ActWays } from './act-ways';
+import { AskedOfMe } from './asked-of-me';
 import { Foot } from './foot';
 import styles from './phone-parts.module.css';
 import { RecordBar } from './record-bar';
@@ -15,9 +17,11 @@ type CrewMember = WireTurn['crew'][number];
 
 /** A turn the person is not on: who has it, and one bar to take it; from somebody else it is a relief, face to face or not. */
 export function TakeTurn({
+  ways,
   onTaken,
   onHelp,
 }: {
+  ways: ActWays;
   /** Without a place for Undo: the first step may be due at once. */
   onTaken: Places['recordQuietly'];
   onHelp: () => void;
@@ -29,6 +33,8 @@ export function TakeTurn({
     <>
       <div className={styles.main}>
         <TrainFacts turn={turn} now={now} marker={marker} />
+        {/* Somebody who was relieved is no longer on the turn and still has to say whether it was face to face. */}
+        <AskedOfMe ways={ways} />
         {holder === undefined && <TurnPicture turn={turn} now={now} />}
         <Crew />
         {me.roles.length > 1 && (

@@ -227,6 +227,27 @@ describe('a relief', () => {
     expect(sent(app)[0]).toMatchObject({ kind: 'agreed', target: id(5) });
   });
 
+  it('asks the one who was relieved, although the job is somebody else’s now', async () => {
+    const app = await openTurn({
+      ...secured,
+      crew: [{ as: 'conductor', personId: 'p-cas', name: 'Castellane' }],
+      reliefs: [
+        {
+          entryId: id(6),
+          at: at('17:22'),
+          as: 'conductor',
+          out: { personId: 'p-ortiz', name: 'Ortiz' },
+          in: { personId: 'p-cas', name: 'Castellane' },
+          faceToFace: false,
+          awaits: 'p-ortiz',
+        },
+      ],
+    });
+    expect(screen.getByText(/Castellane took over from you as conductor/)).toBeVisible();
+    await touch('No, not face to face');
+    expect(sent(app)[0]).toMatchObject({ kind: 'disagreed', target: id(6), reason: 'Not face to face' });
+  });
+
   it('is what taking a turn from somebody is', async () => {
     const app = await openTurn({
       ...secured,

@@ -1,6 +1,8 @@
 import type { WireTurn } from '@stubpost/shared';
 import { Link } from 'react-router-dom';
 import { StateWord } from '../../../components/flags';
+import { usePerson } from '../../../lib/session';
+import { asksFrom } from '../model/asks-from';
 import { openWords, turnLine } from '../model/turn-line';
 import listStyles from './my-turns.module.css';
 import styles from './phone-parts.module.css';
@@ -9,6 +11,7 @@ import styles from './phone-parts.module.css';
 export function TurnItem({ turn, isHere, note }: { turn: WireTurn; isHere: boolean; note?: string }) {
   const line = turnLine(turn);
   const right = note ?? line.progress;
+  const asks = asksFrom(turn, usePerson().id).length > 0;
   return (
     <Link
       to={`/my/turn/${turn.id}`}
@@ -23,6 +26,11 @@ export function TurnItem({ turn, isHere, note }: { turn: WireTurn; isHere: boole
         <span>{line.trains}</span>
         {right !== '' && <span>{right}</span>}
       </span>
+      {asks && (
+        <span className={listStyles.row}>
+          <b>Asks for your word</b>
+        </span>
+      )}
     </Link>
   );
 }

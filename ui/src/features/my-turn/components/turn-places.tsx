@@ -1,5 +1,7 @@
+import { usePrefetchQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useOutbox } from '../../../lib/outbox/use-outbox';
+import { crewQuery } from '../api/turn-queries';
 import { actKey } from '../model/next-act';
 import { whereIs } from '../model/where-is';
 import { draftOf } from './act-bar';
@@ -24,7 +26,7 @@ export function TurnPlaces() {
   if (me.roles.length === 0) return <OffCrew onRecord={places.recordQuietly} />;
   const isOutside = me.role === null && !isHelping && turn.annulled === null && places.done === null;
   if (isOutside && places.place.kind === 'act') {
-    return <TakeTurn onTaken={places.recordQuietly} onHelp={() => setHelping(true)} />;
+    return <TakeTurn ways={places.ways} onTaken={places.recordQuietly} onHelp={() => setHelping(true)} />;
   }
   if (places.place.kind === 'act') return <ActNow places={places} />;
   if (places.place.kind === 'second') return <SecondPlace places={places} />;
@@ -33,6 +35,8 @@ export function TurnPlaces() {
 
 function ActNow({ places }: { places: Places }) {
   const { turn } = useTurnScene();
+  // A relief without a signal needs the names.
+  usePrefetchQuery(crewQuery(turn.terminal));
   const { state } = useOutbox();
   const { act, done, isPicked, undo, endUndo, ways } = places;
   const bar =

@@ -1,5 +1,6 @@
 import {
   latenessSettingsOf,
+  recordableKinds,
   shippedThresholds,
   type Instant,
   type WireTerminal,
@@ -12,7 +13,7 @@ import { toServerTime, useNow } from '../../../lib/use-now';
 import { myBoardQuery, planQuery } from '../api/turn-queries';
 import { useOutbox } from '../../../lib/outbox/use-outbox';
 import { knownTurn } from '../model/known-turn';
-import { crewRolesAt, sortMyTurns, type MyTurns } from '../model/my-turns';
+import { sortMyTurns, type MyTurns } from '../model/my-turns';
 import { turnAt } from '../model/turn-now';
 
 /** The turns at the terminals where the person is crew. */
@@ -26,12 +27,12 @@ export interface MyTurnsState {
   retry: () => void;
 }
 
-/** Terminals at which the person may be conductor or engineer. */
+/** Terminals at which the person records something about turns: as crew, or beside it. */
 export function crewTerminals(
   terminals: readonly WireTerminal[],
   person: ReturnType<typeof usePerson>,
 ): WireTerminal[] {
-  return terminals.filter(({ code }) => crewRolesAt(person, code).length > 0);
+  return terminals.filter(({ code }) => recordableKinds(person, code).length > 0);
 }
 
 /** The boards of all my terminals, each turn as this phone knows it, at this second. */
