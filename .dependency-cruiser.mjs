@@ -2,7 +2,7 @@ import { fileURLToPath } from 'node:url';
 import { openFiles } from './service/scripts/service-doors.mjs';
 
 const TEST = '\\.(test|spec|e2e-spec)\\.tsx?$';
-const TESTING = '^(shared|service|seed|ui)/src/testing/';
+const TESTING = '^(shared|service|seed|ui)/src/(features/[^/]+/)?testing/';
 const SHARED = '^shared/(src|dist)/';
 const DATE_FNS = '^node_modules/(date-fns|@date-fns/tz)/';
 const FOUNDATION = '^service/src/(config|database|common)/';
@@ -22,6 +22,7 @@ const SHARED_AREAS = {
   lateness: ['timetable', 'plan', 'turn', 'forecast'],
   records: ['timetable', 'plan', 'turn', 'forecast'],
   history: ['timetable', 'plan', 'turn', 'forecast', 'lateness', 'records'],
+  duty: ['timetable', 'plan', 'turn', 'forecast', 'lateness'],
   access: ['timetable', 'plan', 'turn'],
 };
 
