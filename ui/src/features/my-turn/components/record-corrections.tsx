@@ -41,7 +41,7 @@ function newWords(correction: WireCorrection, zone: string): string {
 }
 
 /** "Waiting for the supervisor.", "Approved 18:02:10 by Reyes.", "Declined 18:02:10 by Reyes: no word of it on the radio." */
-export function decisionWords(
+function decisionWords(
   { state, decidedAt, decidedBy, declinedBecause }: WireCorrection,
   zone: string,
 ): string {
