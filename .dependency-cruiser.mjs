@@ -2,7 +2,7 @@ import { fileURLToPath } from 'node:url';
 import { openFiles } from './service/scripts/service-doors.mjs';
 
 const TEST = '\\.(test|spec|e2e-spec)\\.tsx?$';
-const TESTING = '^(shared|service|seed|ui)/src/(features/[^/]+/)?testing/';
+const TESTING = '^(shared|service|seed|ui)/src/testing/|^ui/src/features/[a-z-]+/testing/';
 const SHARED = '^shared/(src|dist)/';
 const DATE_FNS = '^node_modules/(date-fns|@date-fns/tz)/';
 const FOUNDATION = '^service/src/(config|database|common)/';
