@@ -45,7 +45,7 @@ export class DailyHeads {
   /** Published heads, oldest first, within days of which both are included. */
   async published(days: { from?: CalendarDate | undefined; to?: CalendarDate | undefined } = {}) {
     const rows = await this.reader.query<PublishedHead>(
-      `SELECT date, sequence, hash, entries, published_at AS publishedAt FROM daily_head
+      `SELECT date, sequence, hash, entries, published_at AS "publishedAt" FROM daily_head
        WHERE date >= ? AND date <= ? ORDER BY sequence`,
       [days.from ?? '', days.to ?? '9999-12-31'],
     );

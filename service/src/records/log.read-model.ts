@@ -45,9 +45,9 @@ export class LogReadModel {
   /** So many entries from a number on. */
   async entriesFrom(sequence: number, count: number): Promise<StoredEntry[]> {
     const rows = await this.reader.query<StoredEntry>(
-      `SELECT sequence, id, received_at AS receivedAt, previous_hash AS previousHash, body_hash AS bodyHash, hash, body,
-       subject_kind AS subjectKind, subject_id AS subjectId, kind, terminal_code AS terminalCode,
-       service_date AS serviceDate, observed_at AS observedAt
+      `SELECT sequence, id, received_at AS "receivedAt", previous_hash AS "previousHash", body_hash AS "bodyHash", hash, body,
+       subject_kind AS "subjectKind", subject_id AS "subjectId", kind, terminal_code AS "terminalCode",
+       service_date AS "serviceDate", observed_at AS "observedAt"
        FROM entry WHERE sequence >= ? ORDER BY sequence LIMIT ?`,
       [sequence, count],
     );
@@ -68,4 +68,4 @@ export class LogReadModel {
   }
 }
 
-const selectPoints = 'SELECT sequence, hash, received_at AS receivedAt FROM entry';
+const selectPoints = 'SELECT sequence, hash, received_at AS "receivedAt" FROM entry';
