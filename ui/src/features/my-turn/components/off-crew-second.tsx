@@ -4,6 +4,7 @@ import type { ActWays } from './act-ways';
 import { Foot } from './foot';
 import styles from './phone-parts.module.css';
 import { RecordBar } from './record-bar';
+import { SecondBar } from './second-bar';
 import { TrainFacts } from './train-facts';
 import { useTurnScene } from './turn-context';
 
@@ -28,20 +29,11 @@ export function OffCrewSecond({
     <>
       <div className={styles.main}>
         <TrainFacts turn={turn} now={now} marker={marker} />
-        <section className={styles.next} aria-label="Second touch">
-          <p className="muted">Second touch, here</p>
-          <RecordBar
-            barKey="second"
-            isOwnChange
-            isSecond
-            over="Record now"
-            onRecord={() => ways.onRecord(act, label, null)}
-          >
-            {isAnnul
-              ? `Annulled: train ${train}. ${act.reason}`
-              : `Taken down: blue signal, track ${turn.track ?? 'not known'}`}
-          </RecordBar>
-        </section>
+        <SecondBar onRecord={() => ways.onRecord(act, label, null)}>
+          {isAnnul
+            ? `Annulled: train ${train}. ${act.reason}`
+            : `Taken down: blue signal, track ${turn.track ?? 'not known'}`}
+        </SecondBar>
         {!isAnnul && turn.blueSignal !== null && (
           <p>
             Up since {formatClock(turn.blueSignal.since, turn.zone)}, {turn.blueSignal.by}.

@@ -2,8 +2,8 @@ import { rolesOf } from '@stubpost/shared';
 import { Caution } from '../../../components/caution';
 import { formatClock } from '../../../lib/time-display';
 import { handbrakeWords, readingWords } from '../model/act-form';
-import { RecordBar } from './record-bar';
 import styles from './phone-parts.module.css';
+import { SecondBar } from './second-bar';
 import { useTurnScene } from './turn-context';
 import type { ActOnPage } from './use-act';
 
@@ -11,12 +11,7 @@ import type { ActOnPage } from './use-act';
 export function SecondTouch({ page, onRecord }: { page: ActOnPage; onRecord: () => void }) {
   return (
     <>
-      <section className={styles.next} aria-label="Second touch">
-        <p className="muted">Second touch, here</p>
-        <RecordBar barKey="second" isOwnChange isSecond over="Record now" onRecord={onRecord}>
-          Released: {handbrakeWords(page.reading)}
-        </RecordBar>
-      </section>
+      <SecondBar onRecord={onRecord}>Released: {handbrakeWords(page.reading)}</SecondBar>
       <ReleaseFacts />
       <Caution>
         Records what you did. It does not say that the train may move safely: your rules, the law in force and
