@@ -1,4 +1,4 @@
-import { existsSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import type { Plugin } from 'vite';
 
@@ -53,7 +53,9 @@ export function keepOldAssets(): Plugin {
       if (!existsSync(folder)) return;
       const lastUsed = existsSync(notes) ? (JSON.parse(readFileSync(notes, 'utf8')) as LastUsed) : {};
       const present = readdirSync(folder);
-      const { kept, gone } = sortAssets({ present, current, lastUsed }, Date.now());
+      // The page is written anew with every build: its time is the time of this one.
+      const now = statSync(path.join(outDir, 'index.html')).mtimeMs;
+      const { kept, gone } = sortAssets({ present, current, lastUsed }, now);
       for (const file of gone) rmSync(path.join(folder, file));
       writeFileSync(notes, JSON.stringify(kept));
     },

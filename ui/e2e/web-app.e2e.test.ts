@@ -4,8 +4,20 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { addPerson, ApiPerson, crewPassword } from './support/api';
 import { browserIsMissing, openBrowser, openWindow, phone, seriousFindings } from './support/browser';
 import { startCutProxy, type CutProxy } from './support/cut-proxy';
+import { layoutFindings, setLargeText } from './support/layout-findings';
 import { openTurn, tickNote } from './support/phone-ticks';
 import { startServer, type TestServer } from './support/server';
+
+/** The page holds on a large and a small phone, and with type twice as large. */
+async function layoutHolds(page: Page): Promise<void> {
+  for (const size of [{ width: 360, height: 640 }, phone]) {
+    await page.setViewportSize(size);
+    expect(await layoutFindings(page)).toEqual([]);
+    await setLargeText(page, true);
+    expect(await layoutFindings(page)).toEqual([]);
+    await setLargeText(page, false);
+  }
+}
 
 const zone = 'America/New_York';
 const pin = '4471';
@@ -94,10 +106,10 @@ describe.skipIf(browserIsMissing())('one phone, two people', () => {
     expect(await kindOf('/assets/nothing-12345678.js')).toBe('404 application/json');
     expect(await kindOf('/app.webmanifest')).toBe('200 application/manifest+json');
     expect(await kindOf('/icons/mark-maskable-512.png')).toBe('200 image/png');
-    const byHand = await page.context().newPage();
-    expect((await byHand.goto('/api/health'))?.headers()['content-type']).toContain('application/json');
-    expect((await byHand.goto('/assets/nothing-12345678.js'))?.status()).toBe(404);
-    await byHand.close();
+    expect((await page.goto('/api/health'))?.headers()['content-type']).toContain('application/json');
+    expect((await page.goto('/assets/nothing-12345678.js'))?.status()).toBe(404);
+    await page.goto('/my');
+    await page.getByRole('link', { name: /\b1742 out/ }).waitFor();
   });
 
   it('says that a newer version waits for the unsent entries, and does not load it', async () => {
@@ -116,6 +128,7 @@ describe.skipIf(browserIsMissing())('one phone, two people', () => {
     await page.getByRole('link', { name: /On phone, not sent \(1\)/ }).click();
     await page.getByRole('heading', { name: 'Outbox' }).waitFor();
     expect(await seriousFindings(page)).toEqual([]);
+    await layoutHolds(page);
   });
 
   it('locks at a touch and opens with the PIN, also without a signal', async () => {
@@ -123,6 +136,7 @@ describe.skipIf(browserIsMissing())('one phone, two people', () => {
     await page.getByRole('button', { name: 'Lock, other person' }).click();
     await page.getByRole('heading', { name: 'Locked' }).waitFor();
     expect(await seriousFindings(page)).toEqual([]);
+    await layoutHolds(page);
     await page.reload();
     await page.getByRole('heading', { name: 'Locked' }).waitFor();
     await page.getByRole('textbox', { name: 'PIN' }).fill(pin);

@@ -63,7 +63,7 @@ const toBytes = (text: string): Uint8Array<ArrayBuffer> =>
   Uint8Array.from(atob(text), (sign) => sign.charCodeAt(0));
 
 /** Absent on plain http away from this machine, whatever the types say. */
-const subtle = (): SubtleCrypto | undefined => globalThis.crypto.subtle as SubtleCrypto | undefined;
+const subtle = (): SubtleCrypto | undefined => globalThis.crypto.subtle;
 
 async function digestOf(secret: string, salt: Uint8Array<ArrayBuffer>, times: number): Promise<string> {
   const engine = subtle();
