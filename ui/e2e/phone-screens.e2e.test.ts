@@ -29,6 +29,9 @@ const twoBrakes = { count: 2, cars: ['1408', '1412'] };
 const lowestBar = 96;
 const largestFootShare = 0.46;
 
+/** How long something may take to come out right on a busy machine. */
+const patience = { timeout: 15_000 };
+
 describe.skipIf(browserIsMissing())('the phone’s screens', () => {
   let server: TestServer;
   let browser: Browser;
@@ -209,7 +212,7 @@ describe.skipIf(browserIsMissing())('the phone’s screens', () => {
         await setLargeText(page, isLarge);
         const where = `${theme}, ${size.width} px${isLarge ? ', 200 % text' : ''}`;
         // Looked at until it stands: a new size takes the browser a moment.
-        await expect.poll(() => layoutFindings(page), { message: where }).toEqual([]);
+        await expect.poll(() => layoutFindings(page), { message: where, ...patience }).toEqual([]);
         const { bar, share } = await footSize(page);
         if (bar > 0) expect(Math.round(bar), where).toBeGreaterThanOrEqual(lowestBar);
         expect(share, where).toBeLessThanOrEqual(largestFootShare);
@@ -248,7 +251,7 @@ describe.skipIf(browserIsMissing())('the phone’s screens', () => {
     await touch(/Released: 1408/);
     await touch(/Released: 1 handbrake, car 1408/);
     await expect
-      .poll(async () => (await told('release')).securement)
+      .poll(async () => (await told('release')).securement, patience)
       .toMatchObject({ set: 2, released: 1, carsStillSet: ['1412'] });
     await openTurn('release');
     await page.getByRole('heading', { name: '1 of 2 handbrakes released' }).waitFor();
@@ -260,7 +263,9 @@ describe.skipIf(browserIsMissing())('the phone’s screens', () => {
   it('a yes to the radio, a defect and a tie-up with its reason reach the log as they were said', async () => {
     await openTurn('question');
     await touch('Agree');
-    await expect.poll(async () => (await entriesOf('question')).at(-1)).toMatchObject({ kind: 'agreed' });
+    await expect
+      .poll(async () => (await entriesOf('question')).at(-1), patience)
+      .toMatchObject({ kind: 'agreed' });
     expect((await told('question')).asksAgreement).toBeUndefined();
 
     await openTurn('count');
@@ -269,7 +274,7 @@ describe.skipIf(browserIsMissing())('the phone’s screens', () => {
     await touch('Lights');
     await touch(/Defect: set: lights/);
     await expect
-      .poll(async () => (await told('count')).defects)
+      .poll(async () => (await told('count')).defects, patience)
       .toMatchObject([{ car: null, cause: 'lights' }]);
 
     await page.goto(`/my/tie-up?turn=${turnOf('tie-up').id}`);
@@ -279,7 +284,7 @@ describe.skipIf(browserIsMissing())('the phone’s screens', () => {
     await touch('Mechanical has the set');
     await touch(/Tied up with a reason/);
     await expect
-      .poll(async () => (await told('tie-up')).tiedUp)
+      .poll(async () => (await told('tie-up')).tiedUp, patience)
       .toMatchObject({
         handbrakes: { count: 1, cars: ['1408'] },
         checks: ['doors'],
@@ -299,7 +304,7 @@ describe.skipIf(browserIsMissing())('the phone’s screens', () => {
     await touch('Misread');
     await touch('Ask for it');
     const waiting = async () => (await told('question')).corrections?.[0];
-    await expect.poll(waiting).toMatchObject({ state: 'waiting', newReading: { cars: ['1410'] } });
+    await expect.poll(waiting, patience).toMatchObject({ state: 'waiting', newReading: { cars: ['1410'] } });
     const asked = await waiting();
     const admin = await ApiPerson.signIn(server.url);
     const supervisor = await ApiPerson.signIn(
