@@ -98,6 +98,39 @@ describe('the people page', () => {
     });
   });
 
+  /** The field of the person that is open; the form for a new one has such a field, too. */
+  const badgeField = async (): Promise<HTMLElement> => {
+    const form = (await screen.findByRole('button', { name: 'Save' })).closest('form');
+    if (form === null) throw new Error('The button stands in no form');
+    return within(form).getByLabelText(/^Badge/);
+  };
+
+  test.each([
+    ['gives a badge', null, 'c-12', 'c-12'],
+    ['takes a badge away where the field is empty', 'C-12', ' ', null],
+  ])('%s', async (_name, before, typed, sent) => {
+    const server = new FakeServer()
+      .on('GET', '/api/people', [aPerson({ badge: before })])
+      .on('PUT', '/api/people/:id', aPerson({ version: 2 }));
+    const { user } = open(server, '/people?person=p-1');
+    const field = await badgeField();
+    await user.clear(field);
+    await user.type(field, typed);
+    await user.click(screen.getByRole('button', { name: 'Save' }));
+    expect(await screen.findByText('Saved.')).toHaveRole('status');
+    expect(server.sent('PUT', '/api/people/:id')[0]?.body).toMatchObject({ badge: sent });
+  });
+
+  test('says who has a badge that is already given out', async () => {
+    const server = new FakeServer()
+      .on('GET', '/api/people', [aPerson()])
+      .refuse('PUT', '/api/people/:id', 'people.badge_taken', { badge: 'C-12' });
+    const { user } = open(server, '/people?person=p-1');
+    await user.type(await badgeField(), 'C-12');
+    await user.click(screen.getByRole('button', { name: 'Save' }));
+    expect(await screen.findByText('Somebody else has badge C-12.')).toHaveRole('alert');
+  });
+
   test('shows the newer state when somebody else was faster, and does not overwrite it', async () => {
     let version = 4;
     const server = new FakeServer()

@@ -60,7 +60,9 @@ function PinForm({ badge }: { badge: OwnBadge }) {
           {errorText(change.error)}
         </p>
       )}
-      {change.isSuccess && <p role="status">{badge.hasPin ? 'PIN is set.' : 'No PIN any more.'}</p>}
+      {change.isSuccess && (
+        <p role="status">{change.variables.pin === null ? 'No PIN any more.' : 'PIN is set.'}</p>
+      )}
       {badge.hasPassword && (
         <PasswordField
           id="pin-current"
