@@ -1,9 +1,9 @@
 import type { Priority } from '../lateness/finding';
 
 /**
- * Published targets for the alerts of one desk. Source: EEMUA 191 and ISA-18.2, second-hand: the numbers are those that
- * several open documents quote from them; the standards themselves were not read. The standard of 2016 is said to
- * have dropped the count per day and to warn against means, so the distribution is shown beside every mean.
+ * Published targets for the alerts of one desk. Source: EEMUA 191 and ISA-18.2, second-hand: as others quote them.
+ * ISA-18.2 of 2016 is said to have dropped the count per day and to warn against means, so the distribution is shown
+ * beside every mean.
  */
 export const publishedAlertTargets = {
   /** Mean of alerts per 10 minutes: what is acceptable, and the most that is manageable. */
