@@ -25,6 +25,7 @@ const pages: ReadonlyArray<[role: string, path: string, window: 'desk' | 'phone'
     ['dispatcher', '/board/OSQ', 'desk', /./],
     ['dispatcher', '/board/OSQ?view=table', 'desk', /./],
     ['dispatcher', '/alerts', 'desk', /./],
+    ['supervisor', '/alerts/quality', 'desk', 'Alert quality'],
     ['dispatcher', '/board/OSQ', 'phone', /./],
     ['conductor', '/my', 'phone', 'My turns'],
     ['analyst', '/history', 'desk', 'On-time departure'],

@@ -9,6 +9,8 @@ import { PageOnItsWay, RouteFault } from './route-fault';
 const deskShell = () => import('./desk-shell').then(({ DeskShell }) => ({ Component: DeskShell }));
 const boardPage = () => import('./routes/board-page').then(({ BoardPage }) => ({ Component: BoardPage }));
 const alertsPage = () => import('./routes/alerts-page').then(({ AlertsPage }) => ({ Component: AlertsPage }));
+const alertQualityPage = () =>
+  import('./routes/alert-quality-page').then(({ AlertQualityPage }) => ({ Component: AlertQualityPage }));
 const historyPage = () =>
   import('./routes/history-page').then(({ HistoryPage }) => ({ Component: HistoryPage }));
 const correctionsPage = () =>
@@ -47,7 +49,13 @@ const deskPages: RouteObject[] = [
     ],
   },
   { element: <Permitted permission="alerts.read" />, children: [{ path: '/alerts', lazy: alertsPage }] },
-  { element: <Permitted permission="history.read" />, children: [{ path: '/history', lazy: historyPage }] },
+  {
+    element: <Permitted permission="history.read" />,
+    children: [
+      { path: '/alerts/quality', lazy: alertQualityPage },
+      { path: '/history', lazy: historyPage },
+    ],
+  },
   {
     element: <Permitted permission="corrections.read" />,
     children: [

@@ -1,4 +1,4 @@
-import type { EntrySource, Health, Priority, Role, StepState, TurnState } from '@stubpost/shared';
+import type { AlertCause, EntrySource, Health, Priority, Role, StepState, TurnState } from '@stubpost/shared';
 
 /** Words on screen for the tokens of the interface. One word, one meaning, on every page. */
 export const TURN_STATE_WORDS: Record<TurnState, string> = {
@@ -45,6 +45,18 @@ export const PRIORITY_WORDS: Record<Priority, string> = {
   'act-now': 'Act now',
   'act-soon': 'Act soon',
   watch: 'Watch',
+};
+
+export const ALERT_CAUSE_WORDS: Record<AlertCause, string> = {
+  'late-departure': 'Late departure',
+  unsecured: 'Unsecured',
+  'no-required-record': 'No required record',
+  'running-test': 'Running test',
+  'blue-signal': 'Blue signal up',
+  'no-word': 'No word',
+  crew: 'Engineer not aboard',
+  feed: 'Feed silent',
+  sweep: 'Alerts not watched',
 };
 
 export const ROLE_WORDS: Record<Role, string> = {

@@ -41,6 +41,8 @@ export const queryKeys = {
     all: ['alerts'] as const,
     lists: ['alerts', 'list'] as const,
     list: (question: AlertQuestion) => ['alerts', 'list', question] as const,
+    quality: (question: { terminal: string; from: string; to: string }) =>
+      ['alerts', 'quality', question] as const,
   },
   corrections: {
     all: ['corrections'] as const,

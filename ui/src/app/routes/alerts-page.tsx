@@ -3,6 +3,7 @@ import { PageHeader } from '../../components/page-header';
 import { EmptyState, ErrorState, LoadingRows } from '../../components/page-states';
 import { AlertsView } from '../../features/alerts/components/alerts-view';
 import { useTerminalChoice } from '../../lib/terminal-choice';
+import { AlertPages } from './alert-pages';
 import { panelAddress } from './turn-address';
 
 /** Alerts of the chosen terminal. */
@@ -16,6 +17,7 @@ export function AlertsPage() {
   return (
     <>
       <PageHeader hidden title={`Alerts, ${terminal.name}`} />
+      <AlertPages />
       <AlertsView
         terminal={terminal}
         onOpen={(turnId) =>

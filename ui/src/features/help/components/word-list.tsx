@@ -36,6 +36,16 @@ const WORDS: readonly { word: string; means: string }[] = [
     means:
       'somebody has the alert; it waits until a time with a reason; its cause is gone; its cause is named',
   },
+  {
+    word: 'Burst, repeater, standing, untaken',
+    means:
+      'more than 10 alerts in 10 minutes, until fewer than 5; an alert that comes back soon after it cleared; not cleared yet; taken by nobody',
+  },
+  {
+    word: 'Precision',
+    means:
+      'the share of alerts that were right. Of late departures at least those that left late all the same, at most also those about which somebody did something',
+  },
   { word: 'First train out, tie-up', means: 'a turn without an arrival; a turn without a departure' },
   { word: 'Extra', means: 'a turn that is in no timetable, entered by hand' },
 ];
