@@ -10,7 +10,7 @@ export function InstalledLine() {
   return (
     <div className={styles.lines}>
       <Link className={styles.line} to="/my/outbox">
-        Not installed: how to put it on the home screen
+        Not installed on this phone
         <span className={styles.push}>
           <OnwardSign size={22} />
         </span>
