@@ -1,4 +1,6 @@
-import { type WireAlertQuality, alertQualitySchema } from '@stubpost/shared';
+import { type WireAlertQuality, alertQualitySchema, recordEntrySchema } from '@stubpost/shared';
+import type { Actor } from '../src/turns/recording-rights';
+import { TurnsService } from '../src/turns/turns.service';
 import { signInAs } from './support/sign-in';
 import {
   type Railroad,
@@ -96,11 +98,24 @@ describe('GET /api/alerts/quality', () => {
     expect(all.histogram.reduce((sum, periods) => sum + periods, 0)).toBe(all.periods);
   });
 
-  test('says which turns nobody could watch, and counts them for nothing', async () => {
-    await openTurn(await railroad.as('dispatcher'), { arriveIn: -7200, train: '1700' });
+  test('says which turns nobody could watch, and counts them and their alerts for nothing', async () => {
+    const { id } = await openTurn(await railroad.as('dispatcher'), { arriveIn: -7200, train: '1700' });
+    const { personId } = await railroad.as('conductor');
+    const actor: Actor = { id: personId, name: 'C. Later', roles: [{ role: 'conductor', terminal: 'HBR' }] };
+    await railroad.app.get(TurnsService).recordPastEntries([
+      {
+        turnId: id,
+        request: recordEntrySchema.parse(anEntryRequest('departure', -6000)),
+        actor,
+        now: startOfTest - 5_990_000,
+      },
+    ]);
+    const [unseen] = await alertsOf(railroad, 'all');
+    expect(unseen).toMatchObject({ cause: 'no-required-record', raisedAt: at(-5990) });
     expect(await quality()).toMatchObject({
       watchedTurns: 0,
       unwatchedTurns: 1,
+      unseenAlerts: 1,
       alerts: 0,
       load: { all: { periods: 0, median: null, shareInBurst: null }, peakFromTurns: null },
       warned: { counted: 0, share: null },

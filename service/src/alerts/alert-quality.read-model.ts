@@ -26,6 +26,8 @@ interface PastAlertRow extends DepartureColumns {
   raised_at: number;
   taken_at: number | null;
   cleared_at: number | null;
+  /** When its turn was entered; null where there is none. */
+  turn_known_at: number | null;
 }
 
 interface TurnRow extends DepartureColumns {
@@ -33,6 +35,12 @@ interface TurnRow extends DepartureColumns {
   span_to: number;
   created_at: number;
   first_alert_at: number | null;
+}
+
+/** Alerts of a range: those that somebody could see in time, and how many were worked out from a turn entered later. */
+export interface AlertsOfRange {
+  alerts: PastAlert[];
+  unseen: number;
 }
 
 /** Turns of a range: those that were known before they were over, and how many were entered afterwards. */
@@ -47,17 +55,18 @@ export class AlertQualityReadModel {
   constructor(private readonly reader: Reader) {}
 
   /** Alerts of a terminal that were raised in a range. */
-  async alertsRaised(terminalCode: string, range: InstantRange): Promise<PastAlert[]> {
+  async alertsRaised(terminalCode: string, range: InstantRange): Promise<AlertsOfRange> {
     const rows = await this.reader.query<PastAlertRow>(
       `SELECT a.cause, a.priority, a.subject_id, coalesce(t.outbound_train, t.inbound_train) AS train,
          a.raised_at, a.taken_at, a.cleared_at,
-         t.scheduled_departure_at, t.held_until, t.departure_at, t.annulled_at
+         t.created_at AS turn_known_at, t.scheduled_departure_at, t.held_until, t.departure_at, t.annulled_at
        FROM alert a LEFT JOIN turn t ON t.id = a.turn_id
        WHERE a.terminal_code = ? AND a.raised_at >= ? AND a.raised_at < ?
        ORDER BY a.raised_at, a.id`,
       [terminalCode, range.from, range.to],
     );
-    return rows.map(pastAlertOf);
+    const seen = rows.filter((row) => (instant(row.turn_known_at) ?? 0) <= Number(row.raised_at));
+    return { alerts: seen.map(pastAlertOf), unseen: rows.length - seen.length };
   }
 
   /** Turns of a terminal that touch a range, save annulled ones. */

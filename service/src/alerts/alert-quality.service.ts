@@ -39,13 +39,13 @@ export class AlertQualityService {
     const { zone } = await this.terminals.require(query.terminal);
     const { onTimeSeconds } = await this.terminals.thresholdsOf(query.terminal);
     const range = rangeOf(query, zone, now);
-    const [alerts, turns, standing] = await Promise.all([
+    const [raised, turns, standing] = await Promise.all([
       this.quality.alertsRaised(query.terminal, range),
       this.quality.turnsOf(query.terminal, range),
       this.quality.standing(query.terminal),
     ]);
     const measured = measureAlertQuality({
-      alerts,
+      alerts: raised.alerts,
       turns: turns.watched,
       range,
       thresholdSeconds: onTimeSeconds,
@@ -56,6 +56,7 @@ export class AlertQualityService {
       asOf: formatInstant(now),
       thresholdSeconds: onTimeSeconds,
       unwatchedTurns: turns.unwatched,
+      unseenAlerts: raised.unseen,
       standing: standingOf(standing, now),
       ...wireQualityOf(measured, range),
     };
@@ -94,7 +95,7 @@ function standingOf(alerts: readonly AlertRecord[], now: Instant): WireAlertQual
 
 type Measured = Omit<
   WireAlertQuality,
-  'terminal' | 'from' | 'to' | 'asOf' | 'thresholdSeconds' | 'unwatchedTurns' | 'standing'
+  'terminal' | 'from' | 'to' | 'asOf' | 'thresholdSeconds' | 'unwatchedTurns' | 'unseenAlerts' | 'standing'
 >;
 
 function wireQualityOf(quality: AlertQuality, range: InstantRange): Measured {

@@ -48,8 +48,10 @@ export const alertQualitySchema = z.object({
   thresholdSeconds: count,
   /** Turns of these days that were known before they were over, so that alerts could be raised on them. */
   watchedTurns: count,
-  /** Turns of these days that were entered afterwards: no alert was ever raised on them, and none is missing. */
+  /** Turns of these days that were entered when they were over: nobody could have acted on an alert. */
   unwatchedTurns: count,
+  /** Alerts that were worked out from entries of such turns, at times before the turn was known; they do not count. */
+  unseenAlerts: count,
   alerts: count,
   load: z.object({ all: loadSchema, peak: loadSchema, peakFromTurns: amount }),
   bursts: z.array(z.object({ fromAt: z.string(), toAt: z.string(), alerts: count, isOpen: z.boolean() })),

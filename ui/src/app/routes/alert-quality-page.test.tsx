@@ -39,6 +39,7 @@ const quality: WireAlertQuality = {
   thresholdSeconds: 59,
   watchedTurns: 480,
   unwatchedTurns: 0,
+  unseenAlerts: 0,
   alerts: 41,
   load: {
     all: load([300, 30, 4, 1], { shareInBurst: 0.02 }),
@@ -205,10 +206,10 @@ describe('the page of the quality of alerts', () => {
 
 describe('a past without alerts', () => {
   it('says that nobody was watching, and draws nothing', async () => {
-    open({ ...nothing, watchedTurns: 0, unwatchedTurns: 3120 });
+    open({ ...nothing, watchedTurns: 0, unwatchedTurns: 3120, unseenAlerts: 150 });
     expect(
       await screen.findByText(
-        'There are no alerts from Wed 4 Feb 2026 to Tue 3 Mar 2026. 3,120 turns of these days were entered only when over. No alert could be raised on them, so they count for nothing here: the past has no alerts of its own.',
+        'There are no alerts from Wed 4 Feb 2026 to Tue 3 Mar 2026. 3,120 turns of these days were entered only when over: nobody could have acted on an alert, so they count for nothing here. Left out with them: 150 alerts worked out from their entries afterwards.',
       ),
     ).toBeVisible();
     expect(screen.queryByRole('table')).not.toBeInTheDocument();

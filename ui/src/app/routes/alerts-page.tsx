@@ -5,6 +5,7 @@ import { AlertsView } from '../../features/alerts/components/alerts-view';
 import { useTerminalChoice } from '../../lib/terminal-choice';
 import { AlertPages } from './alert-pages';
 import { panelAddress } from './turn-address';
+import styles from './alert-pages.module.css';
 
 /** Alerts of the chosen terminal. */
 export function AlertsPage() {
@@ -17,7 +18,9 @@ export function AlertsPage() {
   return (
     <>
       <PageHeader hidden title={`Alerts, ${terminal.name}`} />
-      <AlertPages />
+      <div className={styles.bar}>
+        <AlertPages />
+      </div>
       <AlertsView
         terminal={terminal}
         onOpen={(turnId) =>

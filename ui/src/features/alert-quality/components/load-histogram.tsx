@@ -70,7 +70,11 @@ export function LoadHistogram({ load }: { load: WireAlertQuality['load'] }) {
   const step = plot.width / columns.length;
   const burstX = size.left + step * (publishedBurstRule.startsAbove + 1);
   return (
-    <svg className={styles.chart} viewBox={`0 0 ${size.width} ${size.height}`} aria-hidden="true">
+    <svg
+      className={`${styles.chart} ${styles.wide}`}
+      viewBox={`0 0 ${size.width} ${size.height}`}
+      aria-hidden="true"
+    >
       {ticks.map((tick) => (
         <g key={tick}>
           <line

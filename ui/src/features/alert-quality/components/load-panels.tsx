@@ -49,7 +49,9 @@ export function LoadPanel({ quality }: { quality: WireAlertQuality }) {
   return (
     <section className="sp-panel" aria-labelledby="distribution">
       <h2 id="distribution">How often {minutes} minutes brought how many alerts</h2>
-      <LoadHistogram load={quality.load} />
+      <div className={charts.scroll} tabIndex={0} role="group" aria-label="Picture of the distribution">
+        <LoadHistogram load={quality.load} />
+      </div>
       <p className={charts.key} aria-hidden="true">
         <span>all watched periods</span>
         <span className={charts.keyHollow}>at peak</span>

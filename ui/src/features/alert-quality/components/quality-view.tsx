@@ -31,7 +31,7 @@ function noAlertsWords(quality: WireAlertQuality): string {
 
 function Panels({ quality, zone }: { quality: WireAlertQuality; zone: string }) {
   return (
-    <div className={styles.stack}>
+    <>
       <div className={styles.grid}>
         <LoadHeadline quality={quality} />
         <LoadPanel quality={quality} />
@@ -47,7 +47,7 @@ function Panels({ quality, zone }: { quality: WireAlertQuality; zone: string }) 
         <RepeatersPanel quality={quality} />
         <BurstsPanel quality={quality} zone={zone} />
       </div>
-    </div>
+    </>
   );
 }
 
@@ -62,11 +62,14 @@ export function QualityView({ terminal, range }: { terminal: WireTerminal; range
   if (data === undefined)
     return <LoadingRows what="the quality of alerts" rows={8} rowHeight={60} onRetry={retry} />;
   const unwatched = unwatchedWords(data);
+  const isMeasured = data.alerts > 0 || data.watchedTurns > 0;
   return (
     <div className={isPlaceholderData ? styles.loading : undefined} aria-busy={isPlaceholderData}>
-      {data.alerts === 0 && <EmptyState words={noAlertsWords(data)} />}
-      {data.alerts > 0 && unwatched !== null && <p className="muted">{unwatched}</p>}
-      {(data.alerts > 0 || data.watchedTurns > 0) && <Panels quality={data} zone={terminal.zone} />}
+      <div className={styles.stack}>
+        {data.alerts === 0 && <EmptyState words={noAlertsWords(data)} />}
+        {unwatched !== null && isMeasured && <p className="muted">{unwatched}</p>}
+        {isMeasured && <Panels quality={data} zone={terminal.zone} />}
+      </div>
     </div>
   );
 }

@@ -17,7 +17,11 @@ const x = (share: number): number => size.left + (size.width - size.left - size.
 export function ShareBars({ bars }: { bars: readonly ShareBar[] }) {
   const foot = size.top + bars.length * size.row;
   return (
-    <svg className={styles.chart} viewBox={`0 0 ${size.width} ${foot + size.bottom}`} aria-hidden="true">
+    <svg
+      className={`${styles.chart} ${styles.narrow}`}
+      viewBox={`0 0 ${size.width} ${foot + size.bottom}`}
+      aria-hidden="true"
+    >
       {ticks.map((tick) => (
         <g key={tick}>
           <line className={styles.grid} x1={x(tick)} x2={x(tick)} y1={size.top} y2={foot} />

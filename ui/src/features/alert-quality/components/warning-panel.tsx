@@ -20,7 +20,11 @@ function WarningColumns({ histogram }: { histogram: readonly number[] }) {
   const step = (size.width - size.left - size.right) / labels.length;
   const foot = size.height - size.bottom;
   return (
-    <svg className={charts.chart} viewBox={`0 0 ${size.width} ${size.height}`} aria-hidden="true">
+    <svg
+      className={`${charts.chart} ${charts.narrow}`}
+      viewBox={`0 0 ${size.width} ${size.height}`}
+      aria-hidden="true"
+    >
       <line className={charts.grid} x1={size.left} x2={size.width - size.right} y1={foot} y2={foot} />
       {labels.map((label, index) => {
         const value = histogram[index] ?? 0;

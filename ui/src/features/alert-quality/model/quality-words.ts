@@ -36,8 +36,12 @@ export function plural(value: number, one: string, many = `${one}s`): string {
 }
 
 /** Why there may be less in the figures than days in the range; null when everything was watched. */
-export function unwatchedWords(quality: Pick<WireAlertQuality, 'unwatchedTurns'>): string | null {
-  const { unwatchedTurns } = quality;
-  if (unwatchedTurns === 0) return null;
-  return `${plural(unwatchedTurns, 'turn')} of these days ${unwatchedTurns === 1 ? 'was' : 'were'} entered only when over. No alert could be raised on them, so they count for nothing here: the past has no alerts of its own.`;
+export function unwatchedWords(
+  quality: Pick<WireAlertQuality, 'unwatchedTurns' | 'unseenAlerts'>,
+): string | null {
+  const { unwatchedTurns, unseenAlerts } = quality;
+  if (unwatchedTurns === 0 && unseenAlerts === 0) return null;
+  const turns = `${plural(unwatchedTurns, 'turn')} of these days ${unwatchedTurns === 1 ? 'was' : 'were'} entered only when over: nobody could have acted on an alert, so ${unwatchedTurns === 1 ? 'it counts' : 'they count'} for nothing here.`;
+  if (unseenAlerts === 0) return turns;
+  return `${turns} Left out with them: ${plural(unseenAlerts, 'alert')} worked out from their entries afterwards.`;
 }
