@@ -53,7 +53,19 @@ describe('GET /api/openapi.json', () => {
         '/api/session': {
           post: {
             security: [],
-            requestBody: { content: { 'application/json': { schema: { required: ['email', 'password'] } } } },
+            requestBody: {
+              content: {
+                'application/json': {
+                  schema: {
+                    anyOf: [
+                      { required: ['email', 'password'] },
+                      { required: ['badge', 'pin'] },
+                      { required: ['badge', 'password'] },
+                    ],
+                  },
+                },
+              },
+            },
           },
           get: { security: [{ session: [] }] },
         },

@@ -65,7 +65,7 @@ describe('signing in', () => {
     const answer = await tryWith(given, as).expect(401);
     expect(answer.body).toMatchObject({
       code: 'session.wrong_credentials',
-      message: 'address or password is wrong',
+      message: 'the two do not fit together',
     });
     expect(answer.headers).not.toHaveProperty('set-cookie');
   });
@@ -238,7 +238,7 @@ describe('failed tries', () => {
         .send({ email: `guess-from-${address}@example.org`, password: 'wrong guess' });
     for (const { app } of [trusting, booted]) {
       for (let n = 0; n < 50; n += 1) {
-        await app.get(SignInThrottle).admit({ email: `guess-${n}@example.org`, address: '203.0.113.7' });
+        await app.get(SignInThrottle).admit({ account: `guess-${n}@example.org`, address: '203.0.113.7' });
       }
     }
     await tryFrom('203.0.113.7', trusting).expect(429);
