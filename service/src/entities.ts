@@ -1,5 +1,8 @@
 import { AlertRow } from './alerts/alert.entity';
 import { AlertWatchRow } from './alerts/alert-watch.entity';
+import { TakenLinkRow } from './alerts/taken-link.entity';
+import { MessageTryRow } from './messages/message-try.entity';
+import { MessageRow } from './messages/message.entity';
 import { StepPlanRow } from './plans/step-plan.entity';
 import { DailyHeadRow } from './records/daily-head.entity';
 import { EntryRow } from './records/entry.entity';
@@ -52,6 +55,10 @@ export const ENTITIES: EntityClass[] = [
   DailyHeadRow,
   AlertRow,
   AlertWatchRow,
+  TakenLinkRow,
+  // messages
+  MessageRow,
+  MessageTryRow,
   // history
   HistoryImportRow,
   PastDepartureRow,

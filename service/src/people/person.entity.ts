@@ -29,6 +29,10 @@ export class PersonRow {
   @Column({ name: 'pin_hash', type: 'text', nullable: true })
   pinHash: string | null;
 
+  /** E.164, for text messages. */
+  @Column({ type: 'text', nullable: true })
+  phone: string | null;
+
   @Column({ type: 'boolean' })
   active: boolean;
 

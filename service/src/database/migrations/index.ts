@@ -9,6 +9,7 @@ import { CreateSets1764600013000 } from './1764600013000-create-sets';
 import { CreateAlerts1764600014000 } from './1764600014000-create-alerts';
 import { CreateHistory1764600030000 } from './1764600030000-create-history';
 import { CreateTimetables1764600040000 } from './1764600040000-create-timetables';
+import { CreateMessages1764810000000 } from './1764810000000-create-messages';
 import { AddBadges1764700000000 } from './1764700000000-add-badges';
 import { CreateDailyHeads1764600050000 } from './1764600050000-create-daily-heads';
 import { CountCorrections1764600055000 } from './1764600055000-count-corrections';
@@ -28,4 +29,5 @@ export const MIGRATIONS: (new () => MigrationInterface)[] = [
   AddBadges1764700000000,
   CreateDailyHeads1764600050000,
   CountCorrections1764600055000,
+  CreateMessages1764810000000,
 ];
