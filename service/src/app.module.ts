@@ -11,9 +11,11 @@ import { DatabaseModule } from './database/database.module';
 import { DemoModule } from './demo/demo.module';
 import { DocsModule } from './docs/docs.module';
 import { ENTITIES } from './entities';
+import { DutyModule } from './duty/duty.module';
 import { HealthModule } from './health/health.module';
 import { HistoryModule } from './history/history.module';
 import { LiveModule } from './live/live.module';
+import { MessagesModule } from './messages/messages.module';
 import { PeopleModule } from './people/people.module';
 import { PlansModule } from './plans/plans.module';
 import { SetsModule } from './sets/sets.module';
@@ -41,6 +43,8 @@ export class AppModule {
         TurnsModule,
         TimetablesModule,
         AlertsModule,
+        DutyModule,
+        MessagesModule,
         LiveModule,
         HistoryModule,
         HealthModule,

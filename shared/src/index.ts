@@ -369,6 +369,7 @@ export {
   ownSessionSchema,
   passwordTextSchema,
   personHeader,
+  phoneSchema,
   pinLongest,
   pinSchema,
   pinShortest,
@@ -455,3 +456,50 @@ export type { Departure, OnTimeFigures, OnTimeRule } from './history/on-time';
 export { quantile, quantileOfSorted } from './history/quantile';
 export { wilsonInterval } from './history/wilson';
 export type { ShareInterval } from './history/wilson';
+
+// duty: who is told of an alert, and in which words
+export { DUTIES, MESSAGE_CHANNELS, RUNGS, isQuiet, onDuty, shippedEscalation } from './duty/roster';
+export type {
+  Duty,
+  DutyPerson,
+  DutyRoster,
+  DutyShift,
+  EscalationStep,
+  MessageChannel,
+  QuietHours,
+  Rung,
+} from './duty/roster';
+export { whoIsTold } from './duty/who-is-told';
+export type { Told, ToldAlert } from './duty/who-is-told';
+export { alertMail, alertSms, alertSubject, outcomeMail, smsLength } from './duty/alert-message';
+export type { AlertMessageFacts, AlertOutcome, MailWords, TellableAlert } from './duty/alert-message';
+export { plainWords } from './duty/plain-words';
+export { silenceWords } from './duty/silence-message';
+
+// contract: duty roster and messages
+export {
+  dutyPersonSchema,
+  dutyRosterSchema,
+  dutyShiftSchema,
+  escalationStepSchema,
+  longestShiftHours,
+  quietHoursSchema,
+  updateDutyRosterSchema,
+} from './contract/duty';
+export type { UpdateDutyRosterRequest, WireDutyRoster, WireDutyShift } from './contract/duty';
+export {
+  MESSAGE_STATES,
+  SEND_OUTCOMES,
+  boxItemSchema,
+  messageBoxesSchema,
+  messageSchema,
+  takingSchema,
+} from './contract/messages';
+export type {
+  MessageState,
+  SendOutcome,
+  WireBoxItem,
+  WireMessage,
+  WireMessageBoxes,
+  WireTaking,
+} from './contract/messages';

@@ -15,6 +15,7 @@ import { ChangeLog } from '../database/change-log';
 import { type Transaction, UnitOfWork } from '../database/unit-of-work';
 import { TurnRepository } from '../turns/turn.repository';
 import type { AlertRecord } from './alert-record';
+import { AlertTeller } from './alert-teller';
 import { AlertRepository } from './alert.repository';
 
 /** Causes that nobody may put out of sight: a train that stands unsecured, or that lacks a record the law asks for. */
@@ -36,12 +37,16 @@ export class AlertDesk {
     private readonly turns: TurnRepository,
     private readonly changes: ChangeLog,
     private readonly access: Access,
+    private readonly teller: AlertTeller,
   ) {}
 
-  /** Takes an alert over, also from somebody else: the last one to say so has it. */
-  take(act: AlertAct): Promise<AlertRecord> {
+  /**
+   * Takes an alert over, also from somebody else: the last one to say so has it. What goes along is done in the same
+   * transaction, or not at all.
+   */
+  take(act: AlertAct, along?: (transaction: Transaction) => Promise<void>): Promise<AlertRecord> {
     const { person, now } = act;
-    return this.change(act, 'take', (alert) => ({
+    const changed = (alert: AlertRecord): AlertRecord => ({
       ...alert,
       takenAt: now,
       takenBy: person.name,
@@ -49,7 +54,11 @@ export class AlertDesk {
       setAsideUntil: null,
       setAsideReason: null,
       setAsideBy: null,
-    }));
+    });
+    return this.change(act, 'take', changed, async (transaction, alert) => {
+      await along?.(transaction);
+      await this.teller.tellOutcome(transaction, alert, 'taken');
+    });
   }
 
   setAside(act: AlertAct, request: SetAsideRequest): Promise<AlertRecord> {
@@ -87,6 +96,7 @@ export class AlertDesk {
     act: AlertAct,
     event: AlertEvent,
     changed: (alert: AlertRecord) => AlertRecord,
+    afterwards?: (transaction: Transaction, alert: AlertRecord) => Promise<void>,
   ): Promise<AlertRecord> {
     return this.unitOfWork.run(async (transaction) => {
       const alert = await this.alerts.findById(transaction, act.alertId);
@@ -98,6 +108,7 @@ export class AlertDesk {
         throw new Refusal({ code: standing.error.code, message, facts: { state: alert.state } });
       }
       const kept = await this.alerts.update(transaction, { ...changed(alert), state: standing.value.state });
+      await afterwards?.(transaction, kept);
       await this.tell(transaction, kept);
       return kept;
     });

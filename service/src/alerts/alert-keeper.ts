@@ -5,6 +5,7 @@ import { ChangeLog } from '../database/change-log';
 import type { Transaction } from '../database/unit-of-work';
 import { type AlertRecord, isStanding } from './alert-record';
 import { mostUrgentFirst } from './alert.read-model';
+import { AlertTeller } from './alert-teller';
 import { AlertRepository } from './alert.repository';
 import { closedGapWords, subjectWords } from './alert-words';
 import { LatenessRules } from './lateness-rules';
@@ -33,6 +34,7 @@ export class AlertKeeper {
     private readonly watches: WatchRepository,
     private readonly rules: LatenessRules,
     private readonly changes: ChangeLog,
+    private readonly teller: AlertTeller,
   ) {}
 
   async observe(
@@ -141,12 +143,14 @@ export class AlertKeeper {
       createdAt: now,
     };
     await this.alerts.insert(transaction, alert);
+    await this.teller.tell(transaction, alert, now);
     await this.tell(transaction, alert);
     return alert;
   }
 
   private async keep(transaction: Transaction, alert: AlertRecord): Promise<AlertRecord> {
     const kept = await this.alerts.update(transaction, alert);
+    if (kept.state === 'cleared') await this.teller.tellOutcome(transaction, kept, 'cleared');
     await this.tell(transaction, kept);
     return kept;
   }

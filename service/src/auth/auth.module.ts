@@ -3,6 +3,7 @@ import { APP_GUARD } from '@nestjs/core';
 import { JwtModule } from '@nestjs/jwt';
 import { PassportModule } from '@nestjs/passport';
 import { Config } from '../config/config';
+import { LinkTokens } from './link-tokens';
 import { LinksController } from './links.controller';
 import { OneTimeLinks } from './one-time-links.service';
 import { OwnPin } from './own-pin.service';
@@ -27,6 +28,7 @@ import { SignInThrottle } from './sign-in-throttle';
   providers: [
     { provide: SESSION_KEY, inject: [Config], useFactory: loadSessionKey },
     { provide: APP_GUARD, useClass: SessionGuard },
+    LinkTokens,
     OneTimeLinks,
     OwnPin,
     OwnSessionsReadModel,
@@ -40,6 +42,14 @@ import { SignInThrottle } from './sign-in-throttle';
     SignInService,
     SignInThrottle,
   ],
-  exports: [OneTimeLinks, Passwords, SessionCookie, SessionEndings, SessionsService, SignInService],
+  exports: [
+    LinkTokens,
+    OneTimeLinks,
+    Passwords,
+    SessionCookie,
+    SessionEndings,
+    SessionsService,
+    SignInService,
+  ],
 })
 export class AuthModule {}

@@ -23,6 +23,12 @@ const environmentSchema = z
     ADMIN_EMAIL: optional(z.email()),
     ADMIN_PASSWORD: optional(z.string().min(8).max(128)),
     SESSION_SECRET: optional(z.string().min(32, 'must have at least 32 characters')),
+    SMTP_URL: optional(z.url({ protocol: /^smtps?$/, message: 'not an smtp or smtps address' })),
+    MAIL_FROM: optional(z.email()),
+    SMS_ACCOUNT: optional(z.string()),
+    SMS_TOKEN: optional(z.string()),
+    SMS_FROM: optional(z.string()),
+    SMS_API_URL: optional(z.url({ protocol: /^https?$/, message: 'not an http or https address' })),
     LOG_LEVEL: withDefault(z.enum(['silent', 'fatal', 'error', 'warn', 'info', 'debug', 'trace']), 'info'),
   })
   .refine((env) => (env.TLS_CERT === undefined) === (env.TLS_KEY === undefined), {
@@ -32,11 +38,26 @@ const environmentSchema = z
   .refine((env) => (env.ADMIN_EMAIL === undefined) === (env.ADMIN_PASSWORD === undefined), {
     path: ['ADMIN_EMAIL'],
     message: 'ADMIN_EMAIL and ADMIN_PASSWORD go together',
-  });
+  })
+  .refine(
+    (env) =>
+      new Set([env.SMS_ACCOUNT, env.SMS_TOKEN, env.SMS_FROM].map((value) => value === undefined)).size === 1,
+    { path: ['SMS_ACCOUNT'], message: 'SMS_ACCOUNT, SMS_TOKEN and SMS_FROM go together' },
+  );
 
 /** Paths that follow from where the service is installed. */
 const serviceFolder = path.resolve(__dirname, '../..');
 const repositoryFolder = path.resolve(serviceFolder, '..');
+
+/** The account by which text messages leave. */
+export interface SmsAccount {
+  account: string;
+  token: string;
+  /** Number or name the messages come from. */
+  from: string;
+  /** Where the provider's interface is; null is the provider's own address. */
+  apiUrl: string | null;
+}
 
 /** Everything the environment decides, read once at start. Also the token by which it is injected. */
 export class Config {
@@ -54,6 +75,12 @@ export class Config {
   readonly demo: 'live' | 'off' | undefined;
   readonly firstAdministrator: { email: string; password: string } | null;
   readonly sessionSecret: string | null;
+  /** The mail server that takes our mail; null keeps it in the local box. */
+  readonly smtpUrl: string | null;
+  /** Address that mail comes from. */
+  readonly mailFrom: string;
+  /** Null keeps text messages in the local box. */
+  readonly sms: SmsAccount | null;
   readonly logLevel: string;
   /** Built user interface; served when it is there. */
   readonly uiFolder: string;
@@ -70,6 +97,9 @@ export class Config {
     this.demo = values.demo;
     this.firstAdministrator = values.firstAdministrator;
     this.sessionSecret = values.sessionSecret;
+    this.smtpUrl = values.smtpUrl;
+    this.mailFrom = values.mailFrom;
+    this.sms = values.sms;
     this.logLevel = values.logLevel;
     this.uiFolder = values.uiFolder;
     this.version = values.version;
@@ -103,10 +133,27 @@ export function readConfig(environment: NodeJS.ProcessEnv): Config {
         ? { email: env.ADMIN_EMAIL.toLowerCase(), password: env.ADMIN_PASSWORD }
         : null,
     sessionSecret: env.SESSION_SECRET ?? null,
+    smtpUrl: env.SMTP_URL ?? null,
+    mailFrom: env.MAIL_FROM ?? `stubpost@${mailHost(publicUrl)}`,
+    sms:
+      env.SMS_ACCOUNT && env.SMS_TOKEN && env.SMS_FROM
+        ? {
+            account: env.SMS_ACCOUNT,
+            token: env.SMS_TOKEN,
+            from: env.SMS_FROM,
+            apiUrl: env.SMS_API_URL ?? null,
+          }
+        : null,
     logLevel: env.LOG_LEVEL,
     uiFolder: path.join(repositoryFolder, 'ui', 'dist'),
     version: packageVersion(),
   });
+}
+
+/** A name with a dot in it, for addresses: bare host names and numbers are refused by mail servers. */
+function mailHost(publicUrl: string): string {
+  const { hostname } = new URL(publicUrl);
+  return /[a-z]/i.test(hostname) && hostname.includes('.') ? hostname : 'stubpost.invalid';
 }
 
 function hostInUrl(host: string): string {

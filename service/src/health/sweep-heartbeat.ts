@@ -21,9 +21,13 @@ export class SweepHeartbeat {
     return this.lastAt;
   }
 
+  /** Since when there was no sweep: the last one, or the start. */
+  get silentSince(): Instant {
+    return this.lastAt ?? this.startedAt;
+  }
+
   /** Well for a while after a start, then only while sweeps keep coming. */
   isWell(): boolean {
-    const silentSince = this.lastAt ?? this.startedAt;
-    return this.clock.now() - silentSince <= sweepSilenceSeconds * 1000;
+    return this.clock.now() - this.silentSince <= sweepSilenceSeconds * 1000;
   }
 }

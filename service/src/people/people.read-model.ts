@@ -21,6 +21,7 @@ interface PersonWithSessionsRow {
   active: number | boolean;
   has_password: number | boolean;
   badge: string | null;
+  phone: string | null;
   has_pin: number | boolean;
   sessions: number;
   last_seen_at: number | null;
@@ -95,7 +96,7 @@ export class PeopleReadModel {
     const now = this.clock.now();
     const rows = await this.reader.query<PersonWithSessionsRow>(
       `SELECT p.id, p.version, p.email, p.name, p.active, p.password_hash IS NOT NULL AS has_password,
-       p.badge, p.pin_hash IS NOT NULL AS has_pin,
+       p.badge, p.phone, p.pin_hash IS NOT NULL AS has_pin,
        (SELECT COUNT(*) FROM session s WHERE s.person_id = p.id AND s.ended_at IS NULL AND s.ends_at > ?
         AND s.last_seen_at > ?) AS sessions,
        (SELECT MAX(s.last_seen_at) FROM session s WHERE s.person_id = p.id) AS last_seen_at
@@ -119,6 +120,7 @@ function toWirePerson(row: PersonWithSessionsRow, roles: readonly RoleRow[]): Wi
     hasPassword: Boolean(row.has_password),
     badge: row.badge,
     hasPin: Boolean(row.has_pin),
+    phone: row.phone,
     roles: roles
       .filter((grant) => grant.person_id === row.id)
       .map((grant) => ({ role: grant.role, terminal: grant.terminal })),

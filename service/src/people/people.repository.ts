@@ -14,6 +14,7 @@ export interface NewPerson {
   name: string;
   passwordHash: string | null;
   badge: string | null;
+  phone: string | null;
   roles: readonly RoleGrant[];
 }
 
@@ -78,6 +79,7 @@ export class PeopleRepository {
       passwordHash: person.passwordHash,
       badge: person.badge,
       pinHash: null,
+      phone: person.phone,
       active: true,
       createdAt: this.clock.now(),
     });
@@ -94,6 +96,7 @@ export class PeopleRepository {
         badge: change.badge === undefined ? person.badge : change.badge,
         // A PIN without a badge opens nothing, and one that waits for the next badge would surprise.
         pinHash: change.badge === null ? null : person.pinHash,
+        phone: change.phone === undefined ? person.phone : change.phone,
         version: person.version + 1,
       },
     );

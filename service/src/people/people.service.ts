@@ -146,6 +146,7 @@ export class PeopleService {
       name: request.name,
       passwordHash,
       badge: request.badge ?? null,
+      phone: request.phone ?? null,
       roles: request.roles,
     });
     return id;

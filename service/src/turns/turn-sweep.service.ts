@@ -1,6 +1,7 @@
 import { setImmediate as letOthersRun } from 'node:timers/promises';
 import { Injectable } from '@nestjs/common';
 import type { AlertCause, AlertMemory, Instant } from '@stubpost/shared';
+import { AlertEscalation } from '../alerts/alert-escalation';
 import { AlertKeeper } from '../alerts/alert-keeper';
 import { LatenessRules } from '../alerts/lateness-rules';
 import { isNews, lookAt } from '../alerts/turn-look';
@@ -44,6 +45,7 @@ export class TurnSweep {
     private readonly turns: TurnRepository,
     private readonly changes: TurnChanges,
     private readonly keeper: AlertKeeper,
+    private readonly escalation: AlertEscalation,
     private readonly rules: LatenessRules,
     private readonly watches: WatchRepository,
     private readonly unitOfWork: UnitOfWork,
@@ -84,6 +86,7 @@ export class TurnSweep {
     await inChunks(due, writesAtOnce, failures, (ids) => this.write(ids, now));
     const left = await this.sweepable.findLeftBehind();
     await inChunks(left, writesAtOnce, failures, (ids) => this.release(ids, now));
+    await this.escalation.follow(now).catch((error: unknown) => failures.push(error));
     if (failures.length > 0)
       throw new AggregateError(failures, `${failures.length} turns could not be looked at`);
     return { looked: open.length, written: due.length + left.length };

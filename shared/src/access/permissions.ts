@@ -29,6 +29,9 @@ const policy = {
   'history.import': ['administrator', 'analyst'],
   'sets.read': ROLES,
   'sets.edit': ['dispatcher', 'inspector', 'administrator'],
+  'roster.read': ['dispatcher', 'supervisor', 'administrator'],
+  'roster.edit': ['supervisor'],
+  'messages.read': ['administrator'],
   'demo.leave': ['administrator'],
 } as const satisfies Record<string, readonly Role[]>;
 

@@ -79,6 +79,9 @@ const alertErrors = {
   'alert.until_far': 400,
   'alert.never_aside': 409,
   'alert.still_standing': 409,
+  'alert.link_unknown': 404,
+  'roster.changed': 412,
+  'roster.person_unfit': 400,
 } as const;
 
 const timetableErrors = {

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { ROLES } from '../access/roles';
 import { textSchema } from './primitives';
-import { badgeSchema, emailSchema, passwordTextSchema, roleGrantSchema } from './session';
+import { badgeSchema, emailSchema, passwordTextSchema, phoneSchema, roleGrantSchema } from './session';
 
 /** A person as an administrator sees them. */
 export const personSchema = z.object({
@@ -14,6 +14,8 @@ export const personSchema = z.object({
   /** Number to sign in with on shared phones; null where none was given out. */
   badge: z.string().nullable(),
   hasPin: z.boolean(),
+  /** Where text messages reach the person; null when no number is known. */
+  phone: z.string().nullable(),
   roles: z.array(z.object({ role: z.enum(ROLES), terminal: z.string() })),
   /** Sessions that stand now. */
   sessions: z.number().int(),
@@ -31,6 +33,7 @@ export const createPersonSchema = z.strictObject({
   name: textSchema(80),
   password: passwordTextSchema.optional(),
   badge: badgeSchema.optional(),
+  phone: phoneSchema.optional(),
   roles: z.array(roleGrantSchema).max(200),
 });
 export type CreatePersonRequest = z.infer<typeof createPersonSchema>;
@@ -46,6 +49,7 @@ export const updatePersonSchema = z.strictObject({
   active: z.boolean().optional(),
   /** Null takes the badge away, and the PIN with it. */
   badge: badgeSchema.nullable().optional(),
+  phone: phoneSchema.nullable().optional(),
   roles: z.array(roleGrantSchema).max(200).optional(),
 });
 export type UpdatePersonRequest = z.infer<typeof updatePersonSchema>;

@@ -1,5 +1,6 @@
 import { accountRoutes } from './account-routes';
 import { alertQualityRoutes } from './alert-quality-routes';
+import { dutyRoutes } from './duty-routes';
 import { historyRoutes } from './history-routes';
 import { recordRoutes } from './record-routes';
 import type { RouteSpec } from './route';
@@ -17,4 +18,5 @@ export const ROUTES: readonly RouteSpec[] = [
   ...historyRoutes,
   ...timetableRoutes,
   ...recordRoutes,
+  ...dutyRoutes,
 ];

@@ -29,6 +29,16 @@ export const badgeSchema = z
   .transform((text) => text.toUpperCase())
   .pipe(z.string().regex(/^[A-Z0-9][A-Z0-9-]{1,11}$/));
 
+/**
+ * Number of a telephone for text messages, with its country code; blanks, dashes and brackets are dropped (E.164).
+ * Example: `+1 (555) 010-4471` is read as `+15550104471`.
+ */
+export const phoneSchema = z
+  .string()
+  .max(40)
+  .transform((text) => text.replace(/[\s().-]/g, ''))
+  .pipe(z.string().regex(/^\+[1-9]\d{6,14}$/));
+
 /** Shortest and longest PIN, in digits. Our choice. */
 export const pinShortest = 4;
 export const pinLongest = 8;

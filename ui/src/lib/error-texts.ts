@@ -98,6 +98,11 @@ const TEXTS: Record<ErrorCode | TransportCode, (facts: Facts) => string> = {
   'alert.until_far': () => 'That is too long to set an alert aside.',
   'alert.never_aside': () => 'This alert cannot be set aside: it stays until somebody has acted.',
   'alert.still_standing': () => 'This alert still stands. It can be closed once it has cleared.',
+  'alert.link_unknown': () =>
+    'This link was used, has run out, or its alert is closed. Sign in to look at the alerts.',
+  'roster.changed': () => 'Somebody changed this roster meanwhile. The new state is shown; change it again.',
+  'roster.person_unfit': () =>
+    'Only dispatchers and supervisors of the terminal stand on its roster. Look at the names.',
   'alert.until_past': () => 'The time to set aside until has passed.',
   'timetable.unknown': () => 'This timetable is not there.',
   'timetable.too_large': (facts) =>
