@@ -20,6 +20,7 @@ function aPerson(change: Partial<WirePerson> = {}): WirePerson {
     hasPassword: true,
     badge: null,
     hasPin: false,
+    phone: null,
     roles: [{ role: 'conductor', terminal: 'HBR' }],
     sessions: 2,
     lastSeenAt: null,

@@ -11,6 +11,7 @@ import { FieldSummary, type FieldProblem } from '../../../components/field-summa
 import { errorText } from '../../../lib/error-texts';
 import { useAddPerson } from '../api/people';
 import { BADGE_HINT } from '../model/badge-words';
+import { PHONE_HINT, PHONE_PROBLEM } from '../model/phone-words';
 import { tidyGrants } from '../model/role-words';
 import { LinkOnce } from './link-once';
 import { RolesEditor } from './roles-editor';
@@ -19,15 +20,20 @@ interface Draft {
   name: string;
   email: string;
   badge: string;
+  phone: string;
   roles: RoleGrant[];
 }
 
-const EMPTY: Draft = { name: '', email: '', badge: '', roles: [] };
+const EMPTY: Draft = { name: '', email: '', badge: '', phone: '', roles: [] };
 
-/** Without a badge the field is left out. */
-function requestOf({ badge, ...draft }: Draft): CreatePersonRequest {
-  const request = { ...draft, roles: tidyGrants(draft.roles) };
-  return badge.trim() === '' ? request : { ...request, badge };
+/** Badge and telephone are left out where their fields are empty. */
+function requestOf({ badge, phone, ...draft }: Draft): CreatePersonRequest {
+  return {
+    ...draft,
+    roles: tidyGrants(draft.roles),
+    ...(badge.trim() === '' ? {} : { badge }),
+    ...(phone.trim() === '' ? {} : { phone }),
+  };
 }
 
 function problemsOf(draft: Draft): FieldProblem[] {
@@ -39,6 +45,7 @@ function problemsOf(draft: Draft): FieldProblem[] {
     ...(wrong.has('badge')
       ? [{ fieldId: 'add-badge', words: 'Badge: 2 to 12 letters, digits or dashes.' }]
       : []),
+    ...(wrong.has('phone') ? [{ fieldId: 'add-phone', words: PHONE_PROBLEM }] : []),
     ...(draft.roles.length === 0
       ? [{ fieldId: 'add-roles', words: 'No role: the person could sign in and see nothing.' }]
       : []),
@@ -99,6 +106,15 @@ export function AddPerson({ terminals, zone }: { terminals: readonly WireTermina
           autoComplete="off"
           value={draft.badge}
           onValueChange={(badge) => setDraft({ ...draft, badge })}
+        />
+      </FormGroup>
+      <FormGroup label="Telephone" labelFor="add-phone" helperText={PHONE_HINT}>
+        <InputGroup
+          id="add-phone"
+          type="tel"
+          autoComplete="off"
+          value={draft.phone}
+          onValueChange={(phone) => setDraft({ ...draft, phone })}
         />
       </FormGroup>
       <div id="add-roles" tabIndex={-1}>

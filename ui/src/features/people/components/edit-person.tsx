@@ -1,5 +1,5 @@
 import { Button, Checkbox, FormGroup, InputGroup } from '@blueprintjs/core';
-import type { WirePerson, WireTerminal } from '@stubpost/shared';
+import { phoneSchema, type WirePerson, type WireTerminal } from '@stubpost/shared';
 import { useQueryClient } from '@tanstack/react-query';
 import { useState, type FormEvent } from 'react';
 import { isRefusal } from '../../../lib/api-client';
@@ -7,6 +7,7 @@ import { errorText } from '../../../lib/error-texts';
 import { peopleQuery, useChangePerson } from '../api/people';
 import { tidyGrants } from '../model/role-words';
 import { BADGE_HINT } from '../model/badge-words';
+import { PHONE_HINT, PHONE_PROBLEM } from '../model/phone-words';
 import { RolesEditor } from './roles-editor';
 
 /**
@@ -22,6 +23,7 @@ export function EditPerson({
 }) {
   const client = useQueryClient();
   const [draft, setDraft] = useState(person);
+  const [isPhoneWrong, setPhoneWrong] = useState(false);
   const change = useChangePerson(person.id);
   const startFromNewest = (): void => {
     const newest = client.getQueryData(peopleQuery.queryKey)?.find(({ id }) => id === person.id);
@@ -30,9 +32,13 @@ export function EditPerson({
   const submit = (event: FormEvent): void => {
     event.preventDefault();
     const { version, name, active } = draft;
+    const typedPhone = draft.phone?.trim() ?? '';
     const badge = draft.badge === null || draft.badge.trim() === '' ? null : draft.badge;
+    const phone = typedPhone === '' ? null : typedPhone;
+    setPhoneWrong(phone !== null && !phoneSchema.safeParse(phone).success);
+    if (phone !== null && !phoneSchema.safeParse(phone).success) return;
     change.mutate(
-      { version, name, badge, roles: tidyGrants(draft.roles), active },
+      { version, name, badge, phone, roles: tidyGrants(draft.roles), active },
       {
         onSuccess: setDraft,
         onError: (problem) => isRefusal(problem, 'people.changed') && startFromNewest(),
@@ -70,6 +76,21 @@ export function EditPerson({
           autoComplete="off"
           value={draft.badge ?? ''}
           onValueChange={(badge) => setDraft({ ...draft, badge })}
+        />
+      </FormGroup>
+      <FormGroup
+        label="Telephone"
+        labelFor="edit-phone"
+        helperText={isPhoneWrong ? PHONE_PROBLEM : PHONE_HINT}
+        {...(isPhoneWrong ? { intent: 'danger' as const } : {})}
+      >
+        <InputGroup
+          id="edit-phone"
+          type="tel"
+          autoComplete="off"
+          aria-invalid={isPhoneWrong}
+          value={draft.phone ?? ''}
+          onValueChange={(phone) => setDraft({ ...draft, phone })}
         />
       </FormGroup>
       <RolesEditor

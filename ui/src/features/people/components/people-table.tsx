@@ -47,7 +47,7 @@ export function PeopleTable({
           <thead>
             <tr>
               <th scope="col">Name</th>
-              <th scope="col">E-mail</th>
+              <th scope="col">E-mail, telephone</th>
               <th scope="col">Badge</th>
               <th scope="col">Roles</th>
               <th scope="col">Sign-in</th>
@@ -65,7 +65,10 @@ export function PeopleTable({
                     {person.name}
                   </Link>
                 </th>
-                <td>{person.email}</td>
+                <td>
+                  {person.email}
+                  {person.phone !== null && <div className="muted nowrap">{person.phone}</div>}
+                </td>
                 <td className="nowrap">{badgeWords(person)}</td>
                 <td>{rolesInWords(person.roles)}</td>
                 <td className="nowrap">{standing(person)}</td>

@@ -40,6 +40,7 @@ describe('finding people', () => {
     hasPassword: true,
     badge: null,
     hasPin: false,
+    phone: null,
     roles: [{ role, terminal: 'HBR' }],
     sessions: 0,
     lastSeenAt: null,
