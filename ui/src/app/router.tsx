@@ -23,6 +23,8 @@ const setupPage = () => import('./routes/setup-page').then(({ SetupPage }) => ({
 const myPage = () => import('./routes/my-page').then(({ MyPage }) => ({ Component: MyPage }));
 const myTurnPage = () =>
   import('./routes/my-turn-page').then(({ MyTurnPage }) => ({ Component: MyTurnPage }));
+const turnAtHandPage = () =>
+  import('./routes/turn-at-hand-page').then(({ TurnAtHandPage }) => ({ Component: TurnAtHandPage }));
 const myTieUpPage = () =>
   import('./routes/my-tie-up-page').then(({ MyTieUpPage }) => ({ Component: MyTieUpPage }));
 const myOutboxPage = () =>
@@ -80,6 +82,7 @@ const phonePages: RouteObject[] = [
     element: <Permitted permission="entries.record" />,
     children: [
       { path: '/my', lazy: myPage },
+      { path: '/my/turn', lazy: turnAtHandPage },
       { path: '/my/turn/:turnId', lazy: myTurnPage },
       { path: '/my/outbox', lazy: myOutboxPage },
       { path: '/my/tie-up', lazy: myTieUpPage },
