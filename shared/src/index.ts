@@ -184,11 +184,12 @@ export type { LatenessSettings } from './lateness/settings';
 
 // contract: quality of alerts
 export {
+  AFTERWARDS,
   alertQualityQuerySchema,
   alertQualitySchema,
   longestAlertQualityDays,
 } from './contract/alert-quality';
-export type { AlertQualityQuery, WireAlertQuality } from './contract/alert-quality';
+export type { Afterwards, AlertQualityQuery, WireAlertQuality } from './contract/alert-quality';
 
 // contract: alerts
 export {
@@ -206,7 +207,8 @@ export { departureRowSchema, historyImportSchema, onTimeQuerySchema, onTimeSchem
 export type { DepartureRow, OnTimeAnswer, OnTimeQuery, WireHistoryImport } from './contract/history';
 
 // contract: live
-export { LIVE_EVENTS, beatSeconds, liveQuerySchema, notLiveAfterSeconds } from './contract/live';
+export { LIVE_EVENTS, liveQuerySchema } from './contract/live';
+export { beatSeconds, notLiveAfterSeconds } from './contract/live-times';
 export type { LiveEvent, LiveQuery } from './contract/live';
 
 // contract: plans
@@ -268,7 +270,8 @@ export {
 } from './contract/turn-from-wire';
 
 // contract: entries
-export { actTimeOf, readingSchema, recordEntrySchema, wireEntrySchema } from './contract/entries';
+export { actTimeOf } from './contract/act-time';
+export { readingSchema, recordEntrySchema, wireEntrySchema } from './contract/entries';
 export type { RecordEntryRequest, WireEntry, WireReading } from './contract/entries';
 
 // contract: corrections
@@ -325,13 +328,15 @@ export type { ControlsQuestion, WithdrawalReach } from './access/recording';
 
 export { judgePassword } from './access/password';
 export type { PasswordVerdict } from './access/password';
-export { judgePin } from './access/pin';
+export { judgePin, pinLongest, pinPattern, pinShortest } from './access/pin';
 export type { PinVerdict } from './access/pin';
 export { passwordAdvised, passwordLongest, passwordShortest } from './access/password-lengths';
 
 // contract: errors
-export { ERROR_STATUSES, errorBodySchema, isErrorCode } from './contract/errors';
-export type { ErrorBody, ErrorCode } from './contract/errors';
+export { errorBodySchema } from './contract/error-body';
+export type { ErrorBody } from './contract/error-body';
+export { ERROR_STATUSES, isErrorCode } from './contract/errors';
+export type { ErrorCode } from './contract/errors';
 
 // contract: health and demo
 export { demoSchema, demoSessionSchema, healthSchema, sweepSilenceSeconds } from './contract/health';
@@ -368,11 +373,7 @@ export {
   ownBadgeSchema,
   ownSessionSchema,
   passwordTextSchema,
-  personHeader,
   phoneSchema,
-  pinLongest,
-  pinSchema,
-  pinShortest,
   roleGrantSchema,
   sessionSchema,
   setupSchema,
@@ -394,11 +395,13 @@ export type {
   WireLink,
 } from './contract/session';
 
+export { personHeader } from './contract/person-header';
+
 // contract: terminals
+export { shippedThresholds } from './contract/shipped-thresholds';
 export {
   createTerminalSchema,
   replaceTracksSchema,
-  shippedThresholds,
   stoppingMarkerSchema,
   terminalSchema,
   terminalSettingsSchema,
@@ -433,7 +436,7 @@ export { ROUTES } from './contract/routes';
 export type { RouteMethod, RouteSpec, TerminalPlace } from './contract/route';
 
 // history
-export { comesBackSeconds, fleetingSeconds, isStale } from './history/alert-attention';
+export { comesBackSeconds, fleetingSeconds, isStale, measureUntaken } from './history/alert-attention';
 export type { RepeaterFigures, UntakenFigures } from './history/alert-attention';
 export { PRECISION_VERDICTS, measurePrecision, precisionVerdict } from './history/alert-precision';
 export type { CountedShare, PrecisionFigures, PrecisionVerdict } from './history/alert-precision';

@@ -1,3 +1,10 @@
+/** Shortest and longest PIN, in digits. Our choice. */
+export const pinShortest = 4;
+export const pinLongest = 8;
+
+/** A PIN as it is typed: digits only, neither too few nor too many. */
+export const pinPattern = new RegExp(`^\\d{${pinShortest},${pinLongest}}$`);
+
 /** Verdict about a PIN; the other words are codes of the wire contract. */
 export type PinVerdict = 'good' | 'pin.too_simple';
 

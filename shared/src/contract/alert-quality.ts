@@ -3,11 +3,19 @@ import { PRECISION_VERDICTS } from '../history/alert-precision';
 import { ALERT_CAUSES, PRIORITIES } from '../lateness/finding';
 import { dateSchema, terminalCodeSchema } from './primitives';
 
+/**
+ * What to do with turns that were entered when they were over, such as a past that was loaded: nobody could have acted
+ * on their alerts, which were looked for only when an entry came in.
+ */
+export const AFTERWARDS = ['left-out', 'counted'] as const;
+export type Afterwards = (typeof AFTERWARDS)[number];
+
 /** Quality of the alerts of one desk over calendar days at the terminal, both included. */
 export const alertQualityQuerySchema = z.strictObject({
   terminal: terminalCodeSchema,
   from: dateSchema,
   to: dateSchema,
+  afterwards: z.enum(AFTERWARDS).default('left-out'),
 });
 export type AlertQualityQuery = z.infer<typeof alertQualityQuerySchema>;
 
@@ -42,15 +50,16 @@ export const alertQualitySchema = z.object({
   terminal: z.string(),
   from: z.string(),
   to: z.string(),
+  afterwards: z.enum(AFTERWARDS),
   /** Up to when the figures go. */
   asOf: z.string(),
   /** Seconds past the scheduled departure that are still on time here. */
   thresholdSeconds: count,
-  /** Turns of these days that were known before they were over, so that alerts could be raised on them. */
+  /** Turns that the figures are about. */
   watchedTurns: count,
-  /** Turns of these days that were entered when they were over: nobody could have acted on an alert. */
+  /** Turns of these days that were entered when they were over, in the figures or not. */
   unwatchedTurns: count,
-  /** Alerts that were worked out from entries of such turns, at times before the turn was known; they do not count. */
+  /** Alerts that were worked out from entries of such turns, at times before the turn was known; in the figures or not. */
   unseenAlerts: count,
   alerts: count,
   load: z.object({ all: loadSchema, peak: loadSchema, peakFromTurns: amount }),
@@ -87,6 +96,7 @@ export const alertQualitySchema = z.object({
       }),
     ),
   }),
+  /** Only of alerts that somebody could take. */
   untaken: z.object({
     ...countedShape,
     byPriority: z.array(z.object({ priority: z.enum(PRIORITIES), ...countedShape })),

@@ -1,5 +1,3 @@
-import { z } from 'zod';
-
 /**
  * Every code an answer can carry when it says no, with its HTTP status: one list per area. The texts for people
  * live in the browser's catalogue, whose type is made from these lists.
@@ -129,12 +127,3 @@ export type ErrorCode = keyof typeof ERROR_STATUSES;
 export function isErrorCode(text: string): text is ErrorCode {
   return Object.hasOwn(ERROR_STATUSES, text);
 }
-
-/** Body of every answer that says no. `facts` are the values a text for people needs; `requestId` finds it in the log. */
-export const errorBodySchema = z.object({
-  code: z.string(),
-  message: z.string(),
-  facts: z.record(z.string(), z.unknown()),
-  requestId: z.string(),
-});
-export type ErrorBody = z.infer<typeof errorBodySchema>;

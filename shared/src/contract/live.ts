@@ -5,11 +5,6 @@ import { terminalCodeSchema } from './primitives';
 export const LIVE_EVENTS = ['turn', 'alert', 'beat', 'reload'] as const;
 export type LiveEvent = (typeof LIVE_EVENTS)[number];
 
-/** Seconds between two `beat` events, so that a reader can tell a quiet board from a lost stream. Our choice. */
-export const beatSeconds = 5;
-/** Without any event for this long the board says that it is not live. Our choice: twice the beat. */
-export const notLiveAfterSeconds = 10;
-
 /** Which terminal to listen to, and the last event that was seen when the header cannot be sent. */
 export const liveQuerySchema = z.strictObject({
   terminal: terminalCodeSchema,

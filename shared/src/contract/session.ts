@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { pinPattern } from '../access/pin';
 import { ALL_TERMINALS, ROLES } from '../access/roles';
 import { terminalCodeSchema, textSchema } from './primitives';
 
@@ -39,12 +40,8 @@ export const phoneSchema = z
   .transform((text) => text.replace(/[\s().-]/g, ''))
   .pipe(z.string().regex(/^\+[1-9]\d{6,14}$/));
 
-/** Shortest and longest PIN, in digits. Our choice. */
-export const pinShortest = 4;
-export const pinLongest = 8;
-
 /** A PIN as it is typed: digits only. Whether it is too simple is judged by `judgePin`. */
-export const pinSchema = z.string().regex(new RegExp(`^\\d{${pinShortest},${pinLongest}}$`));
+const pinSchema = z.string().regex(pinPattern);
 
 /** Something typed where a PIN belongs; a wrong one is answered as any other wrong pair. */
 const typedPinSchema = z.string().min(1).max(40);
@@ -63,12 +60,6 @@ export const signInSchema = z.union([
   z.strictObject({ badge: typedBadgeSchema, password: passwordTextSchema }),
 ]);
 export type SignInRequest = z.infer<typeof signInSchema>;
-
-/**
- * Header by which a request says whose it is, as a person's id. With somebody else signed in it is refused (401
- * `session.other_person`): an entry kept on a shared phone must never be recorded as the act of the next person.
- */
-export const personHeader = 'stubpost-person';
 
 /** Who is signed in. */
 export const signedInPersonSchema = z.object({

@@ -72,20 +72,6 @@ export const terminalThresholdsSchema = z.strictObject({
 });
 export type TerminalThresholds = z.infer<typeof terminalThresholdsSchema>;
 
-/**
- * Values a terminal has until its supervisor changes them. The running test's 20 minutes and the 59 seconds are
- * shipped values that every railroad sets for itself; the rest is our choice.
- */
-export const shippedThresholds: TerminalThresholds = {
-  onTimeSeconds: 59,
-  onTimeInclusive: true,
-  runningTestMinutes: 20,
-  noWordMinutes: 3,
-  raiseHoldSeconds: 30,
-  clearHoldSeconds: 10,
-  clearSlackSeconds: 60,
-};
-
 /** Settings of a terminal as the route gives them; version 0 stands for the shipped values. */
 export const terminalSettingsSchema = z.object({
   terminal: z.string(),

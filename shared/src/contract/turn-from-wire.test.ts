@@ -13,7 +13,7 @@ import type { Entry } from '../turn/entry';
 import { turnFrom } from '../turn/evolve';
 import { stepStateOf } from '../turn/life';
 import { holdTimesOf, latenessSettingsOf } from './lateness-settings';
-import { shippedThresholds } from './terminals';
+import { shippedThresholds } from './shipped-thresholds';
 import { assessedTurnOfWire, forecastInputOfWire, forecastOfWire, stepStatesOfWire } from './turn-from-wire';
 import { turnSchema } from './turns';
 

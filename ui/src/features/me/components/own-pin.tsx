@@ -1,5 +1,5 @@
 import { Button, FormGroup, InputGroup } from '@blueprintjs/core';
-import { judgePin, pinLongest, pinSchema, pinShortest, type OwnBadge } from '@stubpost/shared';
+import { judgePin, pinLongest, pinPattern, pinShortest, type OwnBadge } from '@stubpost/shared';
 import { useQuery } from '@tanstack/react-query';
 import { useState, type FormEvent } from 'react';
 import { PasswordField } from '../../../components/password-field';
@@ -9,7 +9,7 @@ import { ownBadgeQuery, useChangePin } from '../api/own-sign-in';
 const digitsOnly = (text: string): string => text.replace(/\D/g, '').slice(0, pinLongest);
 
 function pinProblem(pin: string): string | null {
-  if (!pinSchema.safeParse(pin).success) return `A PIN has ${pinShortest} to ${pinLongest} digits.`;
+  if (!pinPattern.test(pin)) return `A PIN has ${pinShortest} to ${pinLongest} digits.`;
   return judgePin(pin) === 'good' ? null : 'One digit repeated, or a run such as 1234, is tried first.';
 }
 
