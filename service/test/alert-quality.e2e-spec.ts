@@ -120,6 +120,11 @@ describe('GET /api/alerts/quality', () => {
       load: { all: { periods: 0, median: null, shareInBurst: null }, peakFromTurns: null },
       warned: { counted: 0, share: null },
     });
+    const all = await quality({ afterwards: 'counted' });
+    expect(all).toMatchObject({ watchedTurns: 1, unwatchedTurns: 1, unseenAlerts: 1, alerts: 1 });
+    expect(all.load.all).toMatchObject({ alerts: 1, most: 1 });
+    expect(all.load.all.periods).toBeGreaterThan(1);
+    expect(all.untaken.counted).toBe(0);
   });
 
   test('keeps to the days it was asked for, on the calendar of the terminal', async () => {

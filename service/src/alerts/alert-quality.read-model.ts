@@ -37,16 +37,16 @@ interface TurnRow extends DepartureColumns {
   first_alert_at: number | null;
 }
 
-/** Alerts of a range: those that somebody could see in time, and how many were worked out from a turn entered later. */
+/** Alerts of a range: those that somebody could see, and those worked out from a turn that was entered later. */
 export interface AlertsOfRange {
-  alerts: PastAlert[];
-  unseen: number;
+  seen: PastAlert[];
+  unseen: PastAlert[];
 }
 
-/** Turns of a range: those that were known before they were over, and how many were entered afterwards. */
+/** Turns of a range: those that were known before they were over, and those that were entered afterwards. */
 export interface TurnsOfRange {
   watched: WatchedTurnSpan[];
-  unwatched: number;
+  unwatched: WatchedTurnSpan[];
 }
 
 /** Alerts of the past, and the turns on which they were raised or might have been. */
@@ -65,8 +65,11 @@ export class AlertQualityReadModel {
        ORDER BY a.raised_at, a.id`,
       [terminalCode, range.from, range.to],
     );
-    const seen = rows.filter((row) => (instant(row.turn_known_at) ?? 0) <= Number(row.raised_at));
-    return { alerts: seen.map(pastAlertOf), unseen: rows.length - seen.length };
+    const isSeen = (row: PastAlertRow): boolean => (instant(row.turn_known_at) ?? 0) <= Number(row.raised_at);
+    return {
+      seen: rows.filter(isSeen).map(pastAlertOf),
+      unseen: rows.filter((row) => !isSeen(row)).map(pastAlertOf),
+    };
   }
 
   /** Turns of a terminal that touch a range, save annulled ones. */
@@ -80,8 +83,11 @@ export class AlertQualityReadModel {
          AND t.annulled_at IS NULL`,
       [terminalCode, range.from, range.to],
     );
-    const known = rows.filter((row) => Number(row.created_at) < Number(row.span_to));
-    return { watched: known.map(watchedTurnOf), unwatched: rows.length - known.length };
+    const isWatched = (row: TurnRow): boolean => Number(row.created_at) < Number(row.span_to);
+    return {
+      watched: rows.filter(isWatched).map(watchedTurnOf),
+      unwatched: rows.filter((row) => !isWatched(row)).map(watchedTurnOf),
+    };
   }
 
   /** What stands at a terminal now, the longest standing first. */
@@ -121,10 +127,11 @@ function pastAlertOf(row: PastAlertRow): PastAlert {
   };
 }
 
-/** A turn is watched from when it was known: one that was opened while it stood there only from then on. */
+/** A turn that was opened while it stood there is watched only from then on; one entered later counts as a whole. */
 function watchedTurnOf(row: TurnRow): WatchedTurnSpan {
+  const [from, to, knownAt] = [Number(row.span_from), Number(row.span_to), Number(row.created_at)];
   return {
-    span: { from: Math.max(Number(row.span_from), Number(row.created_at)), to: Number(row.span_to) },
+    span: { from: knownAt < to ? Math.max(from, knownAt) : from, to },
     departure: departureOf(row),
     firstAlertAt: instant(row.first_alert_at),
   };

@@ -13,6 +13,7 @@ import {
   loadPeriodSeconds,
   longestAlertQualityDays,
   measureAlertQuality,
+  measureUntaken,
   serviceInstant,
 } from '@stubpost/shared';
 import { Clock } from '../common/clock';
@@ -44,9 +45,10 @@ export class AlertQualityService {
       this.quality.turnsOf(query.terminal, range),
       this.quality.standing(query.terminal),
     ]);
+    const isAllCounted = query.afterwards === 'counted';
     const measured = measureAlertQuality({
-      alerts: raised.alerts,
-      turns: turns.watched,
+      alerts: isAllCounted ? [...raised.seen, ...raised.unseen] : raised.seen,
+      turns: isAllCounted ? [...turns.watched, ...turns.unwatched] : turns.watched,
       range,
       thresholdSeconds: onTimeSeconds,
       now,
@@ -55,10 +57,11 @@ export class AlertQualityService {
       ...query,
       asOf: formatInstant(now),
       thresholdSeconds: onTimeSeconds,
-      unwatchedTurns: turns.unwatched,
-      unseenAlerts: raised.unseen,
+      unwatchedTurns: turns.unwatched.length,
+      unseenAlerts: raised.unseen.length,
       standing: standingOf(standing, now),
       ...wireQualityOf(measured, range),
+      untaken: measureUntaken(raised.seen),
     };
   }
 }
@@ -95,7 +98,7 @@ function standingOf(alerts: readonly AlertRecord[], now: Instant): WireAlertQual
 
 type Measured = Omit<
   WireAlertQuality,
-  'terminal' | 'from' | 'to' | 'asOf' | 'thresholdSeconds' | 'unwatchedTurns' | 'unseenAlerts' | 'standing'
+  keyof AlertQualityQuery | 'asOf' | 'thresholdSeconds' | 'unwatchedTurns' | 'unseenAlerts' | 'standing'
 >;
 
 function wireQualityOf(quality: AlertQuality, range: InstantRange): Measured {

@@ -41,7 +41,7 @@ export const queryKeys = {
     all: ['alerts'] as const,
     lists: ['alerts', 'list'] as const,
     list: (question: AlertQuestion) => ['alerts', 'list', question] as const,
-    quality: (question: { terminal: string; from: string; to: string }) =>
+    quality: (question: { terminal: string; from: string; to: string; afterwards: string }) =>
       ['alerts', 'quality', question] as const,
   },
   corrections: {

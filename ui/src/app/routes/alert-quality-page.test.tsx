@@ -35,6 +35,7 @@ const quality: WireAlertQuality = {
   terminal: 'HBR',
   from: '2026-02-04',
   to: '2026-03-03',
+  afterwards: 'left-out',
   asOf: '2026-03-03T22:26:00.000Z',
   thresholdSeconds: 59,
   watchedTurns: 480,
@@ -120,6 +121,7 @@ function open(answer: Partial<WireAlertQuality> = {}, options: RenderAppOptions 
         ...quality,
         from: query.get('from'),
         to: query.get('to'),
+        afterwards: query.get('afterwards'),
         ...answer,
       }),
     );
@@ -145,7 +147,7 @@ describe('the page of the quality of alerts', () => {
     open();
     const headline = await panel('Alerts in 10 minutes, at peak');
     expect(headline).toContain('0 in half of them, 2.5 in 95 of 100');
-    expect(headline).toContain('41 alerts on 480 watched turns');
+    expect(headline).toContain('41 alerts on 480 turns');
     expect(headline).toContain('Peak: the 85 with 6 or more turns on hand');
     const distribution = await rowsOf('Periods of 10 minutes by number of alerts');
     expect(distribution).toHaveLength(13);
@@ -209,7 +211,7 @@ describe('a past without alerts', () => {
     open({ ...nothing, watchedTurns: 0, unwatchedTurns: 3120, unseenAlerts: 150 });
     expect(
       await screen.findByText(
-        'There are no alerts from Wed 4 Feb 2026 to Tue 3 Mar 2026. 3,120 turns of these days were entered only when over: nobody could have acted on an alert, so they count for nothing here. Left out with them: 150 alerts worked out from their entries afterwards.',
+        'There are no alerts from Wed 4 Feb 2026 to Tue 3 Mar 2026. Left out: 3,120 turns of these days were entered only when over, and 150 alerts worked out from their entries. Nobody could have acted on them.',
       ),
     ).toBeVisible();
     expect(screen.queryByRole('table')).not.toBeInTheDocument();
@@ -217,15 +219,21 @@ describe('a past without alerts', () => {
 
   it('tells a quiet desk from an empty terminal', async () => {
     const { unmount } = open({ alerts: 0, watchedTurns: 12 });
-    expect(await screen.findByText(/No alert was raised from .*, on 12 watched turns\./)).toBeVisible();
+    expect(await screen.findByText(/No alert was raised from .*, on 12 turns\./)).toBeVisible();
     unmount();
     open({ ...nothing, watchedTurns: 0 });
     expect(await screen.findByText(/There are neither turns nor alerts at this terminal/)).toBeVisible();
   });
 
-  it('says of a range that is watched in part what is left out', async () => {
-    open({ unwatchedTurns: 1 });
-    expect(await screen.findByText(/^1 turn of these days was entered only when over/)).toBeVisible();
+  it('leaves out what was entered afterwards, or counts it, and says so', async () => {
+    const { user, server } = open({ unwatchedTurns: 1 });
+    expect(
+      await screen.findByText(/^Left out: 1 turn of these days was entered only when over/),
+    ).toBeVisible();
+    await user.selectOptions(screen.getByLabelText('Turns entered afterwards'), 'counted');
+    expect(await screen.findByText(/^Counted here: 1 turn .* the warning is shorter/)).toBeVisible();
+    const asking = server.sent('GET', '/api/alerts/quality').map(({ query }) => query.get('afterwards'));
+    expect(asking).toEqual(['left-out', 'counted']);
   });
 });
 

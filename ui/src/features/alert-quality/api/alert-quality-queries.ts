@@ -5,8 +5,8 @@ import { queryKeys } from '../../../lib/query-keys';
 import type { QualityRange } from '../model/quality-range';
 
 /** How useful the alerts of a terminal's desk were in a range of days. */
-export const alertQualityQuery = (terminal: string, { from, to }: QualityRange) => {
-  const query = { terminal, from, to };
+export const alertQualityQuery = (terminal: string, { from, to, afterwards }: QualityRange) => {
+  const query = { terminal, from, to, afterwards };
   return queryOptions({
     queryKey: queryKeys.alerts.quality(query),
     queryFn: ({ signal }) => api.get<WireAlertQuality>('/api/alerts/quality', { signal, query }),

@@ -21,7 +21,7 @@ export function LoadHeadline({ quality }: { quality: WireAlertQuality }) {
       <dl className={styles.facts}>
         <dt>Raised</dt>
         <dd>
-          {plural(all.alerts, 'alert')} on {plural(quality.watchedTurns, 'watched turn')}
+          {plural(all.alerts, 'alert')} on {plural(quality.watchedTurns, 'turn')}
         </dd>
         <dt>Mean in {minutes} min</dt>
         <dd>

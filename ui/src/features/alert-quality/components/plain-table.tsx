@@ -1,5 +1,5 @@
-import { HTMLTable } from '@blueprintjs/core';
 import type { ReactNode } from 'react';
+import styles from './quality.module.css';
 
 /** A heading and whether its column holds numbers. */
 export type TableHead = readonly [name: string, kind: 'words' | 'number'];
@@ -15,7 +15,7 @@ interface PlainTableProps {
 export function PlainTable({ caption, heads, rows }: PlainTableProps) {
   return (
     <div className="sp-table-scroll" tabIndex={0} role="region" aria-label={caption}>
-      <HTMLTable className="sp-table">
+      <table className={`sp-table ${styles.table}`}>
         <caption className="unseen">{caption}</caption>
         <thead>
           <tr>
@@ -46,7 +46,7 @@ export function PlainTable({ caption, heads, rows }: PlainTableProps) {
             </tr>
           ))}
         </tbody>
-      </HTMLTable>
+      </table>
     </div>
   );
 }

@@ -68,8 +68,8 @@ export function PrecisionPanel({ quality }: { quality: WireAlertQuality }) {
       <p>
         <b>Warned of:</b>{' '}
         {warned.counted === 0
-          ? 'no watched train left late.'
-          : `of the watched trains that left late, ${countedWords(warned)}, had such an alert before they left.`}
+          ? 'no train left late.'
+          : `of the trains that left late, ${countedWords(warned)}, had such an alert before they left.`}
       </p>
       <footer>
         Right is an alert whose train would have left late without action. The record shows only what

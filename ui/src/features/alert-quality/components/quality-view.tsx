@@ -4,7 +4,7 @@ import { EmptyState, ErrorState, LoadingRows } from '../../../components/page-st
 import { formatServiceDateWithYear } from '../../../lib/time-display';
 import { alertQualityQuery } from '../api/alert-quality-queries';
 import type { QualityRange } from '../model/quality-range';
-import { plural, unwatchedWords } from '../model/quality-words';
+import { plural, afterwardsWords } from '../model/quality-words';
 import { RepeatersPanel, StandingPanel, UntakenPanel } from './attention-panels';
 import { BurstsPanel, LoadHeadline, LoadPanel } from './load-panels';
 import { PrecisionPanel } from './precision-panel';
@@ -14,7 +14,7 @@ import { WarningPanel } from './warning-panel';
 import { YardstickPanel } from './yardstick-panel';
 import styles from './quality.module.css';
 
-const daysWords = ({ from, to }: QualityRange): string =>
+const daysWords = ({ from, to }: Pick<QualityRange, 'from' | 'to'>): string =>
   from === to
     ? `on ${formatServiceDateWithYear(from)}`
     : `from ${formatServiceDateWithYear(from)} to ${formatServiceDateWithYear(to)}`;
@@ -23,9 +23,9 @@ const daysWords = ({ from, to }: QualityRange): string =>
 function noAlertsWords(quality: WireAlertQuality): string {
   const days = daysWords(quality);
   if (quality.watchedTurns > 0)
-    return `No alert was raised ${days}, on ${plural(quality.watchedTurns, 'watched turn')}.`;
+    return `No alert was raised ${days}, on ${plural(quality.watchedTurns, 'turn')}.`;
   if (quality.unwatchedTurns > 0)
-    return `There are no alerts ${days}. ${unwatchedWords(quality) ?? ''}`.trim();
+    return `There are no alerts ${days}. ${afterwardsWords(quality) ?? ''}`.trim();
   return `There are neither turns nor alerts at this terminal ${days}.`;
 }
 
@@ -38,14 +38,18 @@ function Panels({ quality, zone }: { quality: WireAlertQuality; zone: string }) 
       </div>
       <YardstickPanel quality={quality} />
       <div className={styles.even}>
-        <PrecisionPanel quality={quality} />
-        <WarningPanel quality={quality} />
-        <PriorityPanel quality={quality} />
-        <SourcesPanel quality={quality} zone={zone} />
-        <UntakenPanel quality={quality} />
-        <StandingPanel quality={quality} zone={zone} />
-        <RepeatersPanel quality={quality} />
-        <BurstsPanel quality={quality} zone={zone} />
+        <div className={styles.stack}>
+          <PrecisionPanel quality={quality} />
+          <PriorityPanel quality={quality} />
+          <UntakenPanel quality={quality} />
+        </div>
+        <div className={styles.stack}>
+          <WarningPanel quality={quality} />
+          <SourcesPanel quality={quality} zone={zone} />
+          <StandingPanel quality={quality} zone={zone} />
+          <RepeatersPanel quality={quality} />
+          <BurstsPanel quality={quality} zone={zone} />
+        </div>
       </div>
     </>
   );
@@ -61,13 +65,13 @@ export function QualityView({ terminal, range }: { terminal: WireTerminal; range
   if (error !== null) return <ErrorState error={error} onRetry={retry} />;
   if (data === undefined)
     return <LoadingRows what="the quality of alerts" rows={8} rowHeight={60} onRetry={retry} />;
-  const unwatched = unwatchedWords(data);
+  const afterwards = afterwardsWords(data);
   const isMeasured = data.alerts > 0 || data.watchedTurns > 0;
   return (
     <div className={isPlaceholderData ? styles.loading : undefined} aria-busy={isPlaceholderData}>
       <div className={styles.stack}>
         {data.alerts === 0 && <EmptyState words={noAlertsWords(data)} />}
-        {unwatched !== null && isMeasured && <p className="muted">{unwatched}</p>}
+        {afterwards !== null && isMeasured && <p className="muted">{afterwards}</p>}
         {isMeasured && <Panels quality={data} zone={terminal.zone} />}
       </div>
     </div>

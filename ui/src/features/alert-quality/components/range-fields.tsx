@@ -1,4 +1,4 @@
-import { FormGroup, InputGroup, SegmentedControl } from '@blueprintjs/core';
+import { FormGroup, HTMLSelect, InputGroup, SegmentedControl } from '@blueprintjs/core';
 import { isCalendarDate, type CalendarDate } from '@stubpost/shared';
 import { useId } from 'react';
 import { lastDays, offeredDays, offeredLength, type QualityRange } from '../model/quality-range';
@@ -29,6 +29,7 @@ function DayField(props: { label: string; day: CalendarDate; onChange: (day: Cal
 /** Which days the figures are about, both included; each change goes into the address at once. */
 export function RangeFields({ range, today, onChange }: RangeFieldsProps) {
   const length = offeredLength(range, today);
+  const afterwardsId = useId();
   return (
     <form
       className="sp-fields"
@@ -38,7 +39,7 @@ export function RangeFields({ range, today, onChange }: RangeFieldsProps) {
       <SegmentedControl
         aria-label="Days up to today"
         value={String(length)}
-        onValueChange={(value) => onChange(lastDays(Number(value), today))}
+        onValueChange={(value) => onChange({ ...range, ...lastDays(Number(value), today) })}
         options={offeredDays.map((days) => ({
           value: String(days),
           label: days === 1 ? 'Today' : `${days} days`,
@@ -46,6 +47,22 @@ export function RangeFields({ range, today, onChange }: RangeFieldsProps) {
       />
       <DayField label="First day" day={range.from} onChange={(from) => onChange({ ...range, from })} />
       <DayField label="Last day" day={range.to} onChange={(to) => onChange({ ...range, to })} />
+      <FormGroup label="Turns entered afterwards" labelFor={afterwardsId}>
+        <HTMLSelect
+          id={afterwardsId}
+          value={range.afterwards}
+          onChange={(event) =>
+            onChange({
+              ...range,
+              afterwards: event.currentTarget.value === 'counted' ? 'counted' : 'left-out',
+            })
+          }
+          options={[
+            { value: 'left-out', label: 'left out' },
+            { value: 'counted', label: 'counted' },
+          ]}
+        />
+      </FormGroup>
     </form>
   );
 }

@@ -5,18 +5,24 @@ const today = '2026-03-10';
 
 describe('the days of the quality page', () => {
   it('are the four weeks up to today unless the address says more', () => {
-    expect(readQualityRange(new URLSearchParams(), today)).toEqual({ from: '2026-02-11', to: today });
+    expect(readQualityRange(new URLSearchParams(), today)).toEqual({
+      from: '2026-02-11',
+      to: today,
+      afterwards: 'left-out',
+    });
   });
 
   it('come back from the address as they were written, beside what else stands there', () => {
-    const range = { from: '2026-01-05', to: '2026-02-01' };
+    const range = { from: '2026-01-05', to: '2026-02-01', afterwards: 'counted' } as const;
     const written = writeQualityRange(new URLSearchParams('terminal=HBR'), range);
     expect(written.get('terminal')).toBe('HBR');
     expect(readQualityRange(written, today)).toEqual(range);
+    const left = writeQualityRange(written, { ...range, afterwards: 'left-out' });
+    expect(left.get('afterwards')).toBeNull();
   });
 
   it.each(['from=2026-02-30', 'to=soon', 'from=2026-03-09&to=2026-03-08'])('are the usual for %s', (text) => {
-    expect(readQualityRange(new URLSearchParams(text), today)).toEqual(lastDays(28, today));
+    expect(readQualityRange(new URLSearchParams(text), today)).toMatchObject(lastDays(28, today));
   });
 
   it('know their length when it is one of those offered', () => {

@@ -1,9 +1,14 @@
-import { addDays, daysBetween, isCalendarDate, type CalendarDate } from '@stubpost/shared';
+import { addDays, daysBetween, isCalendarDate, type Afterwards, type CalendarDate } from '@stubpost/shared';
 
-/** Calendar days at the terminal, both included; they stand in the address. */
-export interface QualityRange {
+/** Calendar days at the terminal, both included. */
+export interface DayRange {
   from: CalendarDate;
   to: CalendarDate;
+}
+
+/** What the page is about: days, and whether turns that were entered afterwards count. It stands in the address. */
+export interface QualityRange extends DayRange {
+  afterwards: Afterwards;
 }
 
 /** Lengths that are offered, in days up to today. */
@@ -11,7 +16,7 @@ export const offeredDays = [1, 7, 28, 56] as const;
 const usualDays = 28;
 
 /** So many days up to today. */
-export function lastDays(days: number, today: CalendarDate): QualityRange {
+export function lastDays(days: number, today: CalendarDate): DayRange {
   return { from: addDays(today, 1 - days), to: today };
 }
 
@@ -23,7 +28,8 @@ export function readQualityRange(search: URLSearchParams, today: CalendarDate): 
     return isCalendarDate(text) ? text : usual[name];
   };
   const range = { from: dateOf('from'), to: dateOf('to') };
-  return daysBetween(range.from, range.to) < 0 ? usual : range;
+  const afterwards = search.get('afterwards') === 'counted' ? 'counted' : 'left-out';
+  return { ...(daysBetween(range.from, range.to) < 0 ? usual : range), afterwards };
 }
 
 /** Writes it back; other things in the address stay. */
@@ -31,11 +37,13 @@ export function writeQualityRange(search: URLSearchParams, range: QualityRange):
   const written = new URLSearchParams(search);
   written.set('from', range.from);
   written.set('to', range.to);
+  if (range.afterwards === 'counted') written.set('afterwards', 'counted');
+  else written.delete('afterwards');
   return written;
 }
 
 /** Which of the offered lengths a range is; null when it is none. */
-export function offeredLength(range: QualityRange, today: CalendarDate): number | null {
+export function offeredLength(range: DayRange, today: CalendarDate): number | null {
   if (range.to !== today) return null;
   return offeredDays.find((days) => days === daysBetween(range.from, range.to) + 1) ?? null;
 }

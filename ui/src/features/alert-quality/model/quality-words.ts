@@ -35,13 +35,15 @@ export function plural(value: number, one: string, many = `${one}s`): string {
   return `${count(value)} ${value === 1 ? one : many}`;
 }
 
-/** Why there may be less in the figures than days in the range; null when everything was watched. */
-export function unwatchedWords(
-  quality: Pick<WireAlertQuality, 'unwatchedTurns' | 'unseenAlerts'>,
+/** What is in the figures, or left out of them, because it was entered afterwards; null when nothing was. */
+export function afterwardsWords(
+  quality: Pick<WireAlertQuality, 'afterwards' | 'unwatchedTurns' | 'unseenAlerts'>,
 ): string | null {
-  const { unwatchedTurns, unseenAlerts } = quality;
+  const { afterwards, unwatchedTurns, unseenAlerts } = quality;
   if (unwatchedTurns === 0 && unseenAlerts === 0) return null;
-  const turns = `${plural(unwatchedTurns, 'turn')} of these days ${unwatchedTurns === 1 ? 'was' : 'were'} entered only when over: nobody could have acted on an alert, so ${unwatchedTurns === 1 ? 'it counts' : 'they count'} for nothing here.`;
-  if (unseenAlerts === 0) return turns;
-  return `${turns} Left out with them: ${plural(unseenAlerts, 'alert')} worked out from their entries afterwards.`;
+  const turns = `${plural(unwatchedTurns, 'turn')} of these days ${unwatchedTurns === 1 ? 'was' : 'were'} entered only when over`;
+  const alerts = `${plural(unseenAlerts, 'alert')} worked out from their entries`;
+  return afterwards === 'left-out'
+    ? `Left out: ${turns}, and ${alerts}. Nobody could have acted on them.`
+    : `Counted here: ${turns}, and ${alerts}. Nobody could have acted on them, and they were looked for only when an entry came in: the warning is shorter than a desk that watches gets.`;
 }
