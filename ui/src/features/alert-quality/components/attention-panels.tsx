@@ -44,9 +44,9 @@ export function UntakenPanel({ quality }: { quality: WireAlertQuality }) {
         <dd>{duration(secondsToTake.ninetyFifth)}</dd>
       </dl>
       <footer>
-        Never taken, whatever became of them; one that the crew settles before anybody can take it is among
-        them. Times: from raising to the last taking, n = {count(secondsToTake.counted)}. Interval: Wilson, 95
-        %.
+        Of alerts that somebody could take: never taken, whatever became of them; one that the crew settles
+        before anybody can take it is among them. Times: from raising to the last taking, n ={' '}
+        {count(secondsToTake.counted)}. Interval: Wilson, 95 %.
       </footer>
     </section>
   );

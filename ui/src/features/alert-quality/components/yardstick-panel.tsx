@@ -29,7 +29,7 @@ export function YardstickPanel({ quality }: { quality: WireAlertQuality }) {
         ]}
         rows={yardsticksOf(quality).map(({ name, here, target, isMet, source }) => ({
           key: name,
-          cells: [name, here, target, verdict(isMet), SOURCE_WORDS[source]],
+          cells: [name, here, target, verdict(isMet), <span className="nowrap">{SOURCE_WORDS[source]}</span>],
         }))}
       />
       <footer>

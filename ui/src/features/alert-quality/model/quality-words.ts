@@ -45,5 +45,5 @@ export function afterwardsWords(
   const alerts = `${plural(unseenAlerts, 'alert')} worked out from their entries`;
   return afterwards === 'left-out'
     ? `Left out: ${turns}, and ${alerts}. Nobody could have acted on them.`
-    : `Counted here: ${turns}, and ${alerts}. Nobody could have acted on them, and they were looked for only when an entry came in: the warning is shorter than a desk that watches gets.`;
+    : `Counted here: ${turns}, and ${alerts}. Nobody could have acted on them, and they were looked for only when an entry came in, so the warning is shorter than at a desk that watches.`;
 }
