@@ -122,7 +122,7 @@ describe('a changed entry', () => {
     ['envelope', { receivedAt: '2026-03-03T22:00:50.001Z' }],
     ['several', { bodyHash: sha256('x'), hash: sha256('y') }],
   ])('is told apart by its part: %s', (part, changes) => {
-    const changed = canonical({ ...(JSON.parse(lines[6] ?? '') as object), ...changes } as Json);
+    const changed = canonical({ ...(JSON.parse(lines[6] ?? '') as object), ...changes });
     const verdict = checked(withLine(6, changed));
     expect(verdict.faults).toEqual([
       { kind: 'changed', part, line: 7, sequence: 7, id: expect.any(String) as string },
