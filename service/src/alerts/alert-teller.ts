@@ -15,7 +15,6 @@ import { Clock } from '../common/clock';
 import { Config } from '../config/config';
 import type { Transaction } from '../database/unit-of-work';
 import { DutyRosters, type ReachablePerson, type ReachableRoster } from '../duty/duty-rosters';
-import { TOKEN_MARK } from '../messages/outgoing';
 import { Outbox } from '../messages/outbox';
 import type { AlertRecord } from './alert-record';
 import { takingPurpose } from './taking-purpose';
@@ -134,7 +133,7 @@ export class AlertTeller {
       because: becauseWords[told.rung],
       others: news.names.filter((name) => name !== person.name),
       pageUrl: this.pageOf(alert),
-      takenUrl: `${this.config.publicUrl}/t/${TOKEN_MARK}`,
+      takenUrl: `${this.config.publicUrl}/t/${this.outbox.tokenMark}`,
     };
     const mail = alertMail(facts);
     await transaction.execute(

@@ -2,11 +2,13 @@ import { Injectable, type OnModuleDestroy } from '@nestjs/common';
 import type { Instant } from '@stubpost/shared';
 import { Subject } from 'rxjs';
 import type { Transaction } from '../database/unit-of-work';
-import { messageIdOf, type NewMessage } from './outgoing';
+import { messageIdOf, type NewMessage, TOKEN_MARK } from './outgoing';
 
 /** Where messages are left to be sent, in the transaction of what they tell. */
 @Injectable()
 export class Outbox implements OnModuleDestroy {
+  /** Stands in a body where the token of its link goes; it is as long as a token. */
+  readonly tokenMark = TOKEN_MARK;
   private readonly bell = new Subject<void>();
   /** Rings when something new has been left, after its commit. */
   readonly rings = this.bell.asObservable();
