@@ -72,7 +72,7 @@ describe('the bars of the desk', () => {
       .map(({ textContent }) => textContent ?? '');
 
   test.each([
-    ['dispatcher', ['Board', 'Alerts', 'History', 'Corrections', 'Timetables', 'Set-up', 'Help']],
+    ['dispatcher', ['Board', 'Alerts', 'Roster', 'History', 'Corrections', 'Timetables', 'Set-up', 'Help']],
     [
       'auditor',
       ['Board', 'Alerts', 'History', 'Corrections', 'Check the log', 'Timetables', 'Set-up', 'Help'],
@@ -81,7 +81,18 @@ describe('the bars of the desk', () => {
     ['inspector', ['Board', 'Alerts', 'History', 'Set-up', 'Help']],
     [
       'administrator',
-      ['Board', 'Alerts', 'History', 'Check the log', 'Timetables', 'Set-up', 'People', 'Help'],
+      [
+        'Board',
+        'Alerts',
+        'Roster',
+        'History',
+        'Check the log',
+        'Timetables',
+        'Set-up',
+        'People',
+        'Messages',
+        'Help',
+      ],
     ],
   ] as const)('name the pages that a %s may open, help last', async (role, expected) => {
     open('/me', { person: aPersonWith(role) });

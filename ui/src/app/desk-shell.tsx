@@ -11,6 +11,7 @@ import { NewerVersion } from './newer-version';
 import { NotEncrypted } from './not-encrypted';
 import { PageFoot } from './page-foot';
 import { PageNames } from './page-names';
+import { SweepSilent } from './sweep-silent';
 import { TopBar } from './top-bar';
 import styles from './shell.module.css';
 
@@ -38,6 +39,7 @@ export function DeskShell() {
         </a>
         <NotEncrypted />
         <NewerVersion />
+        <SweepSilent zone={zone} />
         <header>
           <TopBar terminal={terminal} terminals={terminals} zone={zone} onFind={() => setFinding(true)} />
           <PageNames zone={zone} path={pathname} />

@@ -20,12 +20,14 @@ const PAGES: readonly PageName[] = [
   { name: 'My turns', to: '/my', permission: 'entries.record', crewOnly: true },
   { name: 'Board', to: '/board', permission: 'board.read', also: /^\/turns\// },
   { name: 'Alerts', to: '/alerts', permission: 'alerts.read' },
+  { name: 'Roster', to: '/desk/roster', permission: 'roster.read' },
   { name: 'History', to: '/history', permission: 'history.read' },
   { name: 'Corrections', to: '/records/corrections', permission: 'corrections.read' },
   { name: 'Check the log', to: '/records/check', permission: 'records.read' },
   { name: 'Timetables', to: '/timetables', permission: 'timetables.read' },
   { name: 'Set-up', to: '/setup', permission: 'plans.read' },
   { name: 'People', to: '/people', permission: 'people.manage' },
+  { name: 'Messages', to: '/status/boxes', permission: 'messages.read' },
 ];
 
 /** Names of the pages a person may open. Help stands last, at every desk and on every page. */

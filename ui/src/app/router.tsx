@@ -29,6 +29,9 @@ const myTieUpPage = () =>
   import('./routes/my-tie-up-page').then(({ MyTieUpPage }) => ({ Component: MyTieUpPage }));
 const myOutboxPage = () =>
   import('./routes/my-outbox-page').then(({ MyOutboxPage }) => ({ Component: MyOutboxPage }));
+const rosterPage = () => import('./routes/roster-page').then(({ RosterPage }) => ({ Component: RosterPage }));
+const boxesPage = () => import('./routes/boxes-page').then(({ BoxesPage }) => ({ Component: BoxesPage }));
+const takingPage = () => import('./routes/taking-page').then(({ TakingPage }) => ({ Component: TakingPage }));
 const peoplePage = () => import('./routes/people-page').then(({ PeoplePage }) => ({ Component: PeoplePage }));
 const mePage = () => import('./routes/me-page').then(({ MePage }) => ({ Component: MePage }));
 const signInPage = () =>
@@ -74,6 +77,14 @@ const deskPages: RouteObject[] = [
     children: [{ path: '/timetables/*', lazy: timetablesPage }],
   },
   { element: <Permitted permission="plans.read" />, children: [{ path: '/setup', lazy: setupPage }] },
+  {
+    element: <Permitted permission="roster.read" />,
+    children: [{ path: '/desk/roster', lazy: rosterPage }],
+  },
+  {
+    element: <Permitted permission="messages.read" />,
+    children: [{ path: '/status/boxes', lazy: boxesPage }],
+  },
   { element: <Permitted permission="people.manage" />, children: [{ path: '/people', lazy: peoplePage }] },
 ];
 
@@ -121,6 +132,7 @@ export const routes: RouteObject[] = [
           { path: '/welcome', lazy: welcomePage },
           { path: '/link/:token', lazy: linkPage },
           { path: '/links/:token', lazy: linkPage },
+          { path: '/t/:token', lazy: takingPage },
         ],
       },
     ],

@@ -22,7 +22,7 @@ export const queryKeys = {
   session: { all: ['session'] as const, list: ['own-sessions'] as const, badge: ['own-badge'] as const },
   setup: { all: ['set-up'] as const },
   demo: { all: ['demo'] as const },
-  health: { all: ['health'] as const },
+  health: { all: ['health'] as const, sweep: ['health', 'sweep'] as const },
   links: { one: (token: string) => ['links', token] as const },
   people: { all: ['people'] as const },
   crew: { at: (terminal: string) => ['crew', terminal] as const },
@@ -53,5 +53,8 @@ export const queryKeys = {
   sets: { all: ['sets'] as const },
   timetables: { all: ['timetables'] as const },
   history: { all: ['history'] as const },
+  duty: { roster: (terminal: string) => ['duty', 'roster', terminal] as const },
+  messages: { all: ['messages'] as const },
+  takings: { one: (token: string) => ['takings', token] as const },
   find: { at: (terminal: string, text: string) => ['find', terminal, text] as const },
 };

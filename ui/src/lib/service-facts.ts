@@ -1,4 +1,5 @@
 import type { SetupAnswer, WireDemo, WireHealth } from '@stubpost/shared';
+import { healthSchema } from '@stubpost/shared';
 import { queryOptions } from '@tanstack/react-query';
 import { api } from './api-client';
 import { queryKeys } from './query-keys';
@@ -16,6 +17,27 @@ export const healthQuery = queryOptions({
   queryKey: queryKeys.health.all,
   queryFn: ({ signal }) => api.get<WireHealth>('/api/health', { signal }),
   staleTime: 5 * 60_000,
+  retry: false,
+});
+
+/** Whether the alert sweep is silent, and since when. */
+export interface SweepState {
+  isSilent: boolean;
+  lastSweepAt: string | null;
+}
+
+/**
+ * The state of the alert sweep, asked for again and again. An unwell service says so with 503 and the same body, which
+ * is why this one does not go through the client that takes every such answer for a failure.
+ */
+export const sweepQuery = queryOptions({
+  queryKey: queryKeys.health.sweep,
+  queryFn: async ({ signal }): Promise<SweepState> => {
+    const answer = await fetch('/api/health', { signal, headers: { accept: 'application/json' } });
+    const { lastSweepAt, problems = [] } = healthSchema.parse(await answer.json());
+    return { lastSweepAt, isSilent: problems.some((problem) => problem.includes('sweep')) };
+  },
+  refetchInterval: 15_000,
   retry: false,
 });
 
