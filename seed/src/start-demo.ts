@@ -6,6 +6,7 @@ import { gatherCast } from './player/cast';
 import { DayPlayer } from './player/day-player';
 import { DeskPlayer } from './player/desk-player';
 import { HistoryFiller } from './player/history-filler';
+import { keepRoster } from './player/keep-roster';
 import { ensureTerminals, openDemoDay, prepareRailroad } from './player/prepare-railroad';
 import { demoZone } from './railroad/geography';
 
@@ -47,6 +48,7 @@ export const startDemo: StartDemo = async (app, signal) => {
   const desk = new DeskPlayer(app, cast);
   await app.get(TurnSweep).holdWhile(async () => {
     await prepareRailroad(app, cast, { today, firstDay: addDays(today, -allDays) });
+    await keepRoster(app, cast);
     demo.report({ state: 'filling', message: 'Today is being brought up to now' });
     await player.tick();
   });

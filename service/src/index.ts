@@ -11,6 +11,8 @@ export { INSTALLATION, Settings } from './database/settings';
 export { type Transaction, UnitOfWork } from './database/unit-of-work';
 export { type DemoPerson, type DemoProgress, DemoService } from './demo/demo.service';
 export type { StartDemo } from './demo/start-demo';
+export { DutyRosters } from './duty/duty-rosters';
+export { DutyRostersService } from './duty/duty-rosters.service';
 export { PeopleReadModel } from './people/people.read-model';
 export { PeopleService } from './people/people.service';
 export { TerminalsReadModel } from './terminals/terminals.read-model';

@@ -18,6 +18,12 @@ export interface Cast {
 const badgeOf = ({ role }: DemoPerson, at: number): { badge?: string } =>
   role === 'conductor' || role === 'engineer' ? { badge: String(4401 + at) } : {};
 
+/** The desk and whoever stands behind it can be reached by text message; the numbers are of those kept for stories. */
+const phoneOf = ({ role }: DemoPerson, at: number): { phone?: string } =>
+  role === 'dispatcher' || role === 'supervisor'
+    ? { phone: `+1555010${String(100 + at).padStart(4, '0')}` }
+    : {};
+
 const emailOf = (person: DemoPerson): string => `${person.key}@ostrel-valley.example`;
 
 /** Adds the people who are not there yet. They have no password: the demo's sign-in page lets visitors in. */
@@ -30,7 +36,13 @@ export async function gatherCast(app: INestApplicationContext): Promise<Cast> {
     const email = emailOf(person);
     const id =
       idOf.get(email) ??
-      (await app.get(PeopleService).add({ email, name: person.name, roles, ...badgeOf(person, at) })).id;
+      (
+        await app.get(PeopleService).add({
+          ...{ email, name: person.name, roles },
+          ...badgeOf(person, at),
+          ...phoneOf(person, at),
+        })
+      ).id;
     byKey.set(person.key, { id, name: person.name, roles, key: person.key, role: person.role });
   }
   return {
