@@ -1,5 +1,5 @@
 import type { WireAlertQuality } from '@stubpost/shared';
-import { yardsticksOf, type TargetSource } from '../model/yardsticks';
+import { fewestForVerdict, yardsticksOf, type TargetSource } from '../model/yardsticks';
 import { PlainTable } from './plain-table';
 import styles from './quality.module.css';
 
@@ -35,7 +35,7 @@ export function YardstickPanel({ quality }: { quality: WireAlertQuality }) {
       <footer>
         The published targets are for the desk of one person; second-hand: as others quote them. ISA-18.2 of
         2016 is said to warn against means and to have dropped the count per day, so look at the distribution
-        first.
+        first. No verdict: fewer than {fewestForVerdict} periods or alerts, or a target without a number.
       </footer>
     </section>
   );

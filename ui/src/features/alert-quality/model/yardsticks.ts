@@ -25,57 +25,69 @@ const atMost = (value: number | null, limit: number): boolean | null =>
 const below = (value: number | null, limit: number): boolean | null =>
   value === null ? null : value < limit;
 
+/** Of fewer periods or alerts nothing is said to be within or outside. Our choice. */
+export const fewestForVerdict = 30;
+
+/** What the yardsticks look at. */
+export interface MeasuredDesk extends Pick<WireAlertQuality, 'alerts' | 'stale' | 'repeaters'> {
+  load: Pick<WireAlertQuality['load'], 'all' | 'peak'>;
+  sources: Pick<WireAlertQuality['sources'], 'sourceCount' | 'share'>;
+}
+
 /** The figures of a desk beside the published targets and our own, in the order in which they matter. */
-export function yardsticksOf(quality: WireAlertQuality): Yardstick[] {
+export function yardsticksOf(quality: MeasuredDesk): Yardstick[] {
   return [...loadRows(quality), ...sourceRows(quality), ...repeaterRows(quality)];
 }
 
-function loadRows({ load: { all, peak } }: WireAlertQuality): Yardstick[] {
+function loadRows({ load: { all, peak } }: MeasuredDesk): Yardstick[] {
   const { meanAcceptable, meanManageable, mostInPeriod, shareInBurst } = publishedAlertTargets;
   const { median, ninetyFifth } = ownLoadGoals;
+  const verdict = (periods: number, isMet: boolean | null): boolean | null =>
+    periods < fewestForVerdict ? null : isMet;
   return [
     {
       name: 'Half of the 10-minute periods at peak had at most',
       here: amount(peak.median),
       target: `${median}`,
       source: 'ours',
-      isMet: atMost(peak.median, median),
+      isMet: verdict(peak.periods, atMost(peak.median, median)),
     },
     {
       name: '95 in 100 of them had at most',
       here: amount(peak.ninetyFifth),
       target: `${ninetyFifth}`,
       source: 'ours',
-      isMet: atMost(peak.ninetyFifth, ninetyFifth),
+      isMet: verdict(peak.periods, atMost(peak.ninetyFifth, ninetyFifth)),
     },
     {
       name: 'Mean per 10 minutes at peak',
       here: amount(peak.mean),
       target: `about ${meanAcceptable}, manageable up to ${meanManageable}`,
       source: 'published',
-      isMet: atMost(peak.mean, meanManageable),
+      isMet: verdict(peak.periods, atMost(peak.mean, meanManageable)),
     },
     {
       name: 'Most in any 10 minutes',
       here: all.most === null ? '–' : count(all.most),
       target: `at most ${mostInPeriod}`,
       source: 'published',
-      isMet: atMost(all.most, mostInPeriod),
+      isMet: verdict(all.periods, atMost(all.most, mostInPeriod)),
     },
     {
       name: '10-minute periods in burst',
       here: percent(all.shareInBurst),
       target: `under ${shareInBurst * 100} %`,
       source: 'published',
-      isMet: below(all.shareInBurst, shareInBurst),
+      isMet: verdict(all.periods, below(all.shareInBurst, shareInBurst)),
     },
   ];
 }
 
-function sourceRows({ sources, stale }: WireAlertQuality): Yardstick[] {
+function sourceRows({ sources, stale, alerts }: MeasuredDesk): Yardstick[] {
   const { topTenShare, staleHours } = publishedAlertTargets;
   // With ten sources or fewer the ten busiest are all there are: the share says nothing.
-  const isMet = sources.sourceCount <= 10 ? null : atMost(sources.share, topTenShare);
+  const isMet =
+    sources.sourceCount <= 10 || alerts < fewestForVerdict ? null : atMost(sources.share, topTenShare);
   return [
     {
       name: 'Share of the ten busiest sources',
@@ -94,7 +106,7 @@ function sourceRows({ sources, stale }: WireAlertQuality): Yardstick[] {
   ];
 }
 
-function repeaterRows({ repeaters, alerts }: WireAlertQuality): Yardstick[] {
+function repeaterRows({ repeaters, alerts }: MeasuredDesk): Yardstick[] {
   const { chatterTimes, chatterSeconds } = publishedAlertTargets;
   const none = (name: string, value: number, source: TargetSource): Yardstick => ({
     name,
