@@ -27,7 +27,7 @@ export function SubPlace({ places }: { places: Places }) {
 }
 
 function PlaceOf({ places }: { places: Places }): ReactNode {
-  const { turn } = useTurnScene();
+  const { turn, me } = useTurnScene();
   const { place, toAct, ways } = places;
   const about = `Train ${turn.outbound?.train ?? turn.inbound?.train ?? ''}, track ${turn.track ?? 'not known'}`;
   switch (place.kind) {
@@ -46,7 +46,7 @@ function PlaceOf({ places }: { places: Places }): ReactNode {
         <ReasonPlace
           title={`Can’t do: ${place.label}`}
           about={about}
-          reasons={cannotDoReasons}
+          reasons={cannotDoReasons(me.role)}
           action="Send to desk"
           onReason={(reason) =>
             ways.onRecord({ kind: 'cannot-do', step: place.step, reason }, `Can’t do: ${place.label}`, null)

@@ -223,6 +223,7 @@ describe('other ways', () => {
   it('says why a step cannot be done, and sends a note', async () => {
     const app = await openTurn(secured);
     await touch('Can’t do');
+    expect(screen.queryByRole('button', { name: 'Waiting for the conductor' })).toBeNull();
     await touch('Waiting for the engineer');
     await touch('Send to desk');
     expect(sent(app)[0]).toMatchObject({

@@ -1,15 +1,21 @@
+import type { CrewRole } from '@stubpost/shared';
+
 /*
  * Reasons that stand as buttons, so that gloves need not type. Common practice, no published source; any other reason is
  * put in words.
  */
 
-/** Why a step cannot be done. */
-export const cannotDoReasons = [
-  'Waiting for the engineer',
-  'Waiting for the conductor',
-  'Equipment will not answer',
-  'Not safe to go there',
-] as const;
+const crewRoles: readonly CrewRole[] = ['engineer', 'conductor'];
+
+/** Why a step cannot be done, for somebody with this job on the turn: nobody waits for themselves. */
+export function cannotDoReasons(own: CrewRole | null): string[] {
+  const others = crewRoles.filter((role) => role !== own);
+  return [
+    ...others.map((role) => `Waiting for the ${role}`),
+    'Equipment will not answer',
+    'Not safe to go there',
+  ];
+}
 
 /** Why an entry is taken back before the train has left. */
 export const withdrawReasons = ['Wrong step', 'Wrong train', 'Wrong time'] as const;
