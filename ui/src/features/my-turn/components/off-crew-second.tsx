@@ -46,13 +46,7 @@ export function OffCrewSecond({
         </Caution>
       </div>
       <Foot>
-        <RecordBar
-          barKey="not-yet"
-          isOwnChange
-          hollow
-          over={isAnnul ? 'Annul the turn' : 'Blue signal down'}
-          onRecord={onBack}
-        >
+        <RecordBar barKey="not-yet" isOwnChange hollow over="Nothing is recorded yet" onRecord={onBack}>
           Not yet, go back
         </RecordBar>
       </Foot>

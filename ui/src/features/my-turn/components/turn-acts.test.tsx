@@ -307,7 +307,7 @@ describe('the phone of somebody who is not of a crew', () => {
     await touch('Annul');
     await touch('Equipment failed');
     await touch('Go on');
-    await touch(/Not yet, go back/);
+    await touch(/^Nothing is recorded yet.*Not yet, go back/);
     expect(sent(app)).toEqual([]);
     await touch('Annul');
     await touch('Equipment failed');

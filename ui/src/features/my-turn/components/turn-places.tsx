@@ -72,7 +72,7 @@ function SecondPlace({ places }: { places: Places }) {
         <SecondTouch page={place.page} onRecord={touch} />
       </div>
       <Foot>
-        <RecordBar barKey="not-yet" isOwnChange hollow over="Handbrake released" onRecord={toAct}>
+        <RecordBar barKey="not-yet" isOwnChange hollow over="Nothing is recorded yet" onRecord={toAct}>
           Not yet, go back
         </RecordBar>
       </Foot>
