@@ -43,6 +43,15 @@ describe('the steps of a turn', () => {
     expect(rowsAt('17:08', [arrived, handbrake, relayed])[1]?.known).toBe('by radio, Quist');
   });
 
+  it('say first that a step is in question, since the column is narrow', () => {
+    const check = { step: 'cab-brake-check' };
+    const relayed = entryAt('step-done', '17:07', { ...check, source: 'by-radio', saidBy: 'Q. Quist' });
+    const own = entryAt('step-done', '17:09', check);
+    expect(rowsAt('17:10', [arrived, handbrake, relayed, own])[1]?.known).toBe(
+      'in question, by hand, Tolland',
+    );
+  });
+
   it('say what is overdue, withdrawn, impossible, or has no record', () => {
     expect(rowsAt('17:13', [arrived, handbrake, entryAt('note', '17:12', { note: 'x' })])[1]?.done).toBe(
       'overdue',

@@ -76,8 +76,9 @@ function stepRow(step: StepNow, turn: TurnNow, isNext: boolean): StepRow {
 function knownOf(step: StepNow): string {
   if (step.source === null) return '';
   const who = step.saidBy ?? step.by;
-  const doubt = step.state === 'in-question' ? ', in question' : '';
-  return `${SOURCE_WORDS[step.source]}${who === null ? '' : `, ${surname(who)}`}${doubt}`;
+  // What is in question comes first: the column is narrow, and cuts off at its end.
+  const doubt = step.state === 'in-question' ? 'in question, ' : '';
+  return `${doubt}${SOURCE_WORDS[step.source]}${who === null ? '' : `, ${surname(who)}`}`;
 }
 
 const surname = (name: string): string => name.trim().split(/\s+/).at(-1) ?? name;
