@@ -32,7 +32,7 @@ export function OffCrewSecond({
         <SecondBar onRecord={() => ways.onRecord(act, label, null)}>
           {isAnnul
             ? `Annulled: train ${train}. ${act.reason}`
-            : `Taken down: blue signal, track ${turn.track ?? 'not known'}`}
+            : `Blue signal taken down, track ${turn.track ?? 'not known'}`}
         </SecondBar>
         {!isAnnul && turn.blueSignal !== null && (
           <p>
