@@ -297,7 +297,7 @@ describe('the phone of somebody who is not of a crew', () => {
     await touch(/Blue signal down/);
     expect(sent(app)).toEqual([]);
     const second = screen.getByRole('region', { name: 'Second touch' });
-    fireEvent.click(within(second).getByRole('button', { name: /Taken down: blue signal, track 3/ }));
+    fireEvent.click(within(second).getByRole('button', { name: /Blue signal taken down, track 3/ }));
     await pass(200);
     expect(sent(app)[0]).toMatchObject({ kind: 'blue-signal-down' });
   });
