@@ -38,7 +38,7 @@ export function CorrectionsView({ terminal, onOpen }: CorrectionsViewProps) {
           ]}
         />
         <p className="muted">
-          Asked for after a train left. Nobody decides on their own; the first entry stays in the log.
+          Asked for after a train left. Nobody decides on their own request; the first entry stays in the log.
         </p>
       </div>
       {error !== null && data === undefined && <ErrorState error={error} onRetry={() => void refetch()} />}

@@ -30,11 +30,12 @@ function readingRow(old: WireReading | null, changed: WireReading | null, unchan
   return [{ name: 'Read off', recorded: old === null ? 'nothing' : readingText(old), askedFor }];
 }
 
-/** "2: 1408, 1412", "110 psi", "90 to 88 psi in 60 s". */
+/** "2 handbrakes, cars 1408, 1412", "110 psi", "90 to 88 psi in 60 s". */
 export function readingText({ count, cars = [], brakePipePsi, p0, p1, seconds }: WireReading): string {
-  const named = cars.length === 0 ? '' : `: ${cars.join(', ')}`;
+  const brakes = count === undefined ? '' : `${count} ${count === 1 ? 'handbrake' : 'handbrakes'}`;
+  const named = cars.length === 0 ? '' : `${cars.length === 1 ? 'car' : 'cars'} ${cars.join(', ')}`;
   const parts = [
-    count === undefined ? cars.join(', ') : `${count}${named}`,
+    [brakes, named].filter(Boolean).join(', '),
     brakePipePsi === undefined ? '' : `${brakePipePsi} psi`,
     p0 === undefined || p1 === undefined ? '' : `${p0} to ${p1} psi`,
     seconds === undefined ? '' : `in ${seconds} s`,
