@@ -1,13 +1,6 @@
-import { useState, type ReactNode } from 'react';
+import type { ReactNode } from 'react';
 import { tieUpReasons } from '../model/reasons';
-import {
-  emptyTieUp,
-  leftHandbrakes,
-  leftWords,
-  securementGaps,
-  tieUpWaitsFor,
-  type TieUpForm,
-} from '../model/tie-up';
+import { leftHandbrakes, leftWords, securementGaps, tieUpWaitsFor, type TieUpForm } from '../model/tie-up';
 import type { ActWays } from './act-ways';
 import { Foot } from './foot';
 import styles from './phone-parts.module.css';
@@ -18,25 +11,32 @@ import { TieUpHandbrakes } from './tie-up-handbrakes';
 import { Caution } from '../../../components/caution';
 import { useTurnScene } from './turn-context';
 import { UnsentNotice } from './unsent-notice';
-import { useReason } from './use-reason';
+import type { useReason } from './use-reason';
+
+interface TieUpPlaceProps {
+  ways: ActWays;
+  doneBar: ReactNode;
+  form: TieUpForm;
+  onForm: (form: TieUpForm) => void;
+  reasoned: ReturnType<typeof useReason>;
+}
 
 /** What a set is left with: handbrakes by car, lights and doors, what is bad, its air. Open securement asks for a reason. */
-export function TieUpPlace({ ways, doneBar }: { ways: ActWays; doneBar: ReactNode }) {
+export function TieUpPlace({ ways, doneBar, form, onForm, reasoned }: TieUpPlaceProps) {
   const { turn, steps } = useTurnScene();
-  const [form, setForm] = useState<TieUpForm>(emptyTieUp);
-  const { reason, field } = useReason();
+  const { reason, field } = reasoned;
   const gaps = securementGaps(turn, steps, form);
   return (
     <>
       <div className={styles.main}>
         <TieUpHead />
         <UnsentNotice />
-        <TieUpHandbrakes form={form} onForm={setForm} />
+        <TieUpHandbrakes form={form} onForm={onForm} />
         {gaps.length > 0 && <OpenSecurement gaps={gaps} />}
         {gaps.length > 0 && <ReasonField reasons={tieUpReasons} {...field} />}
-        <TieUpChecks form={form} onForm={setForm} />
+        <TieUpChecks form={form} onForm={onForm} />
         <TieUpDefects onDefect={() => ways.onGo({ kind: 'defect' })} />
-        <TieUpAir form={form} onForm={setForm} />
+        <TieUpAir form={form} onForm={onForm} />
         <Caution>
           Records how you left the set. Whether it stands secured is decided by your rules, the law in force
           and qualified people.

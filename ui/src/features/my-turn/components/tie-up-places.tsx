@@ -7,10 +7,13 @@ import { DoneBar } from './done-bar';
 import { NotePlace } from './note-place';
 import styles from './phone-parts.module.css';
 import type { Place } from './place';
+import { emptyTieUp, type TieUpForm } from '../model/tie-up';
 import { TieUpPlace } from './tie-up-place';
 import { TiedUp } from './tied-up';
 import { useTurnScene } from './turn-context';
 import { useDone } from './use-done';
+import { useTopOfPlace } from './use-places';
+import { useReason } from './use-reason';
 
 /** The page of a tie-up and the pages behind its buttons. */
 export function TieUpPlaces() {
@@ -18,6 +21,11 @@ export function TieUpPlaces() {
   const outbox = useOutbox().state;
   const { done, keep, undo, endUndo } = useDone();
   const [place, setPlace] = useState<Place>({ kind: 'act' });
+  // Kept here, so that a defect reported half-way takes nothing of it away.
+  const [form, setForm] = useState<TieUpForm>(emptyTieUp);
+  const reason = useReason();
+  const isTiedUp = (turn.tiedUp ?? null) !== null || done?.label.startsWith('Tied up') === true;
+  useTopOfPlace(`${place.kind} ${isTiedUp}`);
   const toAct = (): void => setPlace({ kind: 'act' });
   const ways: ActWays = {
     onRecord: (draft, label, earlier) => {
@@ -47,6 +55,6 @@ export function TieUpPlaces() {
         />
       </div>
     );
-  const isTiedUp = (turn.tiedUp ?? null) !== null || done?.label.startsWith('Tied up') === true;
-  return isTiedUp ? <TiedUp ways={ways} doneBar={bar} /> : <TieUpPlace ways={ways} doneBar={bar} />;
+  if (isTiedUp) return <TiedUp ways={ways} doneBar={bar} />;
+  return <TieUpPlace ways={ways} doneBar={bar} form={form} onForm={setForm} reasoned={reason} />;
 }

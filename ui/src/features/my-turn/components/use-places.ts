@@ -69,7 +69,7 @@ export function usePlaces(): Places {
 }
 
 /** Each place begins at its top. Before the parts of the page look where they stand: a number pad may then bring itself into sight. */
-function useTopOfPlace(shownKey: string): void {
+export function useTopOfPlace(shownKey: string): void {
   useLayoutEffect(() => {
     window.scrollTo({ top: 0 });
   }, [shownKey]);

@@ -10,6 +10,7 @@ import { act, fireEvent, screen } from '@testing-library/react';
 import { afterEach, beforeEach, vi } from 'vitest';
 import { FakeServer, type FakeRequest } from '../../../testing/fake-server';
 import { renderApp, type RenderedApp } from '../../../testing/render-app';
+import { TieUpScreen } from '../components/tie-up-screen';
 import { TurnScreen } from '../components/turn-screen';
 import { knownTurn } from '../model/known-turn';
 import { asWireEntry } from '../model/wire-entries';
@@ -82,18 +83,19 @@ const settings: WireTerminalSettings = {
   changedBy: null,
 };
 
-/** The page of a turn at 17:22:41, longer than a second after it came up. */
+/** The page of a turn, or of its tie-up, at 17:22:41, longer than a second after it came up. */
 export async function openTurn(
   turn: WireTurn,
   person: SignedInPerson = conductor,
   entries: WireEntry[] = [],
-  { briefingRequired = false }: { briefingRequired?: boolean } = {},
+  { briefingRequired = false, isTieUp = false }: { briefingRequired?: boolean; isTieUp?: boolean } = {},
 ) {
   const server = takingServer(turn, entries, person).on('GET', '/api/terminals/:code/settings', {
     ...settings,
     briefingRequired,
   });
-  const app = renderApp(<TurnScreen turnId={turn.id} />, { person, server });
+  const Page = isTieUp ? TieUpScreen : TurnScreen;
+  const app = renderApp(<Page turnId={turn.id} />, { person, server });
   await pass(4000);
   return app;
 }
