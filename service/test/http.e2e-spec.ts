@@ -220,6 +220,9 @@ describe('the log', () => {
     ['/api/board?terminal=HBR', '/api/board'],
     ['/api/links/secret-token', '/api/links/…'],
     ['/link/secret-token?x=1', '/link/…'],
+    ['/api/takings/secret-token', '/api/takings/…'],
+    ['/t/secret-token', '/t/…'],
+    ['/turns/t1', '/turns/t1'],
   ])('%s is told as %s', (url, told) => {
     expect(pathForLog(url)).toBe(told);
   });
